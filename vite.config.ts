@@ -47,7 +47,10 @@ function offlineCache(): Plugin {
         ahead: files.filter((file) => !cachedWhenUsed.test(file)),
         whenUsed: files.filter((file) => cachedWhenUsed.test(file)),
       };
-      writeFileSync(join(siteFolder, 'sw.js'), source.replace('__BUILD__', () => JSON.stringify(facts)));
+      writeFileSync(
+        join(siteFolder, 'sw.js'),
+        source.replace('__BUILD__', () => JSON.stringify(facts)),
+      );
     },
   };
 }

@@ -1,0 +1,18 @@
+import { expect, test } from 'playwright/test';
+
+test('after one visit the page opens without a connection', async ({ page, context }) => {
+  await page.goto('./');
+  await page.evaluate(async () => {
+    const { serviceWorker } = navigator;
+    await serviceWorker.ready;
+    if (!serviceWorker.controller) {
+      await new Promise((taken) => serviceWorker.addEventListener('controllerchange', taken, { once: true }));
+    }
+  });
+  const failures: string[] = [];
+  page.on('requestfailed', (request) => failures.push(request.url()));
+  await context.setOffline(true);
+  await page.reload();
+  await expect(page.getByRole('main')).toBeVisible();
+  expect(failures).toEqual([]);
+});
