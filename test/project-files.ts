@@ -7,7 +7,7 @@ const notOurs = new Set(['node_modules', 'dist', '.git', '.out']);
 
 function walk(folder: string): string[] {
   return readdirSync(folder, { withFileTypes: true }).flatMap((entry) => {
-    if (notOurs.has(entry.name)) return [];
+    if (notOurs.has(entry.name) || entry.name.endsWith('.log')) return [];
     const path = join(folder, entry.name);
     if (entry.isDirectory()) return walk(path);
     return entry.isFile() ? [relative(top, path).split(sep).join('/')] : [];
