@@ -37,7 +37,7 @@ function offlineCache(): Plugin {
   return {
     name: 'offline-cache',
     apply: 'build',
-    closeBundle() {
+    writeBundle() {
       const files = filesBelow(siteFolder).filter((file) => file !== 'sw.js');
       const source = readFileSync(resolve(top, 'workers/offline.js'), 'utf8');
       const hash = createHash('sha256').update(source);

@@ -1,6 +1,6 @@
 // Finds a Chromium for the browser tests, and fetches one where that is possible without asking.
 import { execFileSync, spawnSync } from 'node:child_process';
-import { existsSync } from 'node:fs';
+import { existsSync, realpathSync } from 'node:fs';
 import { delimiter, join } from 'node:path';
 import { chromium } from 'playwright';
 
@@ -99,7 +99,7 @@ export function requireBrowser() {
   process.exit(1);
 }
 
-if (process.argv[1] && import.meta.filename === process.argv[1]) {
+if (process.argv[1] && import.meta.filename === realpathSync(process.argv[1])) {
   const path = requireBrowser();
   const version =
     process.platform === 'win32' ? '' : execFileSync(path, ['--version'], { stdio: ['ignore', 'pipe', 'ignore'] });
