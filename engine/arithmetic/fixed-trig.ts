@@ -1,0 +1,175 @@
+import { absolute, bitLength, numberFromFixed, shiftRounded } from './fixed';
+import { piFixed } from './fixed-constants';
+import { chunkBits, LONG_BITS, planPowers, planSeries, sumPlan, workingBits } from './fixed-working';
+import { memoiseBounded } from './memo';
+
+export interface SinCos {
+  readonly sin: bigint;
+  readonly cos: bigint;
+}
+
+/** Number of terms of the cosine and sine series at an argument below 2^-reduction. */
+function trigonometricTerms(bits: number, reduction: number): number {
+  let k = 0;
+  for (let reached = 0; reached <= bits + 2; k++) reached += 2 * reduction + Math.log2((2 * k + 1) * (2 * k + 2));
+  return k;
+}
+
+interface TrigonometricTables {
+  readonly chunk: number;
+  /** (cos, sin)(i 2^-(chunk l)), l = 1, 2, 3. */
+  readonly levels: readonly [readonly SinCos[], readonly SinCos[], readonly SinCos[]];
+  /** 1/(2k)! and 1/(2k+1)! with alternating signs, for Horner's scheme. */
+  readonly cosine: readonly bigint[];
+  readonly sine: readonly bigint[];
+}
+
+/** sum (-1)^k y^k / (first (first+1) ... ) coefficients 1/(2k + offset)! by one exact recurrence. */
+function seriesCoefficients(working: number, terms: number, offset: number): bigint[] {
+  const list: bigint[] = [];
+  let value = 1n << BigInt(working + 16);
+  for (let k = 0; k < terms; k++) {
+    list.push(k % 2 === 0 ? value >> 16n : -(value >> 16n));
+    value /= BigInt((2 * k + 1 + offset) * (2 * k + 2 + offset));
+  }
+  return list;
+}
+
+function rotationTable(working: number, place: number, count: number): SinCos[] {
+  const bits = working + 32;
+  const shift = BigInt(bits);
+  const one = 1n << shift;
+  let c = one;
+  let s = 0n;
+  for (let term = one >> BigInt(place), n = 1; term !== 0n; n++) {
+    if (n % 2 === 1) s += n % 4 === 1 ? term : -term;
+    else c += n % 4 === 0 ? term : -term;
+    term = (term >> BigInt(place)) / BigInt(n + 1);
+  }
+  const table: SinCos[] = [];
+  for (let i = 0, x = one, y = 0n; i < count; i++) {
+    table.push({ cos: x >> 32n, sin: y >> 32n });
+    [x, y] = [(x * c - y * s) >> shift, (x * s + y * c) >> shift];
+  }
+  return table;
+}
+
+const trigonometricTables = memoiseBounded(16, (working: number): TrigonometricTables => {
+  const chunk = chunkBits(working);
+  const count = 1 << chunk;
+  const terms = trigonometricTerms(working, 3 * chunk);
+  const long = working > LONG_BITS;
+  return {
+    chunk,
+    levels: [
+      // |r| <= pi/4 + 2^-20 after the reduction: only these entries of the first level are reached.
+      rotationTable(working, chunk, Math.ceil(count * 0.79) + 1),
+      rotationTable(working, 2 * chunk, count),
+      rotationTable(working, 3 * chunk, count),
+    ],
+    cosine: long ? [] : seriesCoefficients(working, terms, 0),
+    sine: long ? [] : seriesCoefficients(working, terms, 1),
+  };
+});
+
+const trigonometricPlans = memoiseBounded(16, (working: number) => {
+  const terms = trigonometricTerms(working, 3 * chunkBits(working));
+  return {
+    cosine: planSeries(terms, -1n, (k) => BigInt(2 * k - 1) * BigInt(2 * k)),
+    sine: planSeries(terms, -1n, (k) => BigInt(2 * k) * BigInt(2 * k + 1)),
+  };
+});
+
+/** cos y and sin y for 0 <= y < 2^-(3 chunk); error below 8 ulps. */
+function sinCosOfRest(y: bigint, working: number, tables: TrigonometricTables): SinCos {
+  const shift = BigInt(working);
+  const square = (y * y) >> shift;
+  if (working > LONG_BITS) {
+    const { cosine, sine } = trigonometricPlans(working);
+    const powers = planPowers(square, cosine.block, working);
+    return { cos: sumPlan(cosine, powers, working), sin: (y * sumPlan(sine, powers, working)) >> shift };
+  }
+  const { cosine, sine } = tables;
+  let c = 0n;
+  let s = 0n;
+  for (let k = cosine.length - 1; k >= 0; k--) {
+    c = (cosine[k] as bigint) + ((square * c) >> shift);
+    s = (sine[k] as bigint) + ((square * s) >> shift);
+  }
+  return { cos: c, sin: (y * s) >> shift };
+}
+
+/** sin and cos of x with `working` fraction bits (from workingBits); error below 40 working ulps. */
+export function sinCosWorking(x: bigint, working: number): SinCos {
+  // pi/2 with as many more bits as the quotient has, so that the multiple subtracted is right to one working ulp.
+  const extra = Math.max(16, bitLength(x) - working + 8);
+  const halfPi = piFixed(working + extra + 1) >> 2n;
+  const wide = x << BigInt(extra);
+  const close = Math.round(numberFromFixed(x, working) * (2 / Math.PI));
+  const quotient = Math.abs(close) < 2 ** 20 ? BigInt(close) : (2n * wide + halfPi) / (2n * halfPi);
+  const r = (wide - quotient * halfPi) >> BigInt(extra);
+  const { cos, sin } = sinCosReduced(absolute(r), working);
+  const signed = r < 0n ? -sin : sin;
+  switch (Number(BigInt.asUintN(2, quotient))) {
+    case 0:
+      return { sin: signed, cos };
+    case 1:
+      return { sin: cos, cos: -signed };
+    case 2:
+      return { sin: -signed, cos: -cos };
+    default:
+      return { sin: -cos, cos: signed };
+  }
+}
+
+/** sin and cos for 0 <= r <= pi/4 (a little more is allowed): two table rotations and the series, then one more rotation. */
+function sinCosReduced(r: bigint, working: number): SinCos {
+  const tables = trigonometricTables(working);
+  const { chunk, levels } = tables;
+  const mask = (1 << chunk) - 1;
+  const shift = BigInt(working);
+  const top = Number(r >> BigInt(working - 3 * chunk));
+  const a = levels[0][top >> (2 * chunk)] as SinCos;
+  const b = levels[1][(top >> chunk) & mask] as SinCos;
+  const c = levels[2][top & mask] as SinCos;
+  const d = sinCosOfRest(BigInt.asUintN(working - 3 * chunk, r), working, tables);
+  const abCos = (a.cos * b.cos - a.sin * b.sin) >> shift;
+  const abSin = (a.cos * b.sin + a.sin * b.cos) >> shift;
+  const cdCos = (c.cos * d.cos - c.sin * d.sin) >> shift;
+  const cdSin = (c.cos * d.sin + c.sin * d.cos) >> shift;
+  return {
+    cos: (abCos * cdCos - abSin * cdSin) >> shift,
+    sin: (abCos * cdSin + abSin * cdCos) >> shift,
+  };
+}
+
+/** sin x and cos x with `bits` fraction bits for any x; |error| <= 1 ulp each. */
+export function sinCosFixed(x: bigint, bits: number): SinCos {
+  const working = workingBits(bits);
+  const { sin, cos } = sinCosWorking(x << BigInt(working - bits), working);
+  return { sin: shiftRounded(sin, working - bits), cos: shiftRounded(cos, working - bits) };
+}
+
+/**
+ * tan x with `bits` fraction bits; |error| <= max(1, tan^2 x) ulp (the inherent growth with one ulp of x).
+ * x is never an odd multiple of pi/2, being a fraction; the quotient of two numbers that both vanish is not met.
+ */
+export function tanFixed(x: bigint, bits: number): bigint {
+  return quotientOf(x, bits, (value) => [value.sin, value.cos]);
+}
+
+/** cot x with `bits` fraction bits for x != 0; |error| <= max(1, cot^2 x) ulp. */
+export function cotFixed(x: bigint, bits: number): bigint {
+  return quotientOf(x, bits, (value) => [value.cos, value.sin]);
+}
+
+function quotientOf(x: bigint, bits: number, parts: (value: SinCos) => [bigint, bigint]): bigint {
+  for (let guard = 6; ; guard *= 2) {
+    const working = bits + guard;
+    const [numerator, denominator] = parts(sinCosFixed(x << BigInt(guard), working));
+    // A small denominator has lost digits: more guard bits until 2^6 ulps of it are noise of the quotient's last ulp.
+    if (bitLength(denominator) + guard >= working + 6 && bitLength(denominator) > 8) {
+      return shiftRounded((numerator << BigInt(working)) / denominator, guard);
+    }
+  }
+}
