@@ -92,10 +92,14 @@ export function expComplex(z: FixedComplex, bits: number): FixedComplex {
   return { re: shiftRounded(mantissa.re, -exponent), im: shiftRounded(mantissa.im, -exponent) };
 }
 
+/** log |z| with `bits` fraction bits for z != 0 with `scale` fraction bits; |error| <= 1 ulp. */
+export function logModulus(z: FixedComplex, scale: number, bits: number): bigint {
+  return shiftRounded(logScaled(z.re * z.re + z.im * z.im, 2 * scale, bits + 1), 2);
+}
+
 /** Principal logarithm of z != 0: imaginary part in (-pi, pi], +pi on the negative real axis. |error| <= 1 ulp a part. */
 export function logComplex(z: FixedComplex, bits: number): FixedComplex {
-  const norm = z.re * z.re + z.im * z.im;
-  return { re: logScaled(norm, 2 * bits, bits + 1) >> 2n, im: atan2Fixed(z.im, z.re, bits) };
+  return { re: logModulus(z, bits, bits), im: atan2Fixed(z.im, z.re, bits) };
 }
 
 /** Principal square root (real part >= 0; on the negative real axis the positive imaginary root); |error| <= 2 ulps a part. */
