@@ -250,10 +250,7 @@ function monomialKey(factors: Term['factors']): string {
 function collect(into: Map<string, Term>, term: Term): void {
   const key = monomialKey(term.factors);
   const present = into.get(key);
-  into.set(
-    key,
-    present ? { coefficient: present.coefficient.add(term.coefficient), factors: present.factors } : term,
-  );
+  into.set(key, present ? { coefficient: present.coefficient.add(term.coefficient), factors: present.factors } : term);
 }
 
 function multiplyTerms(a: Term, b: Term): readonly Term[] {
@@ -308,7 +305,17 @@ function substituteAtom(atom: Atom, power: number, values: (name: string) => For
 }
 
 /** The value of f(0) where it is rational. */
-const AT_ZERO: Partial<Record<CallName, 0 | 1>> = { sqrt: 0, exp: 1, sin: 0, cos: 1, tan: 0, sinh: 0, cosh: 1, tanh: 0, abs: 0 };
+const AT_ZERO: Partial<Record<CallName, 0 | 1>> = {
+  sqrt: 0,
+  exp: 1,
+  sin: 0,
+  cos: 1,
+  tan: 0,
+  sinh: 0,
+  cosh: 1,
+  tanh: 0,
+  abs: 0,
+};
 
 function reduceCall(name: CallName, args: readonly Form[]): Form {
   const x = args[0] as Form;

@@ -15,10 +15,7 @@ export class Gaussian {
   }
 
   static of(re: Rational | number | bigint, im: Rational | number | bigint = Rational.zero): Gaussian {
-    return new Gaussian(
-      re instanceof Rational ? re : Rational.of(re),
-      im instanceof Rational ? im : Rational.of(im),
-    );
+    return new Gaussian(re instanceof Rational ? re : Rational.of(re), im instanceof Rational ? im : Rational.of(im));
   }
 
   add(other: Gaussian): Gaussian {

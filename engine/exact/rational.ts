@@ -120,9 +120,7 @@ export class Rational {
     const n = Number(this.numerator);
     const d = Number(this.denominator);
     if (Number.isFinite(n) && Number.isFinite(d)) return n / d;
-    const excess = BigInt(
-      Math.max(this.numerator.toString(2).length, this.denominator.toString(2).length) - 1000,
-    );
+    const excess = BigInt(Math.max(this.numerator.toString(2).length, this.denominator.toString(2).length) - 1000);
     return Number(this.numerator >> excess) / Number(this.denominator >> excess);
   }
 

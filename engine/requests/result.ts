@@ -156,14 +156,7 @@ export interface RequestCard extends CardBase {
   readonly parameters: readonly string[];
 }
 
-export type RequestKind =
-  | 'formula'
-  | 'value'
-  | 'plot'
-  | 'representation'
-  | 'integrate'
-  | 'extremize'
-  | 'compare';
+export type RequestKind = 'formula' | 'value' | 'plot' | 'representation' | 'integrate' | 'extremize' | 'compare';
 
 export interface DecimalComplex {
   readonly re: string;

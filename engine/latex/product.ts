@@ -1,0 +1,109 @@
+import { Form } from '../exact/form';
+import type { Notation, Printer } from '../functions/special-function';
+import { functions } from '../functions/table';
+import { type Factor, WEIGHT } from '../product/factor';
+import type { TheoryGroup } from '../theory/theory';
+import type { TheoryWeights } from '../theory/weights';
+import { formLatex } from './form';
+import { printWeights } from './weights';
+
+/** A stretch of a formula and the multiplets it stems from. */
+export interface Piece {
+  readonly latex: string;
+  readonly from: readonly string[];
+}
+
+export const printer: Printer = { form: formLatex };
+
+/**
+ * A product in LaTeX, a piece for each set of weights and origin. `style` is `function` for special functions in a
+ * notation, `modes` for the infinite products that they regularise.
+ */
+export function productLatex(
+  groups: readonly TheoryGroup[],
+  product: readonly Factor<TheoryWeights>[],
+  style: { readonly kind: 'function'; readonly notation: number } | { readonly kind: 'modes' },
+): Piece[] {
+  return gatherPieces(product).flatMap((factors) => pieceLatex(groups, factors, style));
+}
+
+type Style = Parameters<typeof productLatex>[2];
+
+/** Factors over the same weights and from the same multiplets are printed under one product sign. */
+function gatherPieces(product: readonly Factor<TheoryWeights>[]): Factor<TheoryWeights>[][] {
+  const found = new Map<string, Factor<TheoryWeights>[]>();
+  for (const factor of product) {
+    const key = `${factor.weights?.key ?? ''}|${factor.half}|${factor.from.join(',')}`;
+    const present = found.get(key);
+    if (present) present.push(factor);
+    else found.set(key, [factor]);
+  }
+  return [...found.values()];
+}
+
+function pieceLatex(groups: readonly TheoryGroup[], factors: readonly Factor<TheoryWeights>[], style: Style): Piece[] {
+  const first = factors[0] as Factor<TheoryWeights>;
+  const printed =
+    first.weights === null ? [{ sign: '', weight: Form.zero }] : printWeights(groups, first.weights, first.half);
+  return printed.map(({ sign, weight }) => {
+    const above: Single[] = [];
+    const below: Single[] = [];
+    for (const factor of factors) {
+      const argument = factor.argument.substitute((name) => (name === WEIGHT ? weight : null));
+      const latex = functionLatex(factor, argument, style);
+      (factor.power < 0 ? below : above).push({
+        latex,
+        power: Math.abs(factor.power),
+        letter: factor.name === 'exponential',
+      });
+    }
+    return { latex: sign + quotient(above, below), from: first.from };
+  });
+}
+
+interface Single {
+  readonly latex: string;
+  readonly power: number;
+  readonly letter: boolean;
+}
+
+function functionLatex(factor: Factor, argument: Form, style: Style): string {
+  const declared = functions[factor.name];
+  if (style.kind === 'modes' && declared.modes !== null) return declared.modes(argument, factor.parameters, printer);
+  const index = style.kind === 'function' && !declared.elementary ? style.notation : 0;
+  const notation = (declared.notations[index] ?? declared.notations[0]) as Notation;
+  return notation.latex(argument, factor.parameters, printer);
+}
+
+function quotient(above: readonly Single[], below: readonly Single[]): string {
+  const top = juxtaposed(above);
+  if (below.length === 0) return top;
+  return `\\frac{${top === '' ? '1' : top}}{${juxtaposed(below)}}`;
+}
+
+/** Leading integers of factors to the first power are multiplied together: 2 sinh x 2 sinh y is 4 sinh x sinh y. */
+function juxtaposed(factors: readonly Single[]): string {
+  let coefficient = 1;
+  const parts = factors.map(({ latex, power }) => {
+    if (power !== 1) return raised(latex, power);
+    const leading = /^(\d+)(?![\d.])\s*(?=\\)/.exec(latex);
+    if (!leading) return latex;
+    coefficient *= Number(leading[1]);
+    return latex.slice(leading[0].length);
+  });
+  const rest = parts.join('\\,');
+  return coefficient === 1 ? rest : `${coefficient}${rest}`;
+}
+
+function raised(latex: string, power: number): string {
+  return /^[A-Za-z0-9]$/.test(latex) ? `${latex}^{${power}}` : `\\left[${latex}\\right]^{${power}}`;
+}
+
+/** The whole formula as one display: short ones on a line, long ones aligned with a piece a line. */
+export function displayLatex(lead: string, pieces: readonly Piece[]): string {
+  if (pieces.length === 0) return `${lead}1`;
+  if (pieces.length <= 2) return lead + pieces.map(({ latex }) => latex).join('\\;');
+  const [first, ...rest] = pieces.map(({ latex }) => latex);
+  const lines = [`${lead.replace(/=$/, '={}&')}${first}`, ...rest.map((latex) => `&\\times ${latex}`)];
+  return `\\begin{aligned}\n${lines.join(' \\\\\n')}\n\\end{aligned}`;
+}

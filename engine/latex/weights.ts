@@ -1,0 +1,115 @@
+import { Form } from '../exact/form';
+import type { IndexPattern, PatternRelation, PatternTerm } from '../lie/index-pattern';
+import type { TheoryGroup } from '../theory/theory';
+import type { TheoryWeights } from '../theory/weights';
+import { EITHER_SIGN } from './form';
+import { TRACE } from './symbol';
+
+/** A product over weights as it is printed: the product signs, and the weight they run over. */
+export interface PrintedWeights {
+  /** `\prod_{a=1}^{2}\prod_{j=1}^{3}`; empty where the set is a single weight. */
+  readonly sign: string;
+  /** w.sigma + w.m with indexed coordinates, as a form in symbols made for printing. */
+  readonly weight: Form;
+}
+
+/**
+ * Index letters, a different run for each group: i is left to the imaginary unit, and letters that name masses and
+ * integers in these formulas (m, n, k) come last.
+ */
+const LETTERS: readonly string[] = ['abcdefgh', 'jlpqruvw', 'ABCDEFGH', 'JKLMNPQR', 'stxyzcde', 'STUVWXYZ'];
+
+/** How each choice of index patterns of a set is printed; several for exceptional groups. */
+export function printWeights(
+  groups: readonly TheoryGroup[],
+  weights: TheoryWeights,
+  half: boolean,
+): readonly PrintedWeights[] {
+  let printed: PrintedWeights[] = [{ sign: '', weight: Form.zero }];
+  weights.parts.forEach(({ group, orbit }, k) => {
+    const patterns = half && k === 0 ? orbit.halfPatterns() : orbit.patterns();
+    printed = printed.flatMap((before) =>
+      patterns.map((pattern) => {
+        const part = printPattern(groups[group] as TheoryGroup, group, pattern);
+        return { sign: joinSigns(before.sign, part.sign), weight: before.weight.add(part.weight) };
+      }),
+    );
+  });
+  return printed;
+}
+
+function joinSigns(a: string, b: string): string {
+  return a === PLUS_MINUS && b === PLUS_MINUS ? a : a + b;
+}
+
+const PLUS_MINUS = '\\prod_{\\pm}';
+
+function printPattern(group: TheoryGroup, place: number, pattern: IndexPattern): PrintedWeights {
+  const letters = LETTERS[place % LETTERS.length] as string;
+  const letter = new Map(pattern.indices.map(({ name }, k) => [name, letters.charAt(k)]));
+  const terms = pattern.terms.map((term) => {
+    const symbol = termSymbol(group, term, letter);
+    const signed = term.sign === 'either' ? symbol.mul(Form.symbol(EITHER_SIGN)) : symbol;
+    return signed.scale(term.coefficient);
+  });
+  return { sign: indexSigns(group, pattern, letter) + signChoices(pattern), weight: Form.sum(terms) };
+}
+
+/** sigma_a for an index, sigma_3 for a coordinate, tr sigma for the sum of all. */
+function termSymbol(group: TheoryGroup, term: PatternTerm, letter: ReadonlyMap<string, string>): Form {
+  const stem = stemOf(group);
+  if (term.kind === 'index') return Form.symbol(`${stem}_${letter.get(term.index) ?? term.index}`);
+  if (term.kind === 'coordinate') return Form.symbol(group.coordinates[term.coordinate] as string);
+  if (term.range === group.coordinates.length) return Form.symbol(`${TRACE}${stem}`);
+  const names = group.coordinates.slice(term.offset, term.offset + term.range);
+  return Form.sum(names.map((name) => Form.symbol(name)));
+}
+
+/** The name that all coordinates of a group share. */
+export function stemOf(group: TheoryGroup): string {
+  const first = group.coordinates[0] as string;
+  return group.coordinates.length === 1 ? first : first.replace(/\d+$/, '');
+}
+
+/** Product signs for the indices: ranges where an index is free, relations where they are related. */
+function indexSigns(group: TheoryGroup, pattern: IndexPattern, letter: ReadonlyMap<string, string>): string {
+  const related = new Set(pattern.relations.flatMap(({ indices }) => indices));
+  const free = pattern.indices
+    .filter(({ name }) => !related.has(name))
+    .map(({ name, offset, range }) => `\\prod_{${letter.get(name)}=${offset + 1}}^{${offset + range}}`);
+  if (related.size === 0) return free.join('');
+  const bound = pattern.indices.find(({ name }) => related.has(name));
+  const whole = bound === undefined || bound.range === group.coordinates.length;
+  const range = whole ? null : { from: bound.offset + 1, to: bound.offset + bound.range };
+  return `\\prod_{${relationText(pattern.relations, letter, range)}}${free.join('')}`;
+}
+
+function relationText(
+  relations: readonly PatternRelation[],
+  letter: ReadonlyMap<string, string>,
+  range: { readonly from: number; readonly to: number } | null,
+): string {
+  const name = (index: string): string => letter.get(index) ?? index;
+  const chains = relations.filter(({ kind }) => kind === '<').map(({ indices }) => indices);
+  const parts = chains.map((indices) => {
+    const chain = indices.map(name).join('<');
+    return range === null ? chain : `${range.from}\\le ${chain}\\le ${range.to}`;
+  });
+  for (const { kind, indices } of relations) {
+    if (kind !== '≠') continue;
+    const chained = chains.filter((chain) => chain.every((index) => indices.includes(index)));
+    const inChain = new Set(chained.flat());
+    const loose = indices.filter((index) => !inChain.has(index));
+    if (loose.length === 0) parts.push(chained.map((chain) => chain.map(name).join(',')).join('\\neq '));
+    else if (inChain.size === 0) parts.push(loose.map(name).join('\\neq '));
+    else parts.push(`${loose.map(name).join('\\neq ')}\\neq ${[...inChain].map(name).join(',')}`);
+    if (range !== null && chains.length === 0) parts.push(`${range.from}\\ldots ${range.to}`);
+  }
+  return parts.join(';\\,');
+}
+
+function signChoices(pattern: IndexPattern): string {
+  if (pattern.signs === 'even') return '\\prod_{\\pm,\\text{ even}}';
+  if (pattern.signs === 'odd') return '\\prod_{\\pm,\\text{ odd}}';
+  return pattern.signs === 'all' ? PLUS_MINUS : '';
+}

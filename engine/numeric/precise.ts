@@ -1,0 +1,133 @@
+import { addBalls, type Ball, expBall, multiplyBallByInteger } from '../arithmetic/ball';
+import { formDouble } from '../arithmetic/form-double';
+import { formFixed } from '../arithmetic/form-fixed';
+import type { Form } from '../exact/form';
+import type { ExactParameter, FunctionName, PreciseLog } from '../functions/special-function';
+import { functions } from '../functions/table';
+import { exactOrder } from '../product/divisor';
+import { expand, type Product } from '../product/factor';
+
+/** Digits that a request may ask for. */
+export const MAXIMAL_DIGITS = 1000;
+/** Working precision is not raised beyond this many bits above what the digits need. */
+const MAXIMAL_GUARD = 4096;
+
+export type PreciseValue =
+  | { readonly kind: 'value'; readonly value: Ball; readonly log: Ball; readonly route: string | null }
+  | { readonly kind: 'zero' | 'pole'; readonly order: number }
+  /** Zeros and poles of single factors meet: the product has a limit there, but no factor-by-factor value. */
+  | { readonly kind: 'meeting'; readonly order: number }
+  | { readonly kind: 'indistinct'; readonly argument: string }
+  | { readonly kind: 'unset'; readonly names: readonly string[] }
+  | { readonly kind: 'unreachable' };
+
+/** Which algorithm evaluates the functions: their main one, or the independent second one where there is one. */
+export type Route = 'main' | 'second';
+
+/** One function value of a product: equal ones are evaluated once. */
+export interface Entry {
+  readonly name: FunctionName;
+  readonly argument: Form;
+  readonly parameters: readonly Form[];
+  readonly power: number;
+}
+
+/**
+ * The product at exactly known values of its symbols. The relative error of the value is below 10^-digits; the error
+ * carried by the balls adds up what every function states for its own value and argument.
+ */
+export function evaluatePrecise(
+  product: Product,
+  values: (name: string) => Form | null,
+  digits: number,
+  route: Route = 'main',
+): PreciseValue {
+  const entries = collectEntries(product, values);
+  const names = [...new Set(entries.flatMap((e) => [e.argument, ...e.parameters].flatMap((f) => f.symbols())))];
+  if (names.length > 0) return { kind: 'unset', names };
+  let order = 0;
+  let meets = false;
+  for (const entry of entries) {
+    const own = exactOrder(entry.name, entry.argument, entry.parameters) * entry.power;
+    order += own;
+    if (own !== 0) meets = true;
+  }
+  if (order !== 0) return { kind: order > 0 ? 'zero' : 'pole', order: Math.abs(order) };
+  if (meets) return { kind: 'meeting', order: 0 };
+  return sumLogs(entries, digits, route);
+}
+
+/** All weights written out at the values, equal arguments collected. */
+export function collectEntries(product: Product, values: (name: string) => Form | null): Entry[] {
+  const collected = new Map<string, Entry>();
+  for (const factor of expand(product)) {
+    const argument = factor.argument.substitute(values);
+    const parameters = factor.parameters.map((p) => p.substitute(values));
+    const key = [factor.name, argument.key, ...parameters.map((p) => p.key)].join('|');
+    const power = factor.power + (collected.get(key)?.power ?? 0);
+    collected.set(key, { name: factor.name, argument, parameters, power });
+  }
+  return [...collected.values()].filter(({ power }) => power !== 0);
+}
+
+function sumLogs(entries: readonly Entry[], digits: number, route: Route): PreciseValue {
+  const needed = Math.ceil(digits * Math.log2(10)) + 4;
+  let guard = 24;
+  while (guard <= MAXIMAL_GUARD) {
+    const bits = needed + guard;
+    const attempt = logAt(entries, bits, route);
+    if (attempt.kind === 'refused') return attempt.why;
+    if (attempt.kind === 'value') {
+      const { log } = attempt;
+      const excess = log.error.toString(2).length - guard;
+      if (excess <= 0) {
+        const value = expBall(log, needed + 16);
+        return value === null ? { kind: 'unreachable' } : { kind: 'value', value, log, route: attempt.route };
+      }
+      guard += excess + 8;
+    } else guard *= 2;
+  }
+  return stuck(entries);
+}
+
+type Attempt =
+  | { readonly kind: 'value'; readonly log: Ball; readonly route: string | null }
+  | { readonly kind: 'again' }
+  | { readonly kind: 'refused'; readonly why: PreciseValue };
+
+function logAt(entries: readonly Entry[], bits: number, route: Route): Attempt {
+  const precision = 4 * bits + 256;
+  let sum: Ball = { re: 0n, im: 0n, bits, error: 0n };
+  let used: string | null = null;
+  for (const entry of entries) {
+    const argument = formFixed(entry.argument, bits);
+    if (argument === null) return { kind: 'refused', why: { kind: 'unreachable' } };
+    const parameters = entry.parameters.map(exactParameter);
+    const declared = functions[entry.name];
+    const second = route === 'second' ? (declared.crossCheck?.(argument, parameters, bits) ?? null) : null;
+    if (second) used = second.route;
+    const log: PreciseLog = second ? second.log : declared.precise(argument, parameters, bits);
+    if (log.kind === 'indistinct') return { kind: 'again' };
+    if (log.kind !== 'value') {
+      return { kind: 'refused', why: { kind: log.kind, order: log.order * Math.abs(entry.power) } };
+    }
+    const term: Ball = { re: log.re, im: log.im, bits, error: log.error };
+    sum = addBalls(sum, multiplyBallByInteger(term, BigInt(entry.power), precision), precision);
+  }
+  return { kind: 'value', log: sum, route: used };
+}
+
+/** A period for the precise tier. */
+export function exactParameter(form: Form): ExactParameter {
+  const approx = formDouble(form, () => null) ?? { re: Number.NaN, im: Number.NaN };
+  return {
+    square: form.mul(form).toRational(),
+    value: (bits) => formFixed(form, bits) ?? { re: 0n, im: 0n },
+    approx,
+  };
+}
+
+function stuck(entries: readonly Entry[]): PreciseValue {
+  const near = entries.find(({ name }) => functions[name].zeros.length > 0);
+  return near ? { kind: 'indistinct', argument: near.argument.key } : { kind: 'unreachable' };
+}

@@ -1,0 +1,55 @@
+import type { Form } from '../exact/form';
+import type { Source } from '../functions/special-function';
+import type { Geometry } from '../product/chain';
+import type { Product } from '../product/factor';
+import type { SphereRules } from '../theory/rules';
+import type { Multiplet, Theory } from '../theory/theory';
+import type { TheoryWeights } from '../theory/weights';
+
+export type TheoryProduct = Product<TheoryWeights>;
+
+/**
+ * One sphere: its rules, and how multiplets and weights become factors. All conventions of that sphere live in its
+ * file and nowhere else.
+ */
+export interface Sphere extends SphereRules {
+  /** Caption, LaTeX: `S^3_b`. */
+  readonly latex: (theory: Theory) => string;
+  /** Number of supersymmetries when none is typed. */
+  readonly minimalSupersymmetry: number;
+  /** Definitions and values of the geometry symbols, for simplification and evaluation. */
+  readonly geometry: (theory: Theory) => Geometry;
+  /** Product over the roots of the vector multiplet, and over further fields that `supersymmetry` brings. */
+  readonly vector: (theory: Theory) => TheoryProduct;
+  readonly multiplet: (theory: Theory, multiplet: Multiplet) => TheoryProduct;
+  /** Classical contribution: exponentials of polynomials in the Coulomb parameters. */
+  readonly classical: (theory: Theory) => TheoryProduct;
+  /** Every mode before bosons and fermions are paired, as towers; a refusal in words where it is not known. */
+  readonly modes: (theory: Theory) => ModesView;
+  /** Conventions to print under a formula: `Q = b + 1/b`, the measure, signs; LaTeX in `$...$`. */
+  readonly conventions: (theory: Theory) => readonly string[];
+  readonly sources: readonly Source[];
+}
+
+/** A linear factor of the eigenvalues of one field: form in the level `n` and the weight, with its multiplicity. */
+export interface ModeFactor {
+  readonly eigenvalue: Form;
+  /** Polynomial in `n`; positive for modes in the numerator (fermions), negative for bosons. */
+  readonly multiplicity: Form;
+}
+
+/** Modes for each weight of a set and each level n >= start. */
+export interface ModeTower {
+  readonly weights: TheoryWeights | null;
+  readonly half: boolean;
+  readonly power: number;
+  readonly start: number;
+  /** A factor outside the product over levels. */
+  readonly prefactor: Form | null;
+  readonly factors: readonly ModeFactor[];
+  readonly from: readonly string[];
+}
+
+export type ModesView =
+  | { readonly kind: 'modes'; readonly towers: readonly ModeTower[] }
+  | { readonly kind: 'refused'; readonly message: string };

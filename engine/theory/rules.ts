@@ -1,0 +1,22 @@
+import type { Form } from '../exact/form';
+import type { GroupOption, MultipletKind, SphereName } from '../language/tree';
+
+/**
+ * What may be written in a theory on a given sphere. Each sphere's file supplies its own; reading a theory asks these
+ * rules and never which sphere it is.
+ */
+export interface SphereRules {
+  readonly name: SphereName;
+  readonly multiplets: readonly MultipletKind[];
+  /** Squashing parameters: name as typed, geometry symbol, value on the round sphere. All have to be positive. */
+  readonly squashing: readonly { readonly name: string; readonly symbol: string; readonly round: Form }[];
+  readonly options: {
+    readonly gauge: readonly GroupOption['kind'][];
+    readonly flavor: readonly GroupOption['kind'][];
+  };
+  /** Why an option is not in the list, by its word; for the message. */
+  readonly refusals: Readonly<Record<string, string>>;
+  readonly supersymmetries: readonly number[];
+  /** R-charge where the column R is absent, and the only one allowed for multiplets that fix it. */
+  readonly rCharge: (kind: MultipletKind) => { readonly value: Form; readonly fixed: boolean };
+}

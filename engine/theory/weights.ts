@@ -1,0 +1,113 @@
+import { Form } from '../exact/form';
+import { Rational } from '../exact/rational';
+import type { WeightOrbit } from '../lie/orbit';
+import type { Representation } from '../lie/representation';
+import { parseRepresentation } from '../lie/representation';
+import type { Weight, WeightSet } from '../product/factor';
+import type { Theory, TheoryGroup } from './theory';
+
+/** One group's share in a set of weights: an orbit of its Weyl group, or the opposite one. */
+export interface WeightPart {
+  /** Index into the theory's groups. */
+  readonly group: number;
+  readonly orbit: WeightOrbit;
+}
+
+/** A set of weights that a factor runs over, with the number of times it occurs; null is the zero weight. */
+export interface WeightedSet {
+  readonly weights: TheoryWeights | null;
+  readonly multiplicity: number;
+}
+
+/**
+ * The product of one Weyl orbit for each group that acts: all sums of one weight from each part. Parts with the zero
+ * weight are left out, so that a set with no parts does not occur.
+ */
+export class TheoryWeights implements WeightSet {
+  readonly key: string;
+  readonly oppositeKey: string;
+  readonly size: number;
+  readonly parts: readonly WeightPart[];
+  private readonly groups: readonly TheoryGroup[];
+
+  constructor(groups: readonly TheoryGroup[], parts: readonly WeightPart[]) {
+    this.groups = groups;
+    this.parts = parts;
+    this.key = parts.map(({ group, orbit }) => `${group}:${orbit.key}`).join(' ');
+    this.oppositeKey = parts.map(({ group, orbit }) => `${group}:${orbit.conjugateKey}`).join(' ');
+    this.size = parts.reduce((product, { orbit }) => product * orbit.size, 1);
+  }
+
+  opposite(): this {
+    const parts = this.parts.map(({ group, orbit }) => ({ group, orbit: orbit.conjugate() }));
+    return new TheoryWeights(this.groups, parts) as this;
+  }
+
+  weights(): readonly Weight[] {
+    return this.sums(false);
+  }
+
+  half(): readonly Weight[] {
+    return this.sums(true);
+  }
+
+  /** With `half`, the first part gives one of each pair, which leaves one of each pair of sums. */
+  private sums(half: boolean): readonly Weight[] {
+    let sums: Weight[] = [{ position: Form.zero, flux: Form.zero }];
+    this.parts.forEach(({ group, orbit }, k) => {
+      const forms = orbitForms(this.groups[group] as TheoryGroup, orbit, half && k === 0);
+      sums = sums.flatMap((sum) =>
+        forms.map((form) => ({ position: sum.position.add(form.position), flux: sum.flux.add(form.flux) })),
+      );
+    });
+    return sums;
+  }
+}
+
+/** Name of the flux that goes with a Coulomb parameter: `flux2` for `sigma2`, `flux` for `sigma`. */
+export function fluxName(coordinate: string): string {
+  return coordinate.replace(/^[A-Za-z_]+/, 'flux');
+}
+
+function orbitForms(group: TheoryGroup, orbit: WeightOrbit, half: boolean): readonly Weight[] {
+  const { denominator, vectors, width } = half ? orbit.halfVectors() : orbit.vectors();
+  const positions = group.coordinates.map((name) => group.dependent.get(name) ?? Form.symbol(name));
+  const fluxes = positions.map((form) => form.substitute((name) => Form.symbol(fluxName(name))));
+  return Array.from({ length: vectors.length / width }, (_, row) => {
+    const entries = Array.from(vectors.subarray(row * width, (row + 1) * width));
+    const combine = (forms: readonly Form[]): Form =>
+      Form.sum(entries.flatMap((n, k) => (n === 0 ? [] : [(forms[k] as Form).scale(Rational.of(n, denominator))])));
+    return { position: combine(positions), flux: group.role === 'gauge' ? combine(fluxes) : Form.zero };
+  });
+}
+
+/** The weights of a multiplet, one set for each choice of an orbit in every group. */
+export function matterWeights(
+  groups: readonly TheoryGroup[],
+  representations: readonly Representation[],
+): readonly WeightedSet[] {
+  let choices: { parts: WeightPart[]; multiplicity: number }[] = [{ parts: [], multiplicity: 1 }];
+  representations.forEach((representation, group) => {
+    choices = choices.flatMap(({ parts, multiplicity }) =>
+      representation.orbits().map((orbit) => ({
+        parts: orbit.isZero ? parts : [...parts, { group, orbit }],
+        multiplicity: multiplicity * orbit.multiplicity,
+      })),
+    );
+  });
+  return choices.map(({ parts, multiplicity }) => ({
+    weights: parts.length === 0 ? null : new TheoryWeights(groups, parts),
+    multiplicity,
+  }));
+}
+
+/** The roots of one gauge group, an orbit for each length and simple factor. */
+export function rootWeights(theory: Theory, index: number): readonly { readonly weights: TheoryWeights }[] {
+  const group = theory.groups[index] as TheoryGroup;
+  const adjoint = parseRepresentation(group.group, 'adj');
+  if (adjoint.kind !== 'representation') return [];
+  return adjoint.representation
+    .orbits()
+    .filter((orbit) => !orbit.isZero)
+    .map((orbit) => ({ weights: new TheoryWeights(theory.groups, [{ group: index, orbit }]) }));
+}
