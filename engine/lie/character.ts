@@ -15,6 +15,9 @@ export interface DominantCharacter {
   readonly weights: number;
 }
 
+/** More dominant weights than this are refused whatever their orbits: the recursion's time grows with their strings. */
+const DOMINANT_LIMIT = 20_000;
+
 interface DominantWeights {
   readonly index: LabelIndex;
   /** Row k: the highest weight minus weight k on the simple roots. */
@@ -25,7 +28,8 @@ interface DominantWeights {
 
 /**
  * All dominant weights below `highest` (Moody, Patera, Bull. Amer. Math. Soc. 7 (1982) 237): a dominant weight covered by
- * another is reached by subtracting one positive root. Null as soon as their orbits hold more than `limit` weights.
+ * another is reached by subtracting one positive root. Null as soon as their orbits hold more than `limit` weights or
+ * they are more than DOMINANT_LIMIT themselves.
  */
 function dominantWeightsBelow(system: RootSystem, highest: readonly number[], limit: number): DominantWeights | null {
   const rank = system.rank;
@@ -36,7 +40,7 @@ function dominantWeightsBelow(system: RootSystem, highest: readonly number[], li
   const heights: number[] = [0];
   let weights = orbitSize(system, scratch);
   for (let row = 0; row < index.count; row++) {
-    if (weights > limit) return null;
+    if (weights > limit || index.count > DOMINANT_LIMIT) return null;
     for (const root of system.positiveRoots) {
       let dominant = true;
       for (let i = 0; i < rank && dominant; i++) {
@@ -111,7 +115,7 @@ const CHARACTERS_KEPT = 400;
 
 /**
  * Multiplicities of the dominant weights by Freudenthal's recursion with the reduction of root sums to stabiliser
- * orbits (Moody, Patera 1982). Null when there are more than `limit` distinct weights. Integer arithmetic throughout.
+ * orbits (Moody, Patera 1982). Null when there are more than `limit` distinct weights, or 20 000 dominant ones. Integer arithmetic throughout.
  */
 export function dominantCharacter(
   system: RootSystem,

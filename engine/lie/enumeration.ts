@@ -1,0 +1,36 @@
+import type { RootSystem } from './root-system';
+
+/**
+ * Dynkin labels of all irreducible representations of dimension at most `limit` (below 2^50), by a walk that stops a
+ * branch once the dimension, which grows with every label, exceeds it. Null when there are more than `most`.
+ */
+export function labelsUpToDimension(system: RootSystem, limit: number, most: number): number[][] | null {
+  const { rank } = system;
+  const rows = system.positiveRoots.map(({ coordinates }) => {
+    const scaled = coordinates.map((c, i) => c * (system.scaledHalfNorms[i] as number));
+    return { scaled, rho: scaled.reduce((sum, c) => sum + c, 0) };
+  });
+  const labels = new Array<number>(rank).fill(0);
+  // Ratios of small integers multiplied in doubles: the relative error stays below 120 roots times 2^-52.
+  const size = (): number =>
+    Math.round(
+      rows.reduce((product, { scaled, rho }) => {
+        const shifted = scaled.reduce((sum, c, i) => sum + c * (labels[i] as number), rho);
+        return (product * shifted) / rho;
+      }, 1),
+    );
+  const found: number[][] = [];
+  const walk = (node: number): boolean => {
+    if (node === rank) {
+      if (found.length === most) return false;
+      found.push([...labels]);
+      return true;
+    }
+    for (labels[node] = 0; size() <= limit; labels[node] = (labels[node] as number) + 1) {
+      if (!walk(node + 1)) return false;
+    }
+    labels[node] = 0;
+    return true;
+  };
+  return walk(0) ? found : null;
+}
