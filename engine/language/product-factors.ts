@@ -1,0 +1,47 @@
+import { Rational } from '../exact/rational';
+import { MAXIMAL_EXPONENT } from './bounded-form';
+import { expressionOf } from './expression-form';
+import type { ExpressionNode } from './expression-syntax';
+import type { Problems } from './problems';
+import type { Expression, TowerRow } from './tree';
+
+type PowerOf = TowerRow['eigenvalue'][number];
+
+/**
+ * The factors a product was written in. A positive whole power of a product is that power of each of its factors; a
+ * divisor is a factor of its own, inverted. Null when a factor has no exact value, which is then reported.
+ */
+export function factorsOf(node: ExpressionNode, text: string, problems: Problems): readonly PowerOf[] | null {
+  const factors: PowerOf[] = [];
+
+  const add = (factor: Expression | null, power: number): boolean => {
+    if (factor) factors.push({ factor, power });
+    return factor !== null;
+  };
+
+  const visit = (part: ExpressionNode, power: number): boolean => {
+    if (part.kind === 'product') {
+      return part.factors.every(({ node: factor, divides }) =>
+        divides ? add(inverseOf(factor, text, problems), power) : visit(factor, power),
+      );
+    }
+    const exponent = part.kind === 'power' ? positiveWhole(part.exponent) : null;
+    if (part.kind !== 'power' || exponent === null) return add(expressionOf(part, text, problems), power);
+    if (power * exponent <= MAXIMAL_EXPONENT) return visit(part.base, power * exponent);
+    return problems.report('exponent-too-large', part, { limit: `${MAXIMAL_EXPONENT}` }) !== null;
+  };
+
+  return visit(node, 1) ? factors : null;
+}
+
+function inverseOf(divisor: ExpressionNode, text: string, problems: Problems): Expression | null {
+  const { from, to } = divisor;
+  const minusOne: ExpressionNode = { kind: 'number', value: Rational.of(-1), from, to };
+  const inverse = expressionOf({ kind: 'power', base: divisor, exponent: minusOne, from, to }, text, problems);
+  return inverse && { ...inverse, text: `1/${inverse.text}` };
+}
+
+function positiveWhole(exponent: ExpressionNode): number | null {
+  if (exponent.kind !== 'number' || !exponent.value.isInteger() || exponent.value.sign() <= 0) return null;
+  return Number(exponent.value.numerator);
+}

@@ -1,0 +1,22 @@
+import { LineIndex } from './lines';
+import type { Problems } from './problems';
+import type { Block, Name } from './tree';
+
+/** Reports names given twice: theories and spectra share one set of names, parameters have another. */
+export function reportSecondNames(blocks: readonly Block[], text: string, problems: Problems): void {
+  const firstOf = { block: new Map<string, Name>(), parameter: new Map<string, Name>() };
+  let lines: LineIndex | null = null;
+  for (const block of blocks) {
+    if (block.kind !== 'let' && block.kind !== 'theory' && block.kind !== 'spectrum') continue;
+    const known = block.kind === 'let' ? firstOf.parameter : firstOf.block;
+    const { name, span } = block.name;
+    const first = known.get(name);
+    if (!first) {
+      known.set(name, block.name);
+      continue;
+    }
+    lines ??= new LineIndex(text);
+    const code = block.kind === 'let' ? 'parameter-twice' : 'block-twice';
+    problems.report(code, span, { name, line: `${lines.place(first.span.from).line}` });
+  }
+}

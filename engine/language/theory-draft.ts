@@ -1,0 +1,14 @@
+import type { GroupLine, MatterHeader, MixedLine, Monomial, MultipletRow, SphereLine, TheoryBlock } from './tree';
+
+/** What the lines of a theory add up to, while they are read. */
+export interface TheoryDraft {
+  sphere: SphereLine | null;
+  groups: GroupLine[];
+  mixed: MixedLine[];
+  supersymmetry: TheoryBlock['supersymmetry'];
+  header: MatterHeader | null;
+  multiplets: MultipletRow[];
+  superpotential: Monomial[];
+  /** Whether a `gauge`, `flavor` or multiplet line could not be read; its name is then not known. */
+  incomplete: boolean;
+}
