@@ -1,4 +1,4 @@
-import { labelsUpToDimension } from './enumeration';
+import { catalogue } from './enumeration';
 import { allowsLabels, type Group } from './group';
 import { dimension } from './invariants';
 import { type Refusal, refusal } from './refusal';
@@ -22,8 +22,6 @@ const TABLE: Readonly<Record<string, Readonly<Record<string, readonly number[]>>
 
 /** Dimension names above this are refused: such representations have too many neighbours to be told apart by size. */
 const LARGEST_NAMED = 1_000_000;
-/** Candidates searched for a dimension name. */
-const CANDIDATES = 20_000;
 
 export interface IrrepName {
   /** Dimension with primes and v, s, c where the table has them: `27`, `15'`, `8s`. */
@@ -132,25 +130,11 @@ function finish(
   );
 }
 
-// Pure memoisation by group and dimension.
-const sizes = new WeakMap<Group, Map<number, number[][] | null>>();
-
-function withDimension(group: Group, size: number): number[][] | null {
-  let kept = sizes.get(group);
-  if (!kept) {
-    kept = new Map();
-    sizes.set(group, kept);
-  }
-  const known = kept.get(size);
-  if (known !== undefined) return known;
-  const found =
-    group.system.rank === 1
-      ? [[size - 1]]
-      : (labelsUpToDimension(group.system, size, CANDIDATES)?.filter(
-          (labels) => dimension(group.system, labels) === BigInt(size),
-        ) ?? null);
-  kept.set(size, found);
-  return found;
+/** Null when the list of smaller representations would be too long. */
+function withDimension(group: Group, size: number): readonly (readonly number[])[] | null {
+  if (group.system.rank === 1) return [[size - 1]];
+  const list = catalogue(group.system, size);
+  return list && (list.bySize.get(size) ?? []);
 }
 
 /** The name of an irreducible representation, where one exists that dimensionLabels would read back. */
