@@ -3,15 +3,7 @@ import type { Form } from '../exact/form';
 import type { Rational } from '../exact/rational';
 
 /** The functions a product of factors is made of. The table in `functions/table.ts` has one entry for each. */
-export type FunctionName =
-  | 'hyperbolicSine'
-  | 'hyperbolicCosine'
-  | 'doubleSine'
-  | 'gamma'
-  | 'upsilon'
-  | 'tripleSine'
-  | 'linear'
-  | 'exponential';
+export type FunctionName = 'hyperbolicSine' | 'hyperbolicCosine' | 'doubleSine' | 'linear' | 'exponential';
 
 /** A function of an argument and parameters (periods), as one entry of a product. */
 export interface FunctionAt {
@@ -133,7 +125,11 @@ export interface SpecialFunction {
   readonly precise: (argument: FixedComplex, parameters: readonly ExactParameter[], bits: number) => PreciseLog;
   /** An independent second route, for cross-checks; `route` says in words what it is. Null when there is none here. */
   readonly crossCheck:
-    | ((argument: FixedComplex, parameters: readonly ExactParameter[], bits: number) => {
+    | ((
+        argument: FixedComplex,
+        parameters: readonly ExactParameter[],
+        bits: number,
+      ) => {
         readonly route: string;
         readonly log: PreciseLog;
       } | null)

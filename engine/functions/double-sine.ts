@@ -1,0 +1,72 @@
+import { Form } from '../exact/form';
+import { doubleSineKernel } from './double-sine-double';
+import { logDoubleSineByMidpoint } from './double-sine-midpoint';
+import { doubleSineModes, doubleSineNotations } from './double-sine-notations';
+import type { FunctionAt, SpecialFunction } from './special-function';
+
+const HALF = Form.ratio(1, 2);
+
+/**
+ * The double sine s_b(x) = prod_{m,n>=0} (m b + n/b + Q/2 - i x)/(m b + n/b + Q/2 + i x), Q = b + 1/b, zeta-regularised:
+ *   log s_b(x) = -i int_0^oo dt/t [ sin(2xt)/(2 sinh(bt) sinh(t/b)) - x/t ],  |Im x| < Q/2.
+ * Poles i (Q/2 + m b + n/b), zeros at the opposite points; s_b(x) s_b(-x) = 1, s_b = s_{1/b},
+ * s_b(x - i b/2) = 2 cosh(pi b x) s_b(x + i b/2), s_b(i Q/2 + e) = 1/(2 pi i e) + O(1).
+ * Parameter: b, with b > 0.
+ */
+export const doubleSine: SpecialFunction = {
+  name: 'doubleSine',
+  spelling: 'doublesine',
+  parameters: ['b'],
+  reflections: [{ center: () => Form.zero, power: -1, sign: 1 }],
+  shifts: [
+    { step: ([b]) => Form.i.mul(b as Form), quotient: (x, [b]) => [inverseCosh(x, b as Form)] },
+    { step: ([b]) => Form.i.div(b as Form), quotient: (x, [b]) => [inverseCosh(x, (b as Form).inverse())] },
+  ],
+  zeros: [
+    {
+      kind: 'zero',
+      start: ([b]) => halfPeriod(b as Form).neg(),
+      steps: ([b]) => [Form.i.mul(b as Form).neg(), Form.i.div(b as Form).neg()],
+    },
+    {
+      kind: 'pole',
+      start: ([b]) => halfPeriod(b as Form),
+      steps: ([b]) => [Form.i.mul(b as Form), Form.i.div(b as Form)],
+    },
+  ],
+  growth: [
+    { direction: Form.one, logarithm: (x, [b]) => quadratic(x, b as Form) },
+    { direction: Form.one.neg(), logarithm: (x, [b]) => quadratic(x, b as Form).neg() },
+  ],
+  notations: doubleSineNotations,
+  modes: doubleSineModes,
+  elementary: false,
+  double: ([b]) => doubleSineKernel(b?.im === 0 ? b.re : Number.NaN),
+  precise: (x, [b], bits) => (b && logDoubleSineByMidpoint(x, b, bits)) ?? { kind: 'indistinct' },
+  crossCheck: null,
+  sources: [
+    {
+      key: 'Kurokawa-Koyama-2003',
+      text: 'N. Kurokawa, S. Koyama, Forum Math. 15 (2003) 839: multiple sine functions',
+    },
+    { key: 'Faddeev-Kashaev-Volkov-2001', text: 'L. Faddeev, R. Kashaev, A. Volkov, hep-th/0006156' },
+    { key: 'HHL-2011', text: 'N. Hama, K. Hosomichi, S. Lee, arXiv:1102.4716 (2011)' },
+  ],
+};
+
+/** s_b(x + i p)/s_b(x) = 1/(2 cosh(pi p (x + i p/2))) for p = b and p = 1/b. */
+function inverseCosh(x: Form, period: Form): FunctionAt {
+  const argument = period.mul(x.add(Form.i.mul(period).mul(HALF)));
+  return { name: 'hyperbolicCosine', argument, parameters: [], power: -1 };
+}
+
+/** i Q/2. */
+function halfPeriod(b: Form): Form {
+  return Form.i.mul(b.add(b.inverse())).mul(HALF);
+}
+
+/** (i pi/2)(x^2 + (b^2 + b^-2)/12): the limit of log s_b(x) for Re x -> +infinity, up to e^{-2 pi min(b, 1/b) Re x}. */
+function quadratic(x: Form, b: Form): Form {
+  const constant = b.pow(2).add(b.inverse().pow(2)).mul(Form.ratio(1, 12));
+  return Form.i.mul(Form.pi).mul(HALF).mul(x.mul(x).add(constant));
+}

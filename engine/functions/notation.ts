@@ -1,0 +1,78 @@
+import { Form } from '../exact/form';
+import { Rational } from '../exact/rational';
+import type { Printer } from './special-function';
+
+/** Small pieces of LaTeX that the notations of several functions share. */
+
+/** `(...)`, with delimiters that grow when there is a fraction inside. */
+export function parenthesised(inner: string): string {
+  return inner.includes('\\frac') ? `\\left(${inner}\\right)` : `(${inner})`;
+}
+
+/** True when the text is a sum or carries a sign, outside all brackets. */
+export function isSum(text: string): boolean {
+  let depth = 0;
+  for (const character of text) {
+    if ('({['.includes(character)) depth++;
+    else if (')}]'.includes(character)) depth--;
+    else if (depth === 0 && '+-'.includes(character)) return true;
+  }
+  return false;
+}
+
+/** The text, in parentheses when it is a sum. */
+export function asFactor(text: string): string {
+  return isSum(text) ? parenthesised(text) : text;
+}
+
+/** pi times a form, pi in front: `\pi b(\sigma_1-\sigma_2)`, `\frac{\pi\sigma}{b}`. */
+export function piTimes(form: Form, print: Printer): string {
+  const text = print.form(form);
+  if (isSum(text.replace(/^-/, ''))) return `\\pi${parenthesised(text)}`;
+  const [sign, size] = text.startsWith('-') ? ['-', text.slice(1)] : ['', text];
+  const fraction = /^\\frac\{(.*)\}\{([^{}]*)\}$/.exec(size);
+  if (!fraction) return size === '1' ? `${sign}\\pi` : `${sign}\\pi ${size}`;
+  const above = fraction[1] as string;
+  return `${sign}\\frac{\\pi ${above === '1' ? '' : asFactor(above)}}{${fraction[2]}}`;
+}
+
+/** The argument of sinh or cosh of pi times a form, in parentheses unless it reads `\pi(...)`. */
+export function hyperbolicArgument(form: Form, print: Printer): string {
+  const text = piTimes(form, print);
+  return /^\\pi(\\left)?\(/.test(text) ? text : parenthesised(text);
+}
+
+/** `lead + form` with real terms first and the sign of each; `lead` alone when the form is zero. */
+export function plus(lead: string, form: Form, print: Printer): string {
+  if (form.isZero()) return lead;
+  const text = realFirst(form, print);
+  return text.startsWith('-') ? `${lead}${text}` : `${lead}+${text}`;
+}
+
+/** A form with its real terms before the imaginary ones: `1-r+i\sigma`. */
+export function realFirst(form: Form, print: Printer): string {
+  const real = form.split().filter((term) => term.terms.every(({ coefficient }) => coefficient.isReal()));
+  const rest = form.sub(Form.sum(real));
+  if (real.length === 0 || rest.isZero()) return print.form(form);
+  const tail = print.form(rest);
+  return `${print.form(Form.sum(real))}${tail.startsWith('-') ? '' : '+'}${tail}`;
+}
+
+/** `mb+nb^{-1}` or `m+n`: indices times periods; a period 1 is not written, rational ones stand in front. */
+export function indexSum(indices: readonly string[], periods: readonly Form[], print: Printer): string {
+  const terms = periods.map((period, k) => {
+    const index = indices[k] as string;
+    const rational = period.toRational();
+    if (rational?.equals(Rational.one)) return index;
+    const text = periodText(period, print);
+    return rational ? `${text}${index}` : `${index}${asFactor(text)}`;
+  });
+  return terms.join('+');
+}
+
+/** A period; the inverse of a symbol as a power, `b^{-1}`. */
+export function periodText(period: Form, print: Printer): string {
+  const text = print.form(period);
+  const inverse = /^\\frac\{1\}\{([A-Za-z])\}$/.exec(text);
+  return inverse ? `${inverse[1]}^{-1}` : text;
+}

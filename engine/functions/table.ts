@@ -1,0 +1,15 @@
+import { doubleSine } from './double-sine';
+import { exponential } from './exponential';
+import { hyperbolicCosine } from './hyperbolic-cosine';
+import { hyperbolicSine } from './hyperbolic-sine';
+import { linear } from './linear';
+import type { FunctionName, SpecialFunction } from './special-function';
+
+/** Every function that a product can be made of. The compiler finds a missing one. */
+export const functions = {
+  hyperbolicSine,
+  hyperbolicCosine,
+  doubleSine,
+  linear,
+  exponential,
+} satisfies Record<FunctionName, SpecialFunction> as Record<FunctionName, SpecialFunction>;
