@@ -11,6 +11,8 @@ export interface OutlineOptions {
 export interface LatexOutput {
   readonly snippet: string;
   readonly document: string;
+  /** Why there is none, in words; the strings are then empty. */
+  readonly refused?: string;
 }
 
 /** One line of the representation chooser. */

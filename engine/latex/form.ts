@@ -1,7 +1,7 @@
 import type { Atom, Form, Term } from '../exact/form';
 import { Gaussian } from '../exact/gaussian';
 import { gcd, Rational } from '../exact/rational';
-import { symbolLatex } from './symbol';
+import { symbolLatex, TRACE } from './symbol';
 
 /**
  * A form in LaTeX the way papers write it: terms with the same geometry symbols and the same factor i are taken
@@ -11,7 +11,7 @@ export function formLatex(form: Form): string {
   if (form.isZero()) return '0';
   const groups = new Map<string, { outer: Term['factors']; imaginary: boolean; inner: Term[] }>();
   for (const term of form.terms.flatMap(splitComplex)) {
-    const outer = term.factors.filter(({ atom }) => isGeometry(atom));
+    const outer = outerOrder(term.factors.filter(({ atom }) => isGeometry(atom)));
     const inner = term.factors.filter(({ atom }) => !isGeometry(atom));
     const imaginary = !term.coefficient.isReal();
     const shared = imaginary || outer.length > 0;
@@ -57,10 +57,18 @@ function rank(group: { outer: Term['factors']; imaginary: boolean }): number {
   return (group.outer.length > 0 ? 0 : 2) + (group.imaginary ? 0 : 1);
 }
 
+/** Geometry symbols and constants are taken out in front of a bracket. */
 function isGeometry(atom: Atom): boolean {
+  if (atom.kind === 'constant') return true;
   return (
-    atom.kind === 'symbol' && atom.name.startsWith('@') && atom.name !== EITHER_SIGN && !atom.name.startsWith('@tr')
+    atom.kind === 'symbol' && atom.name.startsWith('@') && atom.name !== EITHER_SIGN && !atom.name.startsWith(TRACE)
   );
+}
+
+/** Constants first: pi b, not b pi. */
+function outerOrder(factors: Term['factors']): Term['factors'] {
+  const constant = (atom: Atom): number => (atom.kind === 'constant' ? 0 : 1);
+  return [...factors].sort((a, b) => constant(a.atom) - constant(b.atom));
 }
 
 function splitComplex(term: Term): Term[] {

@@ -1,7 +1,7 @@
 import { Form } from '../exact/form';
 import type { Notation, Printer } from '../functions/special-function';
 import { functions } from '../functions/table';
-import { type Factor, WEIGHT } from '../product/factor';
+import { atWeight, type Factor, WEIGHT } from '../product/factor';
 import type { TheoryGroup } from '../theory/theory';
 import type { TheoryWeights } from '../theory/weights';
 import { formLatex } from './form';
@@ -11,7 +11,12 @@ import { printWeights } from './weights';
 export interface Piece {
   readonly latex: string;
   readonly from: readonly string[];
+  /** The same with every weight written out; null where there is one weight, or too many to read. */
+  readonly expanded: string | null;
 }
+
+/** More weights than this are not written out. */
+const MAXIMAL_EXPANDED = 64;
 
 export const printer: Printer = { form: formLatex };
 
@@ -45,26 +50,41 @@ function pieceLatex(groups: readonly TheoryGroup[], factors: readonly Factor<The
   const first = factors[0] as Factor<TheoryWeights>;
   const printed =
     first.weights === null ? [{ sign: '', weight: Form.zero }] : printWeights(groups, first.weights, first.half);
-  return printed.map(({ sign, weight }) => {
-    const above: Single[] = [];
-    const below: Single[] = [];
-    for (const factor of factors) {
-      const argument = factor.argument.substitute((name) => (name === WEIGHT ? weight : null));
-      const latex = functionLatex(factor, argument, style);
-      (factor.power < 0 ? below : above).push({
-        latex,
-        power: Math.abs(factor.power),
-        letter: factor.name === 'exponential',
-      });
-    }
-    return { latex: sign + quotient(above, below), from: first.from };
-  });
+  const expanded = style.kind === 'modes' ? null : expandedLatex(factors, style);
+  return printed.map(({ sign, weight }) => ({
+    latex: sign + factorsLatex(factors, (argument) => atPrinted(argument, weight), style),
+    from: first.from,
+    expanded,
+  }));
+}
+
+function atPrinted(argument: Form, weight: Form): Form {
+  return argument.substitute((name) => (name === WEIGHT ? weight : null));
+}
+
+function factorsLatex(factors: readonly Factor[], at: (argument: Form) => Form, style: Style): string {
+  const above: Single[] = [];
+  const below: Single[] = [];
+  for (const factor of factors) {
+    const latex = functionLatex(factor, at(factor.argument), style);
+    (factor.power < 0 ? below : above).push({ latex, power: Math.abs(factor.power) });
+  }
+  return quotient(above, below);
+}
+
+function expandedLatex(factors: readonly Factor<TheoryWeights>[], style: Style): string | null {
+  const { weights, half } = factors[0] as Factor<TheoryWeights>;
+  if (weights === null) return null;
+  const count = half ? weights.size / 2 : weights.size;
+  if (count < 2 || count > MAXIMAL_EXPANDED) return null;
+  return (half ? weights.half() : weights.weights())
+    .map((weight) => factorsLatex(factors, (argument) => atWeight(argument, weight), style))
+    .join('\\;');
 }
 
 interface Single {
   readonly latex: string;
   readonly power: number;
-  readonly letter: boolean;
 }
 
 function functionLatex(factor: Factor, argument: Form, style: Style): string {

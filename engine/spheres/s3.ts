@@ -57,6 +57,8 @@ export const s3: Sphere = {
     ...(theory.round ? [] : ['$Q=b+b^{-1}$']),
     'The Coulomb parameters are real and dimensionless; $1/|W|$ and the measure are not included.',
   ],
+  conditions: [],
+  specialFunction: 'doubleSine',
   sources: [
     { key: 'KWY-2009', text: 'A. Kapustin, B. Willett, I. Yaakov, arXiv:0909.4559 (2009)' },
     { key: 'Jafferis-2010', text: 'D. L. Jafferis, arXiv:1012.3210 (2010)' },

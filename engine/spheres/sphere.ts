@@ -1,7 +1,8 @@
 import type { Form } from '../exact/form';
-import type { Source } from '../functions/special-function';
+import type { FunctionName, Source } from '../functions/special-function';
 import type { Geometry } from '../product/chain';
 import type { Product } from '../product/factor';
+import type { Condition } from '../theory/checks/condition';
 import type { SphereRules } from '../theory/rules';
 import type { Multiplet, Theory } from '../theory/theory';
 import type { TheoryWeights } from '../theory/weights';
@@ -28,6 +29,10 @@ export interface Sphere extends SphereRules {
   readonly modes: (theory: Theory) => ModesView;
   /** Conventions to print under a formula: `Q = b + 1/b`, the measure, signs; LaTeX in `$...$`. */
   readonly conventions: (theory: Theory) => readonly string[];
+  /** What a referee checks of a theory on this sphere. */
+  readonly conditions: readonly Condition[];
+  /** The function that multiplets of this sphere give, whose notations can be chosen. */
+  readonly specialFunction: FunctionName;
   readonly sources: readonly Source[];
 }
 

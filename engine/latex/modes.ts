@@ -1,0 +1,69 @@
+import { Form } from '../exact/form';
+import { WEIGHT } from '../product/factor';
+import type { ModeFactor, ModeTower } from '../spheres/sphere';
+import type { TheoryGroup } from '../theory/theory';
+import { formInParentheses, formLatex } from './form';
+import type { Piece } from './product';
+import { printWeights } from './weights';
+
+/** Towers of modes in LaTeX: for each weight a product over the level n, fermions above bosons. */
+export function modesLatex(groups: readonly TheoryGroup[], towers: readonly ModeTower[]): Piece[] {
+  return towers.flatMap((tower) => {
+    const printed =
+      tower.weights === null ? [{ sign: '', weight: Form.zero }] : printWeights(groups, tower.weights, tower.half);
+    return printed.map(({ sign, weight }) => ({
+      latex: sign + towerLatex(tower, weight),
+      from: tower.from,
+      expanded: null,
+    }));
+  });
+}
+
+function towerLatex(tower: ModeTower, weight: Form): string {
+  const at = (form: Form): Form => form.substitute((name) => (name === WEIGHT ? weight : null));
+  const prefactor = tower.prefactor === null ? '' : `${prefactorLatex(at(tower.prefactor), weight)}\\,`;
+  const above = tower.factors.filter(({ multiplicity }) => !isNegative(multiplicity));
+  const below = tower.factors.filter(({ multiplicity }) => isNegative(multiplicity));
+  const fraction = `\\frac{${modes(above, at)}}{${modes(below, at)}}`;
+  const level = `\\prod_{n\\ge${tower.start}}${fraction}`;
+  return tower.power === 1 ? prefactor + level : `\\left[${prefactor}${level}\\right]^{${tower.power}}`;
+}
+
+/** The Vandermonde factor as the square of the weight. */
+function prefactorLatex(prefactor: Form, weight: Form): string {
+  return prefactor.equals(weight.mul(weight)) ? `${formInParentheses(weight)}^2` : formInParentheses(prefactor);
+}
+
+function isNegative(form: Form): boolean {
+  return form.terms.some(({ coefficient }) => coefficient.re.sign() < 0);
+}
+
+function modes(factors: readonly ModeFactor[], at: (form: Form) => Form): string {
+  return factors
+    .map(({ eigenvalue, multiplicity }) => {
+      const power = isNegative(multiplicity) ? multiplicity.neg() : multiplicity;
+      return `\\left(${levelFirst(at(eigenvalue))}\\right)^{${polynomialLatex(power)}}`;
+    })
+    .join('');
+}
+
+/** n + 2 - z with the level in front. */
+function levelFirst(form: Form): string {
+  const { rest } = form.linearPart('n');
+  const text = formLatex(rest);
+  if (rest.isZero()) return 'n';
+  return text.startsWith('-') || text.startsWith('\\pm') || text.startsWith('\\mp') ? `n${text}` : `n+${text}`;
+}
+
+/** Multiplicities factor over the integers: n(n+1), (n+1)^2; printed as such. */
+function polynomialLatex(form: Form): string {
+  const n = Form.symbol('n');
+  const one = Form.one;
+  const known: readonly (readonly [Form, string])[] = [
+    [n.mul(n.add(one)), 'n(n+1)'],
+    [n.add(one).mul(n.add(one)), '(n+1)^2'],
+    [n.add(one).mul(n.add(Form.number(2))), '(n+1)(n+2)'],
+    [n.mul(n.add(Form.number(2))).scale(2), '2n(n+2)'],
+  ];
+  return known.find(([polynomial]) => polynomial.equals(form))?.[1] ?? formLatex(form);
+}

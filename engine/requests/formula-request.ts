@@ -1,0 +1,41 @@
+import type { FormulaRequest } from '../language/tree';
+import { isSpecial } from '../spheres/quantity';
+import type { Analysis } from './analysis';
+import { type Answer, failure } from './answer';
+import { formProduct, formulaView, type Printable } from './formula';
+import type { FormulaResult } from './result';
+import { unreadable } from './subject';
+
+/** `formula ...`: one form of a formula, as a card of its own. */
+export function runFormula(analysis: Analysis, request: FormulaRequest): Answer {
+  const name = request.subject.name;
+  const entry = analysis.theories.get(name);
+  if (!entry && analysis.spectra.has(name)) return failure(name, 'Formulas of spectra are not offered yet.');
+  const printable = printableTheory(analysis, name, 0);
+  if (printable === null) return failure(name, unreadable(entry, name) ?? '');
+  const form = request.form ?? preferredForm(printable);
+  return {
+    kind: 'formula',
+    of: name,
+    notes: [],
+    formula: formulaView(printable, form),
+  } satisfies Answer<FormulaResult>;
+}
+
+/** Elementary where nothing else is left, else special functions. */
+export function preferredForm(printable: Printable): 'elementary' | 'functions' {
+  const made = formProduct(printable, 'elementary');
+  return made?.product.some(isSpecial) ? 'functions' : 'elementary';
+}
+
+/** A theory of the notebook with what printing needs; null when it cannot be read. */
+export function printableTheory(analysis: Analysis, name: string, notation: number): Printable | null {
+  const entry = analysis.theories.get(name);
+  if (!entry?.sphere || !entry.built?.theory) return null;
+  const fixed = new Map(
+    [...analysis.parameters].flatMap(([parameter, { value, range }]) =>
+      value === null || range !== null ? [] : [[parameter, value] as const],
+    ),
+  );
+  return { sphere: entry.sphere, theory: entry.built.theory, fixed, notation };
+}

@@ -1,0 +1,87 @@
+import type { Form } from '../exact/form';
+import { functions } from '../functions/table';
+import type { FormulaForm } from '../language/tree';
+import { formLatex } from '../latex/form';
+import { modesLatex } from '../latex/modes';
+import { displayLatex, type Piece, productLatex } from '../latex/product';
+import { symbolLatex } from '../latex/symbol';
+import { stemOf } from '../latex/weights';
+import { simplify } from '../product/simplify';
+import { type ElementaryProduct, elementary, isSpecial, quantity } from '../spheres/quantity';
+import type { Sphere } from '../spheres/sphere';
+import { gaugeGroups, type Theory } from '../theory/theory';
+import type { FormulaView } from './result';
+
+/** A theory ready to be printed: what all four forms are made from. */
+export interface Printable {
+  readonly sphere: Sphere;
+  readonly theory: Theory;
+  /** Closed values of the parameters without a range. */
+  readonly fixed: ReadonlyMap<string, Form>;
+  readonly notation: number;
+}
+
+export const FORMS: readonly FormulaForm[] = ['modes', 'unpaired', 'functions', 'elementary'];
+
+/** The product behind a form, and the parameter values it holds at; null for the modes, which are no such product. */
+export function formProduct(printable: Printable, form: FormulaForm): ElementaryProduct | null {
+  const { sphere, theory, fixed } = printable;
+  const raw = quantity(sphere, theory, 'one-loop') ?? [];
+  switch (form) {
+    case 'modes':
+      return null;
+    case 'unpaired':
+      return { product: raw, at: [] };
+    case 'functions':
+      return { product: simplify(raw, 'functions'), at: [] };
+    case 'elementary':
+      return elementary(sphere, theory, raw, fixed);
+  }
+}
+
+/** One form of a theory's one-loop formula. */
+export function formulaView(printable: Printable, form: FormulaForm): FormulaView {
+  const { sphere, theory, notation } = printable;
+  const notes = [...sphere.conventions(theory), ...dependentNotes(theory)];
+  const made = formProduct(printable, form);
+  if (made === null) {
+    const modes = sphere.modes(theory);
+    if (modes.kind === 'refused') return { kind: 'refused', message: modes.message };
+    return view(theory, modesLatex(theory.groups, modes.towers), notes);
+  }
+  const style = form === 'unpaired' ? ({ kind: 'modes' } as const) : ({ kind: 'function', notation } as const);
+  return view(theory, productLatex(theory.groups, made.product, style), [...remarks(form, made), ...notes]);
+}
+
+/** What the reader of an elementary formula has to know: where it holds, and what could not be reduced. */
+function remarks(form: FormulaForm, { product, at }: ElementaryProduct): string[] {
+  if (form !== 'elementary') return [];
+  const values = at.map(({ name, value }) => `$${symbolLatex(name)}=${formLatex(value)}$`).join(', ');
+  const left = [...new Set(product.filter(isSpecial).map(({ name }) => functions[name].notations[0]?.label ?? name))];
+  return [
+    ...(at.length > 0 ? [`Holds at ${values}.`] : []),
+    ...(left.length > 0 ? [`What is left in $${left.join(',')}$ has no elementary form at these charges.`] : []),
+  ];
+}
+
+function view(theory: Theory, pieces: readonly Piece[], notes: readonly string[]): FormulaView {
+  const lead = `${leadLatex(theory)}=`;
+  const shown: readonly Piece[] = pieces.length === 0 ? [{ latex: '1', from: [], expanded: null }] : pieces;
+  return { kind: 'formula', lead, pieces: shown, latex: displayLatex(lead, shown), notes };
+}
+
+/** Z_{1-loop}(sigma), with all Coulomb stems. */
+function leadLatex(theory: Theory): string {
+  const stems = gaugeGroups(theory).map(({ group }) => symbolLatex(stemOf(group)));
+  return `Z_{\\text{1-loop}}${stems.length === 0 ? '' : `(${stems.join(',')})`}`;
+}
+
+/** Relations among printed coordinates that are not independent. */
+function dependentNotes(theory: Theory): string[] {
+  return theory.groups.flatMap((group) => {
+    if (group.dependent.size === 0) return [];
+    const stem = symbolLatex(stemOf(group));
+    if (group.dependent.size === 1) return [`$\\sum_a ${stem}_a=0$`];
+    return [...group.dependent].map(([name, form]) => `$${symbolLatex(name)}=${formLatex(form)}$`);
+  });
+}

@@ -1,0 +1,60 @@
+import { formatBall } from '../arithmetic/decimal-text';
+import { functions } from '../functions/table';
+import type { Quantity } from '../language/tree';
+import { evaluatePrecise } from '../numeric/precise';
+import type { TheoryProduct } from '../spheres/sphere';
+import { agreedDigits } from './agreement';
+import type { Analysis } from './analysis';
+import { type Answer, failure } from './answer';
+import type { ValueResult } from './result';
+
+type FunctionQuantity = Extract<Quantity, { kind: 'function' }>;
+
+/** A special function of given arguments as a product of one factor; a string says why it cannot be had. */
+export function functionProduct(quantity: FunctionQuantity): TheoryProduct | string {
+  const word = quantity.function.name;
+  const declared = Object.values(functions).find(({ spelling }) => spelling === word);
+  if (!declared) return `\`${word}\` is not offered yet.`;
+  const expected = 1 + declared.parameters.length;
+  if (quantity.arguments.length !== expected) {
+    return `\`${word}\` takes ${expected} arguments; ${quantity.arguments.length} were given.`;
+  }
+  const [argument, ...parameters] = quantity.arguments.map(({ form }) => form);
+  if (!argument) return `\`${word}\` needs an argument.`;
+  return [{ name: declared.name, argument, parameters, power: 1, weights: null, half: false, from: [] }];
+}
+
+/** `value doublesine(0.3 + 0.2i, 5/4), 50 digits`. */
+export function functionValue(analysis: Analysis, quantity: FunctionQuantity, digits: number): Answer {
+  const of = quantity.function.name;
+  const product = functionProduct(quantity);
+  if (typeof product === 'string') return failure(of, product);
+  const values = (name: string) => analysis.values.get(name) ?? null;
+  const value = evaluatePrecise(product, values, digits);
+  switch (value.kind) {
+    case 'value': {
+      const other = evaluatePrecise(product, values, digits, 'second');
+      const confirmed = other.kind === 'value' && other.route !== null;
+      return {
+        kind: 'value',
+        of,
+        notes: [],
+        value: formatBall(quantity.log ? value.log : value.value, digits),
+        digits,
+        crossCheck: confirmed
+          ? { route: other.route ?? '', agrees: `${agreedDigits(value.value, other.value, digits)} digits` }
+          : null,
+      } satisfies Answer<ValueResult>;
+    }
+    case 'zero':
+    case 'pole':
+      return failure(of, `The argument is a ${value.kind} of order ${value.order}.`);
+    case 'unset':
+      return failure(of, `No value for ${value.names.join(', ')}; give it with \`let\`.`);
+    case 'meeting':
+    case 'indistinct':
+      return failure(of, 'The argument cannot be told from a pole or a zero. Give it exactly, or move it away.');
+    case 'unreachable':
+      return failure(of, 'The value is out of reach: an argument is undefined, or outside the domain of the function.');
+  }
+}

@@ -1,0 +1,116 @@
+import { Form } from '../exact/form';
+import type { Assignment, Name } from '../language/tree';
+import type { Sphere } from '../spheres/sphere';
+import type { Theory } from '../theory/theory';
+import { fluxName } from '../theory/weights';
+import type { Analysis } from './analysis';
+
+/** Values of all symbols of a theory at a point, as closed forms. */
+export interface Point {
+  readonly values: (name: string) => Form | null;
+  /** Assumptions in words. */
+  readonly notes: readonly string[];
+}
+
+export type PointResult =
+  | { readonly kind: 'point'; readonly point: Point }
+  | { readonly kind: 'failure'; readonly message: string };
+
+/**
+ * The point of a request: assignments first, then the notebook's parameters. Coulomb parameters that are not set stay
+ * open when they are `free` (the axes of a plot), are zero for plots, and are an error for values; masses and FI
+ * parameters that are not set are zero, and a note says so.
+ */
+export function resolvePoint(
+  analysis: Analysis,
+  sphere: Sphere,
+  theory: Theory,
+  at: readonly Assignment[],
+  free: readonly Name[],
+  unsetCoulomb: 'error' | 'zero',
+): PointResult {
+  const settable = settableNames(analysis, theory);
+  const dependent = new Map(theory.groups.flatMap(({ dependent: relations }) => [...relations]));
+  const set = new Map<string, Form>();
+  for (const name of [...free, ...at.map((a) => a.name)]) {
+    const message = unsettable(name.name, settable, dependent);
+    if (message !== null) return { kind: 'failure', message };
+  }
+  for (const { name, value } of at) {
+    const closed = value.form.substitute((symbol) => analysis.values.get(symbol) ?? null);
+    const open = closed.symbols();
+    if (open.length > 0)
+      return {
+        kind: 'failure',
+        message: `\`${name.name}\` is set to \`${value.text}\`, but \`${open[0]}\` has no value.`,
+      };
+    if (set.has(name.name)) return { kind: 'failure', message: `\`${name.name}\` is set twice.` };
+    set.set(name.name, closed);
+  }
+  const axes = new Set(free.map(({ name }) => name));
+  const notes: string[] = [];
+  const failure = fillUnset(theory, axes, set, unsetCoulomb, notes);
+  if (failure !== null) return { kind: 'failure', message: failure };
+  const geometry = sphere.geometry(theory);
+  const values = (name: string): Form | null => {
+    if (axes.has(name)) return null;
+    const own = set.get(name) ?? analysis.values.get(name);
+    if (own) return own;
+    if (!name.startsWith('@')) return null;
+    return geometry.reduce((form, stage) => form.substitute(stage), Form.symbol(name));
+  };
+  return { kind: 'point', point: { values, notes } };
+}
+
+interface Settable {
+  readonly coulomb: readonly string[];
+  readonly masses: readonly string[];
+  readonly backgrounds: readonly string[];
+  readonly parameters: readonly string[];
+}
+
+function independent(theory: Theory, role: 'gauge' | 'flavor'): string[] {
+  return theory.groups
+    .filter((group) => group.role === role)
+    .flatMap(({ coordinates, dependent }) => coordinates.filter((name) => !dependent.has(name)));
+}
+
+function settableNames(analysis: Analysis, theory: Theory): Settable {
+  return {
+    coulomb: independent(theory, 'gauge'),
+    masses: independent(theory, 'flavor'),
+    backgrounds: theory.backgrounds,
+    parameters: [...analysis.values.keys()],
+  };
+}
+
+function unsettable(name: string, settable: Settable, dependent: ReadonlyMap<string, Form>): string | null {
+  const all = [...settable.coulomb, ...settable.masses, ...settable.backgrounds, ...settable.parameters];
+  if (all.includes(name) || settable.coulomb.some((coordinate) => fluxName(coordinate) === name)) return null;
+  if (dependent.has(name)) {
+    return `\`${name}\` follows from the other coordinates of its group (their sum is zero) and is not set by itself.`;
+  }
+  const list = all.length === 0 ? 'nothing' : all.map((known) => `\`${known}\``).join(', ');
+  return `This theory has no \`${name}\`; what can be set is ${list}.`;
+}
+
+function fillUnset(
+  theory: Theory,
+  axes: ReadonlySet<string>,
+  set: Map<string, Form>,
+  unsetCoulomb: 'error' | 'zero',
+  notes: string[],
+): string | null {
+  const open = (names: readonly string[]): string[] => names.filter((name) => !set.has(name) && !axes.has(name));
+  const coulomb = open(independent(theory, 'gauge'));
+  if (coulomb.length > 0 && unsetCoulomb === 'error') {
+    return `Coulomb parameters without a value: ${coulomb.join(', ')}. Add \`at ${coulomb.map((name) => `${name} = 0.3`).join(', ')}\`.`;
+  }
+  const masses = open(independent(theory, 'flavor'));
+  const backgrounds = open(theory.backgrounds);
+  for (const name of [...coulomb, ...masses, ...backgrounds]) set.set(name, Form.zero);
+  if (coulomb.length > 0) notes.push(`Not set, taken as zero: ${coulomb.join(', ')}.`);
+  if (masses.length > 0) notes.push(`Masses not set, taken as zero: ${masses.join(', ')}.`);
+  if (backgrounds.length > 0) notes.push(`Parameters not set, taken as zero: ${backgrounds.join(', ')}.`);
+  return null;
+}

@@ -1,0 +1,60 @@
+import type { Request } from '../language/tree';
+import type { Analysis } from './analysis';
+import { type Answer, failure, type Surroundings } from './answer';
+import { runFormula } from './formula-request';
+import { runPlot } from './plot';
+import { runRepresentation } from './representation';
+import { requestKey, requestText } from './request-text';
+import type { Result } from './result';
+import { runValue } from './value';
+
+/** Answers one request of a notebook. Never throws on what a user typed: what cannot be done is a failure in words. */
+export function run(analysis: Analysis, request: Request, surroundings: Surroundings): Result {
+  const start = surroundings.now();
+  const answer = runByKind(analysis, request, surroundings);
+  return {
+    ...answer,
+    line: analysis.lines.place(request.span.from).line,
+    request: requestText(analysis.text, request.span),
+    seconds: Math.max(0, surroundings.now() - start),
+  } as Result;
+}
+
+function runByKind(analysis: Analysis, request: Request, surroundings: Surroundings): Answer {
+  switch (request.kind) {
+    case 'formula':
+      return runFormula(analysis, request);
+    case 'value':
+      return runValue(analysis, request, surroundings);
+    case 'plot':
+      return runPlot(analysis, request);
+    case 'representation':
+      return runRepresentation(request);
+    case 'integrate':
+      return failure(request.theory.name, notOffered('integrate', 'the integrand can be evaluated and plotted'));
+    case 'extremize':
+      return failure(
+        request.theory.name,
+        notOffered('extremize', 'the one-loop factor can be plotted over the parameter'),
+      );
+    case 'compare':
+      return failure(
+        request.theories.map(({ name }) => name).join(', '),
+        notOffered('compare', 'both theories can be evaluated at points of your choice'),
+      );
+  }
+}
+
+function notOffered(word: string, instead: string): string {
+  return `\`${word}\` is not offered yet; ${instead}.`;
+}
+
+/** The request whose card has a given key. */
+export function findRequest(analysis: Analysis, key: string): Request | null {
+  for (const block of analysis.notebook.blocks) {
+    if (block.kind === 'prose' || block.kind === 'let' || block.kind === 'theory' || block.kind === 'spectrum')
+      continue;
+    if (requestKey(analysis, block) === key) return block;
+  }
+  return null;
+}

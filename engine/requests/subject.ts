@@ -1,0 +1,21 @@
+import { QUANTITIES, quantity } from '../spheres/quantity';
+import type { TheoryProduct } from '../spheres/sphere';
+import type { TheoryEntry } from './analysis';
+
+/** Why a theory cannot be asked anything, in words; null when it can. */
+export function unreadable(entry: TheoryEntry | undefined, name: string): string | null {
+  if (!entry) return `There is no theory \`${name}\` in this notebook.`;
+  if (entry.sphere === null) return `The theory \`${name}\` is on no sphere that is offered; see its \`sphere\` line.`;
+  if (!entry.built?.theory) return `The theory \`${name}\` has errors; mend them first.`;
+  return null;
+}
+
+export function theoryQuantity(entry: TheoryEntry, what: string): TheoryProduct | null {
+  if (entry.sphere === null || !entry.built?.theory) return null;
+  return quantity(entry.sphere, entry.built.theory, what);
+}
+
+export function unknownQuantity(entry: TheoryEntry, what: string): string {
+  const names = [...QUANTITIES, ...(entry.built?.theory?.multiplets ?? []).map(({ name }) => name)];
+  return `\`${what}\` is no quantity of \`${entry.block.name.name}\`; there are ${names.map((n) => `\`${n}\``).join(', ')}.`;
+}

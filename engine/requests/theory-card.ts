@@ -1,0 +1,165 @@
+import { functions } from '../functions/table';
+import type { FormulaForm, MultipletRow, Span, TheoryBlock } from '../language/tree';
+import { formLatex } from '../latex/form';
+import { printer } from '../latex/product';
+import { representationLatex } from '../latex/representation';
+import { symbolLatex } from '../latex/symbol';
+import type { Sphere } from '../spheres/sphere';
+import type { ReadRow } from '../theory/build';
+import type { TheoryGroup } from '../theory/theory';
+import type { Analysis, TheoryEntry } from './analysis';
+import { FORMS, formulaView } from './formula';
+import { printableTheory } from './formula-request';
+import type { Check, FormulaView, TheoryCard, TheoryColumn, TheoryRow } from './result';
+import { unreadable } from './subject';
+
+/** The card of a theory: charge table, checks, formulas. */
+export function theoryCard(
+  analysis: Analysis,
+  block: TheoryBlock,
+  notation: number,
+): Omit<TheoryCard, 'id' | 'span' | 'line'> {
+  const entry = analysis.theories.get(block.name.name);
+  const own = entry?.block === block ? entry : undefined;
+  const groups = own?.built?.groups ?? [];
+  const rows = own?.built?.rows ?? [];
+  const theory = own?.built?.theory ?? null;
+  const sphere = own?.sphere ?? null;
+  return {
+    kind: 'theory',
+    name: block.name.name,
+    nameSpan: block.name.span,
+    sphereLatex: theory && sphere ? caption(sphere, own) : (block.sphere?.sphere.name ?? ''),
+    supersymmetry: `N = ${block.supersymmetry?.value ?? sphere?.minimalSupersymmetry ?? 2}`,
+    columns: (block.header?.columns ?? []).map(({ name }) => column(name, groups)),
+    rows: block.multiplets.map((row) =>
+      tableRow(
+        analysis.text,
+        row,
+        rows.find((read) => read.row === row),
+      ),
+    ),
+    multipletKinds: sphere?.multiplets ?? [],
+    insertRowAt: insertion(analysis.text, block),
+    indent: indentOf(analysis.text, block),
+    checks: theory && sphere ? checks(own) : [],
+    formulas: formulas(analysis, own, block.name.name, notation),
+    notations: notationLabels(own),
+    parameters: theory ? [...analysis.parameters.keys()].filter((name) => mentions(theory, name)) : [],
+  };
+}
+
+function caption(sphere: Sphere, entry: TheoryEntry | undefined): string {
+  const theory = entry?.built?.theory;
+  if (!theory) return '';
+  const squashing = sphere.squashing
+    .filter(({ round, symbol }) => !(theory.geometry.get(symbol) ?? round).equals(round))
+    .map(({ symbol, round }) => `${symbolLatex(symbol)}=${formLatex(theory.geometry.get(symbol) ?? round)}`);
+  return [sphere.latex(theory), ...squashing].join(',\\ ');
+}
+
+function column(name: string, groups: readonly TheoryGroup[]): TheoryColumn {
+  if (name === 'R') return { name, latex: 'R', role: 'R', group: null };
+  const group = groups.find((candidate) => candidate.name === name);
+  if (!group) return { name, latex: symbolLatex(name), role: 'flavor', group: null };
+  const levels = [group.level, group.abelianLevel].filter((level) => level !== null).map(formLatex);
+  const subscript = levels.length === 0 ? '' : `_{${levels.join(',')}}`;
+  return { name, latex: group.group.latex + subscript, role: group.role, group: group.group.name };
+}
+
+function tableRow(text: string, row: MultipletRow, read: ReadRow | undefined): TheoryRow {
+  return {
+    kind: row.kind,
+    name: row.name.name,
+    latex: symbolLatex(row.name.name),
+    span: row.span,
+    lineSpan: wholeLine(text, row.span),
+    nameSpan: row.name.span,
+    cells: row.cells.map((cell, k) => ({ text: cell.text, span: cell.span, latex: cellLatex(read?.cells[k] ?? null) })),
+  };
+}
+
+function cellLatex(cell: ReadRow['cells'][number]): string | null {
+  if (cell === null) return null;
+  return cell.kind === 'R' ? formLatex(cell.form) : representationLatex(cell.representation);
+}
+
+/** From the start of the line to behind its line break. */
+function wholeLine(text: string, span: Span): Span {
+  let { from, to } = span;
+  while (from > 0 && text[from - 1] !== '\n' && text[from - 1] !== '\r') from--;
+  while (to < text.length && text[to] !== '\n' && text[to] !== '\r') to++;
+  if (text[to] === '\r' && text[to + 1] === '\n') to += 2;
+  else if (to < text.length) to++;
+  return { from, to };
+}
+
+function insertion(text: string, block: TheoryBlock): number | null {
+  const last = block.multiplets.at(-1) ?? block.header;
+  return last ? wholeLine(text, last.span).to : null;
+}
+
+function indentOf(text: string, block: TheoryBlock): string {
+  const line = block.header ?? block.groups[0] ?? block.sphere;
+  if (!line) return '  ';
+  const { from } = wholeLine(text, line.span);
+  return /^[ \t]+/.exec(text.slice(from, line.span.from + 1))?.[0] ?? '  ';
+}
+
+function checks(entry: TheoryEntry | undefined): Check[] {
+  const theory = entry?.built?.theory;
+  if (!theory || !entry?.sphere) return [];
+  return entry.sphere.conditions.flatMap((condition) =>
+    condition.examine(theory, printer).map(({ verdict, says, formula, source, detail }) => ({
+      id: detail === undefined ? condition.id : `${condition.id}:${detail}`,
+      verdict,
+      says,
+      formula,
+      source,
+    })),
+  );
+}
+
+/** All checks of a theory, for the batch output too. */
+export { checks as theoryChecks };
+
+function formulas(
+  analysis: Analysis,
+  entry: TheoryEntry | undefined,
+  name: string,
+  notation: number,
+): Record<FormulaForm, FormulaView> {
+  const printable = entry ? printableTheory(analysis, name, notation) : null;
+  const why = entry ? unreadable(entry, name) : 'Another theory above has the same name; rename one of them.';
+  const view = (form: FormulaForm): FormulaView =>
+    printable === null ? { kind: 'refused', message: why ?? '' } : formulaView(printable, form);
+  const [modes, unpaired, special, elementary] = FORMS.map(view) as [
+    FormulaView,
+    FormulaView,
+    FormulaView,
+    FormulaView,
+  ];
+  return { modes, unpaired, functions: special, elementary };
+}
+
+/** Notations of the special function that this sphere's formulas are written in. */
+function notationLabels(entry: TheoryEntry | undefined): string[] {
+  const theory = entry?.built?.theory;
+  if (!theory || !entry?.sphere) return [];
+  return functions[entry.sphere.specialFunction].notations.map(({ label }) => label);
+}
+
+function mentions(theory: NonNullable<TheoryEntry['built']>['theory'], name: string): boolean {
+  if (theory === null) return false;
+  const forms = [
+    ...theory.multiplets.map(({ rCharge }) => rCharge),
+    ...theory.groups.flatMap(({ level, abelianLevel, fi, theta, coupling }) => [
+      level,
+      abelianLevel,
+      fi,
+      theta,
+      coupling,
+    ]),
+  ];
+  return forms.some((form) => form?.symbols().includes(name) ?? false);
+}

@@ -1,0 +1,68 @@
+import { Form } from '../exact/form';
+import { functions } from '../functions/table';
+import { type Factor, substitute } from '../product/factor';
+import { simplify } from '../product/simplify';
+import type { Theory } from '../theory/theory';
+import type { TheoryWeights } from '../theory/weights';
+import type { Sphere, TheoryProduct } from './sphere';
+
+/** What can be asked of a theory besides one of its multiplets. */
+export const QUANTITIES = ['one-loop', 'vector', 'classical', 'integrand'] as const;
+
+/**
+ * The product for a quantity, before simplification: `one-loop`, `vector`, `classical`, `integrand`, or the factors of
+ * the multiplets of that name; null for a name the theory does not have.
+ */
+export function quantity(sphere: Sphere, theory: Theory, what: string): TheoryProduct | null {
+  switch (what) {
+    case 'vector':
+      return sphere.vector(theory);
+    case 'classical':
+      return sphere.classical(theory);
+    case 'one-loop':
+      return oneLoop(sphere, theory);
+    case 'integrand':
+      return [...sphere.classical(theory), ...oneLoop(sphere, theory)];
+    default: {
+      const named = theory.multiplets.filter(({ name }) => name === what);
+      return named.length === 0 ? null : named.flatMap((multiplet) => sphere.multiplet(theory, multiplet));
+    }
+  }
+}
+
+function oneLoop(sphere: Sphere, theory: Theory): TheoryProduct {
+  return [...sphere.vector(theory), ...theory.multiplets.flatMap((multiplet) => sphere.multiplet(theory, multiplet))];
+}
+
+/** A simplified product, and the parameter values it holds at; empty when it holds identically. */
+export interface ElementaryProduct {
+  readonly product: TheoryProduct;
+  readonly at: readonly { readonly name: string; readonly value: Form }[];
+}
+
+/**
+ * The product with as few special functions as the laws allow. Where they only cancel at the values that the notebook
+ * fixes (a parameter without a range), those values are put in, and named.
+ */
+export function elementary(
+  sphere: Sphere,
+  theory: Theory,
+  product: TheoryProduct,
+  fixed: ReadonlyMap<string, Form>,
+): ElementaryProduct {
+  const geometry = sphere.geometry(theory);
+  const identical = simplify(product, 'elementary', geometry);
+  const open = identical.filter(isSpecial);
+  if (open.length === 0) return { product: identical, at: [] };
+  const used = new Set(open.flatMap(({ argument }) => argument.symbols()).filter((name) => fixed.has(name)));
+  if (used.size === 0) return { product: identical, at: [] };
+  const atValues = substitute(product, (name) => fixed.get(name) ?? null);
+  const special = simplify(atValues, 'elementary', geometry);
+  if (special.filter(isSpecial).length >= open.length) return { product: identical, at: [] };
+  return { product: special, at: [...used].map((name) => ({ name, value: fixed.get(name) ?? Form.zero })) };
+}
+
+/** True for factors that are not elementary. */
+export function isSpecial(factor: Factor<TheoryWeights>): boolean {
+  return !functions[factor.name].elementary;
+}

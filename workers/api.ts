@@ -1,0 +1,51 @@
+import type { FormulaForm } from '../engine/language/tree';
+import { type Analysis, analyse } from '../engine/requests/analysis';
+import { type RepresentationChoice, representationChoices } from '../engine/requests/chooser';
+import { type LatexOut, latexOut } from '../engine/requests/document';
+import { type HoverText, hoverAt } from '../engine/requests/hover';
+import { outline } from '../engine/requests/outline';
+import { plotAt } from '../engine/requests/plot-at';
+import type { FailureResult, Outline, PlotResult, Progress, Result } from '../engine/requests/result';
+import { findRequest, run } from '../engine/requests/run';
+
+/** Digits of a value that does not say how many it wants. */
+const DIGITS = 30;
+
+/**
+ * What the worker offers. Plain data in, plain data out; nothing here knows that it runs in a worker, so that it can be
+ * tried anywhere.
+ */
+export interface EngineApi {
+  outline(text: string, notation: Readonly<Record<string, number>>): Outline;
+  run(text: string, key: string, progress: (progress: Progress) => void): Result | null;
+  plotFast(text: string, key: string, overrides: Readonly<Record<string, number>>): PlotResult | FailureResult | null;
+  document(text: string, name: string, form: FormulaForm, notation: number): LatexOut;
+  representations(group: string, limit: number): readonly RepresentationChoice[];
+  hover(text: string, offset: number): HoverText | null;
+}
+
+/** An engine that remembers the last text it read. `now` is a clock in seconds. */
+export function createEngineApi(now: () => number): EngineApi {
+  let last: Analysis | null = null;
+  const read = (text: string): Analysis => {
+    if (last?.text !== text) last = analyse(text);
+    return last;
+  };
+  return {
+    outline: (text, notation) => outline(read(text), notation),
+    run: (text, key, progress) => {
+      const analysis = read(text);
+      const request = findRequest(analysis, key);
+      if (request === null) return null;
+      const report = (step: Progress): boolean => {
+        progress(step);
+        return true;
+      };
+      return run(analysis, request, { now, progress: report, digits: DIGITS });
+    },
+    plotFast: (text, key, overrides) => plotAt(read(text), key, overrides),
+    document: (text, name, form, notation) => latexOut(read(text), name, form, notation),
+    representations: representationChoices,
+    hover: (text, offset) => hoverAt(read(text), offset),
+  };
+}

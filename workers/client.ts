@@ -1,0 +1,148 @@
+import { proxy, type Remote, releaseProxy, wrap } from 'comlink';
+import type { LatexOut } from '../engine/requests/document';
+import type { FailureResult, PlotResult, Result } from '../engine/requests/result';
+import type { EngineApi } from './api';
+import type { EngineClient } from './types';
+
+/** A worker and the way to it; `end` stops it at once, whatever it is doing. */
+export interface EngineConnection {
+  readonly remote: Remote<EngineApi>;
+  readonly end: () => void;
+  /** Called when the worker dies of itself. */
+  readonly onCrash: (callback: () => void) => void;
+}
+
+/** Kinds of calls that overtake each other: of each kind only the latest answer counts. */
+type Kind = 'outline' | 'plot' | 'hover';
+
+/** A call that takes longer than this has the worker replaced: nothing that a keystroke asks for needs as long. */
+const STUCK_AFTER_MILLISECONDS = 20_000;
+
+/**
+ * The page's way to the engine. Two workers: one answers keystrokes and sliders, the other computes requests, so that
+ * long work never stands in the way of typing. Either is replaced when it is stuck, stopped or has crashed; the text
+ * lives in the page and is not touched by that.
+ */
+export function createEngineClient(connect: () => EngineConnection = connectWorker): EngineClient {
+  const restarts = new Set<() => void>();
+  const quick = new Channel(connect, restarts);
+  const slow = new Channel(connect, restarts);
+  const latest: Record<Kind, number> = { outline: 0, plot: 0, hover: 0 };
+  /** Runs a call of which only the latest counts; an overtaken one answers null. */
+  const newest = async <T>(kind: Kind, call: (api: Remote<EngineApi>) => Promise<T>): Promise<T | null> => {
+    latest[kind] += 1;
+    const own = latest[kind];
+    const answer = await quick.call(call, STUCK_AFTER_MILLISECONDS);
+    return own === latest[kind] ? answer : null;
+  };
+  // Requests run one after the other: a queue, so that stopping one never ends another's work unasked.
+  let queue: Promise<unknown> = Promise.resolve();
+  return {
+    outline: (text, options) => newest('outline', (api) => api.outline(text, options.notation)),
+    plotFast: (text, key, overrides) =>
+      newest<PlotResult | FailureResult | null>('plot', async (api) => api.plotFast(text, key, overrides)),
+    hover: (text, offset) => newest('hover', (api) => api.hover(text, offset)),
+    run: (text, key, _revision, onProgress, signal) => {
+      const work = async () => {
+        if (signal.aborted) return null;
+        const stop = () => slow.restart();
+        signal.addEventListener('abort', stop, { once: true });
+        try {
+          return await slow.call<Result | null>(async (api) => api.run(text, key, proxy(onProgress)), null);
+        } finally {
+          signal.removeEventListener('abort', stop);
+        }
+      };
+      const result: Promise<Result | null> = queue.then(work, work);
+      queue = result.catch(() => undefined);
+      return result;
+    },
+    document: async (text, name, form, options) => {
+      const out = await quick.ask<LatexOut>(async (api) => api.document(text, name, form, options.notation[name] ?? 0));
+      if (out.kind === 'refused') return { snippet: '', document: '', refused: out.message };
+      return { snippet: out.snippet, document: out.document };
+    },
+    representations: (group, limit) => quick.ask((api) => api.representations(group, limit)),
+    dispose: () => {
+      quick.end();
+      slow.end();
+    },
+    onRestart: (callback) => {
+      restarts.add(callback);
+    },
+  };
+}
+
+/** One worker, replaced when needed. Calls that were waiting when it ended answer null. */
+class Channel {
+  readonly #connect: () => EngineConnection;
+  readonly #restarts: ReadonlySet<() => void>;
+  #connection: EngineConnection | null = null;
+  #ended = new AbortController();
+
+  constructor(connect: () => EngineConnection, restarts: ReadonlySet<() => void>) {
+    this.#connect = connect;
+    this.#restarts = restarts;
+  }
+
+  /** The answer, or null when the worker ended before it came. `limit` in milliseconds, null for none. */
+  async call<T>(ask: (api: Remote<EngineApi>) => Promise<T>, limit: number | null): Promise<T | null> {
+    const connection = this.#open();
+    const { signal } = this.#ended;
+    const ended = new Promise<null>((resolve) => {
+      signal.addEventListener('abort', () => resolve(null), { once: true });
+    });
+    const timer = limit === null ? null : setTimeout(() => this.#connection === connection && this.restart(), limit);
+    try {
+      return await Promise.race([ask(connection.remote), ended]);
+    } finally {
+      if (timer !== null) clearTimeout(timer);
+    }
+  }
+
+  /** The answer of a call that is asked again if the worker ends under it, once. */
+  async ask<T>(call: (api: Remote<EngineApi>) => Promise<T>): Promise<T> {
+    const first = await this.call(call, STUCK_AFTER_MILLISECONDS);
+    if (first !== null) return first;
+    const second = await this.call(call, STUCK_AFTER_MILLISECONDS);
+    if (second === null) throw new Error('The engine ended twice under the same call.');
+    return second;
+  }
+
+  restart(): void {
+    this.end();
+    for (const callback of this.#restarts) callback();
+  }
+
+  end(): void {
+    const connection = this.#connection;
+    this.#connection = null;
+    this.#ended.abort();
+    this.#ended = new AbortController();
+    if (connection === null) return;
+    connection.remote[releaseProxy]();
+    connection.end();
+  }
+
+  #open(): EngineConnection {
+    if (this.#connection) return this.#connection;
+    const connection = this.#connect();
+    connection.onCrash(() => {
+      if (this.#connection === connection) this.restart();
+    });
+    this.#connection = connection;
+    return connection;
+  }
+}
+
+function connectWorker(): EngineConnection {
+  const worker = new Worker(new URL('./engine.worker.ts', import.meta.url), { type: 'module' });
+  return {
+    remote: wrap<EngineApi>(worker),
+    end: () => worker.terminate(),
+    onCrash: (callback) => {
+      worker.addEventListener('error', callback);
+      worker.addEventListener('messageerror', callback);
+    },
+  };
+}

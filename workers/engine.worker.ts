@@ -1,0 +1,4 @@
+import { expose } from 'comlink';
+import { createEngineApi } from './api';
+
+expose(createEngineApi(() => performance.now() / 1000));
