@@ -151,12 +151,13 @@ function indices(parameters: readonly Form[], print: Printer): string {
 
 function periods(parameters: readonly Form[], print: Printer): string {
   return bothPeriods(parameters)
-    .map((period) => print.form(period))
+    .map((period) => periodText(period, print))
     .join(',');
 }
 
 function imaginaryPeriods(parameters: readonly Form[], print: Printer): string {
+  if (isRound(parameters)) return 'i,i';
   return bothPeriods(parameters)
-    .map((period) => print.form(Form.i.mul(period)))
+    .map((period) => `i${asFactor(periodText(period, print))}`)
     .join(',');
 }

@@ -3,7 +3,7 @@ import type { Form } from '../exact/form';
 import type { Rational } from '../exact/rational';
 
 /** The functions a product of factors is made of. The table in `functions/table.ts` has one entry for each. */
-export type FunctionName = 'hyperbolicSine' | 'hyperbolicCosine' | 'doubleSine' | 'linear' | 'exponential';
+export type FunctionName = 'hyperbolicSine' | 'hyperbolicCosine' | 'doubleSine' | 'gamma' | 'linear' | 'exponential';
 
 /** A function of an argument and parameters (periods), as one entry of a product. */
 export interface FunctionAt {
@@ -47,7 +47,7 @@ export interface DoubleKernel {
    */
   readonly addLog: (
     xRe: Float64Array,
-    xIm: Float64Array,
+    xIm: Float64Array | null,
     power: number,
     outRe: Float64Array,
     outIm: Float64Array,

@@ -1,5 +1,6 @@
 import { doubleSine } from './double-sine';
 import { exponential } from './exponential';
+import { gamma } from './gamma';
 import { hyperbolicCosine } from './hyperbolic-cosine';
 import { hyperbolicSine } from './hyperbolic-sine';
 import { linear } from './linear';
@@ -10,6 +11,7 @@ export const functions = {
   hyperbolicSine,
   hyperbolicCosine,
   doubleSine,
+  gamma,
   linear,
   exponential,
 } satisfies Record<FunctionName, SpecialFunction> as Record<FunctionName, SpecialFunction>;
