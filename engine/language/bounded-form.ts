@@ -23,6 +23,9 @@ const MAXIMAL_STEPS = 20_000;
 /** Terms added at once; between two such chunks the size is checked. */
 const CHUNK = 32;
 
+/** A root of a rational number is searched for square factors. */
+const ROOT_STEPS = 200;
+
 /** Bits from which arithmetic is charged more: its time grows with the square. */
 const CHEAP_BITS = 512;
 
@@ -36,8 +39,9 @@ export class BoundedForms {
   sum(forms: readonly Form[]): Form | FormRefusal {
     let total: Form | FormRefusal = Form.zero;
     for (let at = 0; at < forms.length; at += CHUNK) {
-      const chunk: Form[] = [total, ...forms.slice(at, at + CHUNK)];
-      total = this.#bounded(() => Form.sum(chunk), chunk.length);
+      const chunk: Form[] = at === 0 ? forms.slice(0, CHUNK) : [total, ...forms.slice(at, at + CHUNK)];
+      const terms: number = total.terms.length + CHUNK;
+      total = this.#bounded(() => Form.sum(chunk), terms);
       if (typeof total === 'string') return total;
     }
     return total;
@@ -70,7 +74,7 @@ export class BoundedForms {
 
   call(name: CallName, argument: Form): Form | FormRefusal {
     if (name === 'log' && argument.isZero()) return 'log-of-zero';
-    return this.#bounded(() => Form.call(name, argument), CHUNK);
+    return this.#bounded(() => Form.call(name, argument), name === 'sqrt' ? ROOT_STEPS : 1);
   }
 
   #inverse(form: Form): Form | FormRefusal {

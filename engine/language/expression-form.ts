@@ -1,22 +1,26 @@
 import { Form } from '../exact/form';
 import { BoundedForms, EULER, type FormRefusal, MAXIMAL_EXPONENT } from './bounded-form';
 import { type ExpressionNode, type Factor, parseExpression } from './expression-syntax';
-import type { Problems } from './problems';
+import type { Reading } from './reading';
 import type { TokenReader } from './token-reader';
 import type { Expression, Name } from './tree';
 
 /** Reads an expression and its exact value; null when something is wrong, which is then reported. */
 export function readExpression(reader: TokenReader): Expression | null {
   const node = parseExpression(reader);
-  return node && expressionOf(node, reader.text, reader.problems);
+  return node && expressionOf(node, reader.reading);
 }
 
 /** The exact value of an expression that was read; null when it has none, which is then reported. */
-export function expressionOf(node: ExpressionNode, text: string, problems: Problems): Expression | null {
+export function expressionOf(node: ExpressionNode, reading: Reading): Expression | null {
   const { from, to } = node;
-  const evaluator = new Evaluator(problems);
-  const form = evaluator.form(node);
-  return form && { span: { from, to }, text: text.slice(from, to), form, names: evaluator.names };
+  const text = reading.text.slice(from, to);
+  const form = reading.forms.get(text) ?? new Evaluator(reading).form(node);
+  if (!form) return null;
+  reading.forms.set(text, form);
+  const names: Name[] = [];
+  collectNames(node, names);
+  return { span: { from, to }, text, form, names };
 }
 
 const CONSTANT_FORMS: ReadonlyMap<string, Form> = new Map([
@@ -25,21 +29,46 @@ const CONSTANT_FORMS: ReadonlyMap<string, Form> = new Map([
   ['e', EULER],
 ]);
 
+function collectNames(node: ExpressionNode, into: Name[]): void {
+  switch (node.kind) {
+    case 'number':
+      return;
+    case 'name':
+      if (!CONSTANT_FORMS.has(node.name)) into.push({ name: node.name, span: { from: node.from, to: node.to } });
+      return;
+    case 'negation':
+      collectNames(node.operand, into);
+      return;
+    case 'sum':
+      for (const term of node.terms) collectNames(term, into);
+      return;
+    case 'product':
+      for (const factor of node.factors) collectNames(factor.node, into);
+      return;
+    case 'power':
+      collectNames(node.base, into);
+      collectNames(node.exponent, into);
+      return;
+    case 'call':
+      collectNames(node.argument, into);
+      return;
+  }
+}
+
 class Evaluator {
-  readonly names: Name[] = [];
-  readonly #problems: Problems;
+  readonly #reading: Reading;
   readonly #forms = new BoundedForms();
 
-  constructor(problems: Problems) {
-    this.#problems = problems;
+  constructor(reading: Reading) {
+    this.#reading = reading;
   }
 
   form(node: ExpressionNode): Form | null {
     switch (node.kind) {
       case 'number':
-        return this.#accept(this.#forms.sum([Form.number(node.value)]), node);
+        return this.#remembered(node, () => this.#forms.sum([Form.number(node.value)]));
       case 'name':
-        return this.#name(node.name, node);
+        return this.#remembered(node, () => CONSTANT_FORMS.get(node.name) ?? Form.symbol(node.name));
       case 'negation':
         return this.form(node.operand)?.neg() ?? null;
       case 'sum':
@@ -58,11 +87,13 @@ class Evaluator {
     }
   }
 
-  #name(name: string, node: ExpressionNode): Form {
-    const constant = CONSTANT_FORMS.get(name);
-    if (constant) return constant;
-    this.names.push({ name, span: { from: node.from, to: node.to } });
-    return Form.symbol(name);
+  #remembered(node: ExpressionNode, compute: () => Form | FormRefusal): Form | null {
+    const text = this.#reading.text.slice(node.from, node.to);
+    const known = this.#reading.forms.get(text);
+    if (known) return known;
+    const form = this.#accept(compute(), node);
+    if (form) this.#reading.forms.set(text, form);
+    return form;
   }
 
   #sum(terms: readonly ExpressionNode[], node: ExpressionNode): Form | null {
@@ -89,6 +120,6 @@ class Evaluator {
 
   #accept(form: Form | FormRefusal, node: ExpressionNode): Form | null {
     if (typeof form !== 'string') return form;
-    return this.#problems.report(form, node, { limit: `${MAXIMAL_EXPONENT}` });
+    return this.#reading.report(form, node, { limit: `${MAXIMAL_EXPONENT}` });
   }
 }

@@ -38,7 +38,8 @@ const TIMES = new Set(['*', '\u00b7']);
  * as `*` does, from left to right. Null when something is wrong, which is then reported.
  */
 export function parseExpression(reader: TokenReader): ExpressionNode | null {
-  return new ExpressionParser(reader).sum();
+  const node = new ExpressionParser(reader).sum();
+  return node && endsWell(reader) ? node : null;
 }
 
 class ExpressionParser {
@@ -66,13 +67,14 @@ class ExpressionParser {
     const first = this.unary();
     if (!first) return null;
     const factors: Factor[] = [{ node: first, divides: false }];
+    let warned = false;
     for (;;) {
       const token = this.#reader.peek();
       if (!token) break;
       const divides = token.text === '/';
       if (divides || TIMES.has(token.text)) this.#reader.next();
-      else if (this.#juxtaposes(token)) this.#warnIfMisread(factors, first, token);
-      else break;
+      else if (!this.#juxtaposes(token)) break;
+      else if (!warned) warned = this.#warnIfMisread(factors, first, token);
       const node = this.unary();
       if (!node) return null;
       factors.push({ node, divides });
@@ -101,22 +103,20 @@ class ExpressionParser {
 
   primary(): ExpressionNode | null {
     const token = this.#reader.peek();
-    const { problems } = this.#reader;
-    if (!token) return problems.report('expression-missing', this.#reader.last);
+    if (!token) return this.#reader.report('expression-missing', this.#reader.last);
     if (token.kind === 'number') return this.#number(token);
     if (token.text === '(') return this.#parenthesised();
     if (token.kind === 'junk') return this.#reader.unexpected(token, 'an expression');
     if (token.kind !== 'name' || CLAUSE_WORDS.has(token.text)) {
-      return problems.report('expression-expected', token, { word: token.text });
+      return this.#reader.report('expression-expected', token, { word: token.text });
     }
     return this.#nameOrCall(token);
   }
 
   #number(token: Token): ExpressionNode | null {
     this.#reader.next();
-    const { problems } = this.#reader;
     const value = token.text.length <= MAXIMAL_DIGITS ? Rational.parse(token.text) : null;
-    if (!value) return problems.report('number-too-long', token, { digits: `${MAXIMAL_DIGITS}` });
+    if (!value) return this.#reader.report('number-too-long', token, { digits: `${MAXIMAL_DIGITS}` });
     return { kind: 'number', value, from: token.from, to: token.to };
   }
 
@@ -124,38 +124,40 @@ class ExpressionParser {
     const opening = this.#reader.next() as Token;
     const inside = this.#nested(() => this.sum());
     if (!inside) return null;
+    if (!endsWell(this.#reader)) return null;
     const closing = this.#reader.peek();
     if (closing?.text !== ')') {
-      if (closing && closing.text !== ',' && closing.text !== ';') this.#reader.expectEnd('`)`');
-      else this.#reader.problems.report('parenthesis-open', opening);
-      return null;
+      const separates = !closing || closing.text === ',' || closing.text === ';';
+      return separates
+        ? this.#reader.report('parenthesis-open', opening)
+        : this.#reader.unexpected(closing, 'an operator or `)`');
     }
     this.#reader.next();
     return { ...inside, from: opening.from, to: closing.to };
   }
 
   #nameOrCall(token: Token): ExpressionNode | null {
-    const { problems } = this.#reader;
     this.#reader.next();
     const name = spellName(token.text);
     const called = this.#reader.at('(');
     const known = EXPRESSION_FUNCTIONS.find((word) => word === name);
     if (known) {
-      if (!called) return problems.report('function-without-argument', token, { name });
+      if (!called) return this.#reader.report('function-without-argument', token, { name });
       const argument = this.#parenthesised();
       return argument && { kind: 'call', function: known, argument, from: token.from, to: this.#reader.last.to };
     }
     if (called && this.#reader.tight) {
-      if (name in SPECIAL_FUNCTIONS) return problems.report('special-function-inside', token, { name });
+      if (Object.hasOwn(SPECIAL_FUNCTIONS, name))
+        return this.#reader.report('special-function-inside', token, { name });
       const meant = nearest(name, EXPRESSION_FUNCTIONS);
-      if (meant) return problems.report('function-unknown', token, { name, meant });
+      if (meant) return this.#reader.report('function-unknown', token, { name, meant });
     }
     return { kind: 'name', name, from: token.from, to: token.to };
   }
 
   #nested(read: () => ExpressionNode | null): ExpressionNode | null {
     if (this.#depth >= MAXIMAL_DEPTH) {
-      return this.#reader.problems.report('expression-too-deep', this.#reader.here, { depth: `${MAXIMAL_DEPTH}` });
+      return this.#reader.report('expression-too-deep', this.#reader.here, { depth: `${MAXIMAL_DEPTH}` });
     }
     this.#depth++;
     const node = read();
@@ -176,17 +178,24 @@ class ExpressionParser {
   }
 
   /** `1/2r` and `x^2y` are read from left to right; somebody may have meant `1/(2r)` or `x^(2y)`. */
-  #warnIfMisread(factors: readonly Factor[], first: ExpressionNode, token: Token): void {
+  #warnIfMisread(factors: readonly Factor[], first: ExpressionNode, token: Token): boolean {
     const reader = this.#reader;
     const previous = factors.at(-1);
-    if (!previous || !reader.tight) return;
-    const left = reader.textFrom(first.from);
-    if (previous.divides) {
-      reader.problems.report('product-after-division', token, { left, right: token.text }, 'warning');
-    } else if (previous.node.kind === 'power' && token.kind === 'name' && reader.peek(-1)?.kind === 'number') {
-      reader.problems.report('product-after-power', token, { left, right: token.text }, 'warning');
-    }
+    if (!previous || !reader.tight) return false;
+    const afterPower = previous.node.kind === 'power' && token.kind === 'name' && reader.peek(-1)?.kind === 'number';
+    if (!previous.divides && !afterPower) return false;
+    const code = previous.divides ? 'product-after-division' : 'product-after-power';
+    reader.report(code, token, { left: reader.textFrom(first.from), right: token.text }, 'warning');
+    return true;
   }
+}
+
+/** Reports a name or a number that follows an expression without anything between. */
+function endsWell(reader: TokenReader): boolean {
+  const token = reader.peek();
+  const name = token?.kind === 'name' && !reader.stopsAt(token);
+  const number = token?.kind === 'number' && reader.peek(1)?.text !== 'digits';
+  return !token || !(name || number) || reader.report('missing-operator', token, { word: token.text }) !== null;
 }
 
 function negate(operand: ExpressionNode, from: number): ExpressionNode {

@@ -1,6 +1,6 @@
 import { nearest } from './near-words';
-import type { Problems } from './problems';
-import type { Piece } from './tokens';
+import type { Reading } from './reading';
+import type { Piece, ProsePiece } from './tokens';
 import type { Span } from './tree';
 import { SPECTRUM_LINE_WORDS, THEORY_LINE_WORDS, WORK_WORDS, type WorkWord } from './words';
 
@@ -21,13 +21,14 @@ const LOOKS_LIKE_WORK: Readonly<Record<WorkWord, RegExp>> = {
   compare: /^\S+\s+with\b/,
 };
 
-/** Hints where prose looks like work: a misspelt word, a line that is not indented or should not be. */
-export function hintsFor(pieces: readonly Piece[], text: string, problems: Problems): void {
-  pieces.forEach((piece, k) => {
-    if (piece.kind !== 'paragraph') return;
-    const hint = hintFor(text.slice(piece.from, piece.to), piece.from, pieces[k - 1]);
-    if (hint) problems.report(hint.code, hint, hint.data, 'hint');
-  });
+/**
+ * A hint where a paragraph looks like work: a misspelt word, a line that is not indented or should not be. `before` is
+ * the piece in front of it.
+ */
+export function hintAt(paragraph: ProsePiece, before: Piece | null, reading: Reading): void {
+  const { from, to } = paragraph;
+  const hint = hintFor(reading.text.slice(from, to), from, before);
+  if (hint) reading.report(hint.code, hint, hint.data, 'hint');
 }
 
 interface Hint extends Span {
@@ -35,7 +36,7 @@ interface Hint extends Span {
   readonly data: Readonly<Record<string, string>>;
 }
 
-function hintFor(paragraph: string, from: number, before: Piece | undefined): Hint | null {
+function hintFor(paragraph: string, from: number, before: Piece | null): Hint | null {
   const line = /^[^\r\n]*/.exec(paragraph)?.[0] ?? '';
   const indent = line.length - line.trimStart().length;
   const word = /^\S+/.exec(line.slice(indent))?.[0] ?? '';
@@ -46,13 +47,16 @@ function hintFor(paragraph: string, from: number, before: Piece | undefined): Hi
   if (block && LINE_WORDS[block]?.some((candidate) => candidate === word)) {
     return { ...at, code: 'hint-line-not-indented', data: { word, block } };
   }
-  const meant = meantWord(word, line.slice(word.length).trim());
+  const meant = meantWord(word, line.slice(word.length, word.length + LOOK_AHEAD).trim());
   if (meant) return { ...at, code: 'hint-work-word', data: { word, meant } };
   if (LIST_OR_QUOTE.test(line) || !/[\r\n][^\S\r\n]+\S/.test(paragraph)) return null;
   return { ...at, code: 'hint-paragraph-indented', data: {} };
 }
 
 const LONGEST_NEWLINE = 2;
+
+/** How much of a line is looked at; the patterns cost quadratic time. */
+const LOOK_AHEAD = 200;
 
 /** Words that begin a line of a block, where one that is not indented gives the block away. */
 const LINE_WORDS: Partial<Readonly<Record<WorkWord, readonly string[]>>> = {

@@ -38,3 +38,12 @@ const NOT_ASCII = /\P{ASCII}/u;
 export function spellName(word: string): string {
   return NOT_ASCII.test(word) ? word.replace(/\P{ASCII}/gu, (letter) => SPELLING.get(letter) ?? letter) : word;
 }
+
+/** As many names as a sentence takes. */
+const MOST_LISTED = 12;
+
+/** Names as a list in a sentence. */
+export function listed(names: readonly string[]): string {
+  const shown = names.slice(0, MOST_LISTED).join(', ');
+  return names.length > MOST_LISTED ? `${shown}, ...` : shown;
+}

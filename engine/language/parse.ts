@@ -1,12 +1,12 @@
-import { hintsFor } from './hints';
+import { hintAt } from './hints';
 import { parser } from './notebook.parser.gen';
-import { Problems } from './problems';
 import { readLet } from './read-let';
 import { readRequest } from './read-request';
 import { readSpectrum } from './read-spectrum';
 import { readTheory } from './read-theory';
+import { Reading } from './reading';
 import { reportSecondNames } from './second-names';
-import { piecesOf, type WorkPiece } from './tokens';
+import { type Piece, piecesOf, type WorkPiece } from './tokens';
 import type { Block, Notebook, Prose } from './tree';
 
 /**
@@ -15,42 +15,43 @@ import type { Block, Notebook, Prose } from './tree';
  * Time is linear in the length of the text.
  */
 export function parseNotebook(text: string): Notebook {
-  const problems = new Problems();
-  const pieces = piecesOf(parser.parse(text), text);
+  const reading = new Reading(text);
   const blocks: Block[] = [];
+  let before: Piece | null = null;
   let proseFrom: number | null = null;
   let proseTo = 0;
   const endProse = (): void => {
     if (proseFrom !== null) blocks.push(proseBlock(proseFrom, proseTo, text));
     proseFrom = null;
   };
-  for (const piece of pieces) {
+  for (const piece of piecesOf(parser.parse(text), text)) {
     if (piece.kind === 'work') {
       endProse();
-      const block = readWork(piece, text, problems);
+      const block = readWork(piece, reading);
       if (block) blocks.push(block);
     } else {
+      if (piece.kind === 'paragraph') hintAt(piece, before, reading);
       proseFrom ??= piece.from;
       proseTo = piece.to;
     }
+    before = piece;
   }
   endProse();
-  reportSecondNames(blocks, text, problems);
-  hintsFor(pieces, text, problems);
-  problems.list.sort((a, b) => a.span.from - b.span.from || a.span.to - b.span.to);
-  return { blocks, diagnostics: problems.list };
+  reportSecondNames(blocks, reading);
+  reading.diagnostics.sort((a, b) => a.span.from - b.span.from || a.span.to - b.span.to);
+  return { blocks, diagnostics: reading.diagnostics };
 }
 
-function readWork(piece: WorkPiece, text: string, problems: Problems): Block | null {
+function readWork(piece: WorkPiece, reading: Reading): Block | null {
   switch (piece.word) {
     case 'let':
-      return readLet(piece, text, problems);
+      return readLet(piece, reading);
     case 'theory':
-      return readTheory(piece, text, problems);
+      return readTheory(piece, reading);
     case 'spectrum':
-      return readSpectrum(piece, text, problems);
+      return readSpectrum(piece, reading);
     default:
-      return readRequest(piece.word, piece, text, problems);
+      return readRequest(piece.word, piece, reading);
   }
 }
 

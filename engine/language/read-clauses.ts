@@ -31,11 +31,11 @@ export function readClauses(reader: TokenReader, taken: ClausesTaken): Clauses |
   let digits: Digits | null = null;
   while (!reader.atEnd) {
     const comma = reader.take(',');
-    if (comma && reader.atEnd) return reader.problems.report('comma-last', comma);
+    if (comma && reader.atEnd) return reader.report('comma-last', comma);
     const token = reader.peek();
     if (!token) break;
     const kind = token.kind === 'number' && reader.peek(1)?.text === 'digits' ? 'digits' : token.text;
-    if (found.has(kind)) return reader.problems.report('clause-twice', token, { word: kind });
+    if (found.has(kind)) return reader.report('clause-twice', token, { word: kind });
     found.set(kind, token);
     if (kind === 'at' && taken.at) {
       reader.next();
@@ -86,7 +86,7 @@ function readList<T>(
     const item = read(reader);
     if (!item) return null;
     const { name, span } = nameOf(item);
-    if (seen.has(name)) return reader.problems.report('set-twice', span, { name });
+    if (seen.has(name)) return reader.report('set-twice', span, { name });
     seen.add(name);
     items.push(item);
     if (!reader.at(',') || !goesOn(reader)) return items;
@@ -119,7 +119,7 @@ function readDigits(reader: TokenReader): Digits | null {
   if (!number || !word) return null;
   const span = { from: number.from, to: word.to };
   if (!/^\d+$/.test(number.text) || number.text.length > LONGEST_DIGITS || Number(number.text) === 0) {
-    return reader.problems.report('digits-value', number, { word: number.text });
+    return reader.report('digits-value', number, { word: number.text });
   }
   return { value: Number(number.text), span };
 }

@@ -1,5 +1,6 @@
 import { readExpression } from './expression-form';
 import { nearest } from './near-words';
+import { readOptions } from './read-options';
 import type { TokenReader } from './token-reader';
 import type { Token } from './tokens';
 import type { GroupLine, GroupOption, Word } from './tree';
@@ -10,41 +11,30 @@ export function readGroupLine(reader: TokenReader, word: Token): GroupLine | nul
   const role = word.text === 'gauge' ? 'gauge' : 'flavor';
   const name = reader.name('group-name-missing', 'the name of the group');
   if (!name) return null;
-  if (name.name === 'R') return reader.problems.report('group-named-r', name.span);
+  if (name.name === 'R') return reader.report('group-named-r', name.span);
   if (!reader.expect('=', '`=` and a group such as `U(2)`')) return null;
   const group = readGroupWord(reader);
   if (!group) return null;
-  const options: GroupOption[] = [];
-  while (!reader.atEnd) {
-    if (!reader.take(',')) {
-      const token = reader.here;
-      const text = reader.peek()?.text ?? '';
-      if (GROUP_OPTIONS.some((option) => option === text))
-        reader.problems.report('comma-missing', token, { word: text });
-      else reader.expectEnd('a comma and an option');
-      reader.skipPastComma();
-      continue;
-    }
-    const option = readOption(reader, role);
-    if (!option) reader.skipPastComma();
-    else if (options.some((other) => other.kind === option.kind)) {
-      reader.problems.report('option-twice', option.span, { word: option.kind });
-    } else options.push(option);
-  }
+  const options = readOptions(
+    reader,
+    () => readOption(reader, role),
+    () => GROUP_OPTIONS.some((option) => reader.at(option)),
+    (option) => option.kind,
+    'a comma and an option',
+  );
   return { span: { from: word.from, to: reader.last.to }, role, name, group, options };
 }
 
 /** `U(2)`, `E8`: a name and, in parentheses, a whole number. Which groups there are is decided later. */
 export function readGroupWord(reader: TokenReader): Word | null {
-  const { problems } = reader;
   const name = reader.peek();
-  if (!name) return problems.report('group-missing', reader.last);
+  if (!name) return reader.report('group-missing', reader.last);
   if (name.kind !== 'name') return reader.unexpected(name, 'a group such as `U(2)`');
   reader.next();
   if (!reader.take('(')) return { text: name.text, span: { from: name.from, to: name.to } };
   const rank = reader.peek();
   if (!rank || !/^\d+$/.test(rank.text)) {
-    return problems.report('group-rank', rank ?? reader.last, { group: name.text, word: rank?.text ?? '' });
+    return reader.report('group-rank', rank ?? reader.last, { group: name.text, word: rank?.text ?? '' });
   }
   reader.next();
   const closing = reader.expect(')', '`)`');
@@ -52,19 +42,18 @@ export function readGroupWord(reader: TokenReader): Word | null {
 }
 
 function readOption(reader: TokenReader, role: GroupLine['role']): GroupOption | null {
-  const { problems } = reader;
   const word = reader.peek();
-  if (!word) return problems.report('option-missing', reader.last);
+  if (!word) return reader.report('option-missing', reader.last);
   const kind = GROUP_OPTIONS.find((option) => option === word.text);
   if (!kind) {
     if (word.kind === 'junk') return reader.unexpected(word, 'an option');
-    return problems.report('option-unknown', word, { word: word.text, meant: nearest(word.text, GROUP_OPTIONS) ?? '' });
+    return reader.report('option-unknown', word, { word: word.text, meant: nearest(word.text, GROUP_OPTIONS) ?? '' });
   }
   reader.next();
   const option = readOptionValue(reader, kind, word);
   if (!option) return null;
   if ((kind === 'coulomb' && role === 'flavor') || (kind === 'mass' && role === 'gauge')) {
-    return problems.report('option-role', word, { word: kind, role, instead: kind === 'mass' ? 'coulomb' : 'mass' });
+    return reader.report('option-role', word, { word: kind, role, instead: kind === 'mass' ? 'coulomb' : 'mass' });
   }
   return option;
 }
@@ -74,7 +63,7 @@ function readOptionValue(reader: TokenReader, kind: GroupOptionWord, word: Token
     const symbol = reader.symbol('option-value-missing', 'the name of the coordinates');
     return symbol && { kind, symbol, span: { from: word.from, to: symbol.span.to } };
   }
-  if (reader.atEnd || reader.at(',')) return reader.problems.report('option-value-missing', word, { after: kind });
+  if (reader.atEnd || reader.at(',')) return reader.report('option-value-missing', word, { after: kind });
   const value = readExpression(reader);
   return value && { kind, value, span: { from: word.from, to: value.span.to } };
 }

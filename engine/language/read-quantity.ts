@@ -21,15 +21,15 @@ export function readQuantity(reader: TokenReader): Quantity | null {
   const start = reader.here.from;
   const log = reader.at('log') && reader.peek(1)?.text !== 'of' && reader.next() !== null;
   const token = reader.peek();
-  if (!token) return reader.problems.report('quantity-missing', reader.last);
+  if (!token) return reader.report('quantity-missing', reader.last);
   if (token.kind !== 'name') {
     if (token.kind === 'junk') return reader.unexpected(token, QUANTITY);
-    return reader.problems.report('quantity-expected', token, { word: token.text });
+    return reader.report('quantity-expected', token, { word: token.text });
   }
   if (reader.peek(1)?.text === '(') return readFunction(reader, token, log, start);
   const what = readWhat(reader);
   if (!what) return null;
-  if (!reader.take('of')) return reader.problems.report('of-missing', reader.here, { what: what.name });
+  if (!reader.take('of')) return reader.report('of-missing', reader.here, { what: what.name });
   const subject = reader.name('subject-missing', 'the name of a theory or a spectrum');
   if (!subject) return null;
   const span = { from: start, to: subject.span.to };
@@ -64,14 +64,13 @@ function readPrescription(reader: TokenReader): (typeof PRESCRIPTIONS)[number] |
   if (!by) return 'factors';
   const token = reader.next();
   const prescription = PRESCRIPTIONS.find((word) => word === token?.text);
-  return prescription ?? reader.problems.report('prescription-unknown', token ?? by, { word: token?.text ?? '' });
+  return prescription ?? reader.report('prescription-unknown', token ?? by, { word: token?.text ?? '' });
 }
 
 function readFunction(reader: TokenReader, token: Token, log: boolean, start: number): Quantity | null {
-  const { problems } = reader;
   const name = reader.name('quantity-missing', QUANTITY);
   if (!name) return null;
-  if (!isSpecialFunction(name.name)) return problems.report('special-function-unknown', token, { name: name.name });
+  if (!isSpecialFunction(name.name)) return reader.report('special-function-unknown', token, { name: name.name });
   const opening = reader.next();
   const args: Expression[] = [];
   do {
@@ -79,12 +78,12 @@ function readFunction(reader: TokenReader, token: Token, log: boolean, start: nu
     if (!argument) return null;
     args.push(argument);
   } while (reader.take(',') ?? reader.take(';'));
-  if (reader.atEnd) return problems.report('parenthesis-open', opening ?? token);
+  if (reader.atEnd) return reader.report('parenthesis-open', opening ?? token);
   if (!reader.expect(')', '`,` or `)`')) return null;
   const span = spanFrom(start, reader);
   const { signature, least, most } = SPECIAL_FUNCTIONS[name.name];
   if (args.length < least || args.length > most) {
-    return problems.report('argument-count', span, { name: name.name, signature, count: `${args.length}` });
+    return reader.report('argument-count', span, { name: name.name, signature, count: `${args.length}` });
   }
   return { kind: 'function', log, function: name, arguments: args, span };
 }

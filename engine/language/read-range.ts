@@ -14,7 +14,7 @@ export function readBounds(reader: TokenReader): { readonly from: Expression; re
   const high = to.form.toRational();
   if (low && high && low.compare(high) >= 0) {
     const span = { from: from.span.from, to: to.span.to };
-    return reader.problems.report('range-empty', span, { from: from.text, to: to.text });
+    return reader.report('range-empty', span, { from: from.text, to: to.text });
   }
   return { from, to };
 }
@@ -34,8 +34,8 @@ export function readIndexRange(reader: TokenReader): IndexRange | null {
   const relation = reader.peek();
   const open = relation?.text === '>=' || relation?.text === '\u2265';
   if (!open && relation?.text !== '=') {
-    if (!relation) return reader.problems.report('index-range-missing', name.span, { name: name.name });
-    return reader.problems.report('index-relation', relation, { name: name.name, word: relation.text });
+    if (!relation) return reader.report('index-range-missing', name.span, { name: name.name });
+    return reader.report('index-relation', relation, { name: name.name, word: relation.text });
   }
   reader.next();
   const from = readExpression(reader);

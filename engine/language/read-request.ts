@@ -1,7 +1,7 @@
-import type { Problems } from './problems';
 import { readClauses } from './read-clauses';
 import { readGroupWord } from './read-group-line';
 import { readCurve, readQuantity } from './read-quantity';
+import type { Reading } from './reading';
 import { TokenReader } from './token-reader';
 import type { WorkPiece } from './tokens';
 import type {
@@ -22,8 +22,8 @@ export type RequestWord = Exclude<WorkWord, 'let' | 'theory' | 'spectrum'>;
 type RequestReader = (reader: TokenReader, span: Span) => Request | null;
 
 /** A request; null when it cannot be read, which is then reported. */
-export function readRequest(word: RequestWord, piece: WorkPiece, text: string, problems: Problems): Request | null {
-  const reader = new TokenReader(piece.lines[0] ?? [], piece.wordSpan, text, problems);
+export function readRequest(word: RequestWord, piece: WorkPiece, reading: Reading): Request | null {
+  const reader = new TokenReader(piece.lines[0] ?? [], piece.wordSpan, reading);
   return READERS[word](reader, { from: piece.from, to: piece.to });
 }
 
@@ -47,7 +47,7 @@ function readFormula(reader: TokenReader, span: Span): FormulaRequest | null {
       : null;
   const token = reader.next();
   const form = FORMULA_FORMS.find((word) => word === token?.text);
-  if (!form) return reader.problems.report('formula-form-unknown', token ?? as, { word: token?.text ?? '' });
+  if (!form) return reader.report('formula-form-unknown', token ?? as, { word: token?.text ?? '' });
   return reader.expectEnd('the end of the line') ? { kind: 'formula', span, subject, form } : null;
 }
 
@@ -70,18 +70,18 @@ function readPlot(reader: TokenReader, span: Span): PlotRequest | null {
   const clauses = readClauses(reader, { at: true, over: 'ranges' });
   if (!clauses) return null;
   const { over, at } = clauses;
-  if (over.length === 0) return reader.problems.report('over-missing', reader.last, { word: 'plot' });
+  if (over.length === 0) return reader.report('over-missing', reader.last, { word: 'plot' });
   const surplus = over[MOST_RANGES];
-  if (surplus) return reader.problems.report('ranges-too-many', surplus.name.span, { name: surplus.name.name });
+  if (surplus) return reader.report('ranges-too-many', surplus.name.span, { name: surplus.name.name });
   return { kind: 'plot', span, curves, over, at };
 }
 
 function readRepresentation(reader: TokenReader, span: Span): RepresentationRequest | null {
-  if (reader.atEnd) return reader.problems.report('group-missing', reader.last);
+  if (reader.atEnd) return reader.report('group-missing', reader.last);
   const group = readGroupWord(reader);
   if (!group || !reader.expect(':', '`:` and a representation')) return null;
   const from = reader.here.from;
-  if (reader.atEnd) return reader.problems.report('representation-missing', reader.last);
+  if (reader.atEnd) return reader.report('representation-missing', reader.last);
   for (let token = reader.next(); token; token = reader.next()) {
     if (token.kind === 'junk') return reader.unexpected(token, 'a representation');
   }
@@ -99,14 +99,14 @@ function readExtremize(reader: TokenReader, span: Span): ExtremizeRequest | null
   const theory = reader.name('subject-missing', 'the name of a theory');
   const clauses = theory && readClauses(reader, { at: true, over: 'names', digits: true });
   if (!clauses) return null;
-  if (clauses.names.length === 0) return reader.problems.report('over-missing', reader.last, { word: 'extremize' });
+  if (clauses.names.length === 0) return reader.report('over-missing', reader.last, { word: 'extremize' });
   return { kind: 'extremize', span, theory, over: clauses.names, at: clauses.at, digits: clauses.digits };
 }
 
 function readCompare(reader: TokenReader, span: Span): CompareRequest | null {
   const first = reader.name('subject-missing', 'the name of a theory');
   if (!first) return null;
-  if (!reader.take('with')) return reader.problems.report('with-missing', reader.here, { name: first.name });
+  if (!reader.take('with')) return reader.report('with-missing', reader.here, { name: first.name });
   const second = reader.name('subject-missing', 'the name of a second theory');
   const clauses = second && readClauses(reader, { at: true, over: 'ranges', digits: true });
   if (!clauses) return null;

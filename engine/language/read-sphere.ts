@@ -1,4 +1,5 @@
 import { readExpression } from './expression-form';
+import { readOptions } from './read-options';
 import type { TokenReader } from './token-reader';
 import type { Token } from './tokens';
 import type { MixedLine, SphereLine, TheoryBlock } from './tree';
@@ -7,21 +8,16 @@ import { SPHERES } from './words';
 /** `sphere S3, b = 5/4`. An unknown sphere leaves no line; a bad option leaves the others. */
 export function readSphere(reader: TokenReader, word: Token): SphereLine | null {
   const token = reader.next();
-  if (!token) return reader.problems.report('sphere-word-missing', word);
+  if (!token) return reader.report('sphere-word-missing', word);
   const name = SPHERES.find((sphere) => sphere === token.text);
-  if (!name) return reader.problems.report('sphere-unknown', token, { word: token.text });
-  const options: SphereLine['options'][number][] = [];
-  while (!reader.atEnd) {
-    if (!reader.take(',')) {
-      reader.expectEnd('a comma and a squashing such as `b = 5/4`');
-      break;
-    }
-    const option = readSphereOption(reader);
-    if (!option) reader.skipPastComma();
-    else if (options.some((other) => other.name.name === option.name.name)) {
-      reader.problems.report('option-twice', option.name.span, { word: option.name.name });
-    } else options.push(option);
-  }
+  if (!name) return reader.report('sphere-unknown', token, { word: token.text });
+  const options = readOptions(
+    reader,
+    () => readSphereOption(reader),
+    () => reader.peek()?.kind === 'name' && reader.peek(1)?.text === '=',
+    (option) => option.name.name,
+    'a comma and a squashing such as `b = 5/4`',
+  );
   return {
     span: { from: word.from, to: reader.last.to },
     sphere: { name, span: { from: token.from, to: token.to } },
@@ -49,7 +45,7 @@ export function readMixed(reader: TokenReader, word: Token): MixedLine | null {
 /** `supersymmetry 4`. Which values a sphere has is the theory's affair. */
 export function readSupersymmetry(reader: TokenReader, word: Token): TheoryBlock['supersymmetry'] {
   const token = reader.next();
-  if (!token || !/^\d{1,2}$/.test(token.text)) return reader.problems.report('supersymmetry-value', token ?? word);
+  if (!token || !/^\d{1,2}$/.test(token.text)) return reader.report('supersymmetry-value', token ?? word);
   if (!reader.expectEnd('the end of the line')) return null;
   return { value: Number(token.text), span: { from: word.from, to: token.to } };
 }

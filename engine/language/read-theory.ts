@@ -1,9 +1,10 @@
+import { checkTable } from './check-table';
 import { nearest } from './near-words';
-import type { Problems } from './problems';
 import { readGroupLine } from './read-group-line';
-import { checkTable, readHeader, readMultiplet } from './read-matter';
+import { readHeader, readMultiplet } from './read-matter';
 import { readMixed, readSphere, readSupersymmetry } from './read-sphere';
 import { readSuperpotential } from './read-superpotential';
+import type { Reading } from './reading';
 import type { TheoryDraft } from './theory-draft';
 import { TokenReader } from './token-reader';
 import type { Line, Token, WorkPiece } from './tokens';
@@ -14,63 +15,72 @@ import { GROUP_OPTIONS, THEORY_LINE_WORDS, type TheoryLineWord } from './words';
  * A theory with all its lines. Lines that cannot be read are reported and left out; a theory without a name is left
  * out as a whole.
  */
-export function readTheory(piece: WorkPiece, text: string, problems: Problems): TheoryBlock | null {
+export function readTheory(piece: WorkPiece, reading: Reading): TheoryBlock | null {
   const [first = [], ...rest] = piece.lines;
-  const head = new TokenReader(first, piece.wordSpan, text, problems);
+  const head = new TokenReader(first, piece.wordSpan, reading);
   const name = head.name('name-missing', 'the name of the theory');
   if (name) head.expectEnd('the end of the line');
   const draft: TheoryDraft = {
     sphere: null,
-    groups: [],
+    groups: new Map(),
     mixed: [],
     supersymmetry: null,
     header: null,
-    multiplets: [],
+    multiplets: new Map(),
     superpotential: [],
     incomplete: false,
   };
-  for (const line of rest) readTheoryLine(line, draft, text, problems);
+  for (const line of rest) readTheoryLine(line, draft, reading);
   if (!name) return null;
-  if (!draft.sphere) problems.report('sphere-missing', name.span, { theory: name.name });
-  checkTable(draft, problems);
-  const { incomplete: _, ...lines } = draft;
-  return { kind: 'theory', span: { from: piece.from, to: piece.to }, name, ...lines };
+  if (!draft.sphere) reading.report('sphere-missing', name.span, { theory: name.name });
+  checkTable(draft, reading);
+  const { incomplete: _, groups, multiplets, ...lines } = draft;
+  return {
+    kind: 'theory',
+    span: { from: piece.from, to: piece.to },
+    name,
+    ...lines,
+    groups: [...groups.values()],
+    multiplets: [...multiplets.values()],
+  };
 }
 
-function readTheoryLine(line: Line, draft: TheoryDraft, text: string, problems: Problems): void {
+function readTheoryLine(line: Line, draft: TheoryDraft, reading: Reading): void {
   const first = line[0];
   if (!first) return;
   const word = THEORY_LINE_WORDS.find((candidate) => candidate === first.text);
   if (word) {
-    const stops = word === 'gauge' || word === 'flavor' ? GROUP_OPTIONS : [];
-    READERS[word](new TokenReader(line.slice(1), first, text, problems, stops), draft, first);
+    const stops = word === 'gauge' || word === 'flavor' ? OPTION_WORDS : undefined;
+    READERS[word](new TokenReader(line.slice(1), first, reading, stops), draft, first);
     return;
   }
   draft.incomplete = true;
-  if (first.kind === 'junk') problems.report('unexpected-character', first, { character: first.text });
+  if (first.kind === 'junk') reading.report('unexpected-character', first, { character: first.text });
   else
-    problems.report('theory-line-unknown', first, {
+    reading.report('theory-line-unknown', first, {
       word: first.text,
       meant: nearest(first.text, THEORY_LINE_WORDS) ?? '',
     });
 }
+
+const OPTION_WORDS: ReadonlySet<string> = new Set(GROUP_OPTIONS);
 
 type LineReader = (reader: TokenReader, draft: TheoryDraft, word: Token) => void;
 
 const readGroup: LineReader = (reader, draft, word) => {
   const group = readGroupLine(reader, word);
   if (!group) draft.incomplete = true;
-  else if (draft.groups.some((other) => other.name.name === group.name.name)) {
-    reader.problems.report('group-twice', group.name.span, { name: group.name.name });
-  } else draft.groups.push(group);
+  else if (draft.groups.has(group.name.name)) {
+    reader.report('group-twice', group.name.span, { name: group.name.name });
+  } else draft.groups.set(group.name.name, group);
 };
 
 const readRow: LineReader = (reader, draft, word) => {
   const row = readMultiplet(reader, word, word.text as MultipletKind, draft.header);
   if (!row) draft.incomplete = true;
-  else if (draft.multiplets.some((other) => other.name.name === row.name.name)) {
-    reader.problems.report('multiplet-twice', row.name.span, { name: row.name.name });
-  } else draft.multiplets.push(row);
+  else if (draft.multiplets.has(row.name.name)) {
+    reader.report('multiplet-twice', row.name.span, { name: row.name.name });
+  } else draft.multiplets.set(row.name.name, row);
 };
 
 const READERS: Readonly<Record<TheoryLineWord, LineReader>> = {
@@ -99,7 +109,7 @@ function once<K extends 'sphere' | 'supersymmetry' | 'header'>(
 ): LineReader {
   return (reader, draft, word) => {
     const value = read(reader, word);
-    if (draft[field] !== null) reader.problems.report('line-twice', word, { word: word.text });
+    if (draft[field] !== null) reader.report('line-twice', word, { word: word.text });
     else draft[field] = value;
   };
 }

@@ -1,9 +1,9 @@
 import { LineIndex } from './lines';
-import type { Problems } from './problems';
+import type { Reading } from './reading';
 import type { Block, Name } from './tree';
 
 /** Reports names given twice: theories and spectra share one set of names, parameters have another. */
-export function reportSecondNames(blocks: readonly Block[], text: string, problems: Problems): void {
+export function reportSecondNames(blocks: readonly Block[], reading: Reading): void {
   const firstOf = { block: new Map<string, Name>(), parameter: new Map<string, Name>() };
   let lines: LineIndex | null = null;
   for (const block of blocks) {
@@ -15,8 +15,8 @@ export function reportSecondNames(blocks: readonly Block[], text: string, proble
       known.set(name, block.name);
       continue;
     }
-    lines ??= new LineIndex(text);
+    lines ??= new LineIndex(reading.text);
     const code = block.kind === 'let' ? 'parameter-twice' : 'block-twice';
-    problems.report(code, span, { name, line: `${lines.place(first.span.from).line}` });
+    reading.report(code, span, { name, line: `${lines.place(first.span.from).line}` });
   }
 }

@@ -3,12 +3,12 @@ import type { GroupLine, MatterHeader, MixedLine, Monomial, MultipletRow, Sphere
 /** What the lines of a theory add up to, while they are read. */
 export interface TheoryDraft {
   sphere: SphereLine | null;
-  groups: GroupLine[];
-  mixed: MixedLine[];
+  readonly groups: Map<string, GroupLine>;
+  readonly mixed: MixedLine[];
   supersymmetry: TheoryBlock['supersymmetry'];
   header: MatterHeader | null;
-  multiplets: MultipletRow[];
-  superpotential: Monomial[];
+  readonly multiplets: Map<string, MultipletRow>;
+  readonly superpotential: Monomial[];
   /** Whether a `gauge`, `flavor` or multiplet line could not be read; its name is then not known. */
   incomplete: boolean;
 }

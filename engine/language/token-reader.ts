@@ -1,14 +1,15 @@
 import { spellName } from './names';
-import type { Problems } from './problems';
+import type { Reading } from './reading';
 import type { Line, Token } from './tokens';
-import type { Name, Span } from './tree';
+import type { Name, Severity, Span } from './tree';
 import type { SyntaxCode } from './wording-syntax';
 import { CLAUSE_WORDS, RESERVED } from './words';
 
+const NO_STOPS: ReadonlySet<string> = new Set();
+
 /** Reads the tokens of one line from left to right. */
 export class TokenReader {
-  readonly text: string;
-  readonly problems: Problems;
+  readonly reading: Reading;
   readonly #tokens: Line;
   readonly #before: Span;
   readonly #stops: ReadonlySet<string>;
@@ -18,12 +19,15 @@ export class TokenReader {
    * `before` is the word the tokens follow; "nothing after" is said there. `stops` are words that no number before
    * them is multiplied with, besides the reserved ones.
    */
-  constructor(tokens: Line, before: Span, text: string, problems: Problems, stops: readonly string[] = []) {
+  constructor(tokens: Line, before: Span, reading: Reading, stops: ReadonlySet<string> = NO_STOPS) {
     this.#tokens = tokens;
     this.#before = before;
-    this.text = text;
-    this.problems = problems;
-    this.#stops = new Set(stops);
+    this.reading = reading;
+    this.#stops = stops;
+  }
+
+  report(code: SyntaxCode, span: Span, data?: Readonly<Record<string, string>>, severity?: Severity): null {
+    return this.reading.report(code, span, data, severity);
   }
 
   /** Whether an expression ends before this word. */
@@ -71,26 +75,20 @@ export class TokenReader {
 
   /** Text from a token's start to the end of the last token read. */
   textFrom(from: number): string {
-    return this.text.slice(from, this.last.to);
+    return this.reading.text.slice(from, this.last.to);
   }
 
-  /** Goes past everything up to the next comma outside brackets, and past the comma. */
-  skipPastComma(): void {
+  /** Goes to the next comma outside brackets, or to the end of the line. */
+  skipToComma(): void {
     let depth = 0;
-    for (let token = this.next(); token; token = this.next()) {
+    for (let token = this.peek(); token && (token.text !== ',' || depth > 0); token = this.peek()) {
       if (token.text === '(' || token.text === '[') depth++;
       else if (token.text === ')' || token.text === ']') depth = Math.max(0, depth - 1);
-      else if (token.text === ',' && depth === 0) return;
+      this.next();
     }
   }
 
-  skipRest(): void {
-    this.#position = this.#tokens.length;
-  }
-
-  /**
-   * Goes to the end of a cell: a stretch of tokens that touch. Answers its tokens.
-   */
+  /** Reads a cell: tokens that touch. */
   takeTouching(): Token[] {
     const touching: Token[] = [];
     while (!this.atEnd && (touching.length === 0 || this.tight)) touching.push(this.next() as Token);
@@ -99,34 +97,28 @@ export class TokenReader {
 
   /** Reports a token that cannot stand where it stands. */
   unexpected(token: Token, expected: string): null {
-    if (token.kind === 'junk') return this.problems.report('unexpected-character', token, { character: token.text });
-    return this.problems.report('unexpected-text', token, { word: token.text, expected });
+    if (token.kind === 'junk') return this.report('unexpected-character', token, { character: token.text });
+    return this.report('unexpected-text', token, { word: token.text, expected });
   }
 
   /** Reads `text`; `expected` says to the user what should have come. */
   expect(text: string, expected: string): Token | null {
     const token = this.peek();
-    if (!token) return this.problems.report('line-ends', this.last, { expected });
+    if (!token) return this.report('line-ends', this.last, { expected });
     return token.text === text ? this.next() : this.unexpected(token, expected);
   }
 
   /** True at the end of the line, else reports the first token left over. */
   expectEnd(expected: string): boolean {
     const token = this.peek();
-    if (!token) return true;
-    const operand = token.kind === 'name' || token.kind === 'number';
-    const before = this.#tokens[this.#position - 1];
-    if (operand && !this.stopsAt(token) && (before?.kind === 'name' || before?.kind === 'number')) {
-      this.problems.report('missing-operator', token, { left: before.text, right: token.text });
-    } else this.unexpected(token, expected);
-    return false;
+    return token === null || this.unexpected(token, expected) !== null;
   }
 
   /** A name that is defined or used here. `missing` is reported where the line ends instead. */
   name(missing: SyntaxCode, expected: string): Name | null {
     const token = this.peek();
     if (!token)
-      return this.problems.report(missing, this.last, { after: this.text.slice(this.last.from, this.last.to) });
+      return this.report(missing, this.last, { after: this.reading.text.slice(this.last.from, this.last.to) });
     if (token.kind !== 'name') return this.unexpected(token, expected);
     this.next();
     return { name: spellName(token.text), span: { from: token.from, to: token.to } };
@@ -136,7 +128,7 @@ export class TokenReader {
   symbol(missing: SyntaxCode, expected: string): Name | null {
     const name = this.name(missing, expected);
     if (name && RESERVED.has(name.name)) {
-      return this.problems.report('reserved-name', name.span, { name: name.name });
+      return this.report('reserved-name', name.span, { name: name.name });
     }
     return name;
   }

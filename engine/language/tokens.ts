@@ -74,22 +74,16 @@ const LINE_NODES: ReadonlySet<number> = new Set([
   term.Line,
 ]);
 
-/** The pieces of a notebook in order, with the tokens of its work. */
-export function piecesOf(tree: Tree, text: string): Piece[] {
-  const pieces: Piece[] = [];
+/** The pieces of a notebook in order, with the tokens of its work; each is made when it is asked for. */
+export function* piecesOf(tree: Tree, text: string): Generator<Piece> {
   const cursor = tree.cursor();
-  if (!cursor.firstChild()) return pieces;
+  if (!cursor.firstChild()) return;
   do {
-    const word = WORD_OF_NODE.get(cursor.type.id);
-    if (word) pieces.push(workPiece(cursor, word, text));
-    else
-      pieces.push({
-        kind: cursor.type.id === term.Paragraph ? 'paragraph' : 'other',
-        from: cursor.from,
-        to: cursor.to,
-      });
+    const { from, to, type } = cursor;
+    const word = WORD_OF_NODE.get(type.id);
+    if (word) yield workPiece(cursor, word, text);
+    else yield { kind: type.id === term.Paragraph ? 'paragraph' : 'other', from, to };
   } while (cursor.nextSibling());
-  return pieces;
 }
 
 function workPiece(cursor: TreeCursor, word: WorkWord, text: string): WorkPiece {

@@ -42,8 +42,7 @@ const general = {
 const expressions = {
   'expression-missing': () => 'An expression is missing at the end of the line, such as `1/3`, `2r` or `sqrt(2)`.',
   'expression-expected': (d) => `Expected an expression such as \`1/3\`, \`2r\` or \`sqrt(2)\`, found \`${d.word}\`.`,
-  'missing-operator': (d) =>
-    `Between \`${d.left}\` and \`${d.right}\` an operator is missing; a product of these is written \`${d.left}*${d.right}\`.`,
+  'missing-operator': (d) => `An operator is missing before \`${d.word}\`; a product is written with \`*\`.`,
   'parenthesis-open': () => 'This parenthesis is never closed; add `)`.',
   'function-without-argument': (d) =>
     `\`${d.name}\` is a function: write its argument in parentheses, \`${d.name}(x)\`.`,

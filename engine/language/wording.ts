@@ -1,8 +1,9 @@
 import type { Diagnostic } from './tree';
 import { syntaxWording, type Wording } from './wording-syntax';
+import { theoryWording } from './wording-theory';
 
 /** Every problem's sentence, by code. */
-export const wording: Readonly<Record<string, Wording>> = { ...syntaxWording };
+export const wording: Readonly<Record<string, Wording>> = { ...syntaxWording, ...theoryWording };
 
 /** The sentence for a problem. A code without an entry, which is a mistake of ours, is said as it is. */
 export function say({ code, data }: Diagnostic): string {
