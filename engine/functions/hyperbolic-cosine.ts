@@ -1,4 +1,5 @@
 import { Form } from '../exact/form';
+import { imaginaryPart, twiceCosine } from './exact-angle';
 import { hyperbolicKernel } from './hyperbolic-double';
 import { logTwoCosh } from './hyperbolic-precise';
 import { hyperbolicArgument } from './notation';
@@ -28,6 +29,10 @@ export const hyperbolicCosine: SpecialFunction = {
       ],
     },
   ],
+  exactValue: (x) => {
+    const q = imaginaryPart(x);
+    return q === null ? null : twiceCosine(q.abs());
+  },
   zeros: [
     { kind: 'zero', start: () => HALF_I, steps: () => [Form.i] },
     { kind: 'zero', start: () => HALF_I.neg(), steps: () => [Form.i.neg()] },

@@ -1,10 +1,13 @@
 import { Form } from '../exact/form';
+import { Rational } from '../exact/rational';
+import { imaginaryPart, twiceCosine } from './exact-angle';
 import { hyperbolicKernel } from './hyperbolic-double';
 import { logTwoSinh } from './hyperbolic-precise';
 import { hyperbolicArgument } from './notation';
 import type { SpecialFunction } from './special-function';
 
-const HALF_I = Form.i.mul(Form.ratio(1, 2));
+const HALF = Rational.of(1, 2);
+const HALF_I = Form.i.scale(HALF);
 
 /**
  * f(x) = 2 sinh(pi x): zeros at i n for every integer n. Laws and growth: DLMF 4.28-4.35.
@@ -28,6 +31,11 @@ export const hyperbolicSine: SpecialFunction = {
       ],
     },
   ],
+  exactValue: (x) => {
+    // 2 sinh(i pi q) = 2 i cos(pi (1/2 - q)).
+    const q = imaginaryPart(x);
+    return q === null || q.sign() <= 0 ? null : (twiceCosine(HALF.sub(q).abs())?.mul(Form.i) ?? null);
+  },
   zeros: [
     { kind: 'zero', start: () => Form.zero, steps: () => [Form.i] },
     { kind: 'zero', start: () => Form.i.neg(), steps: () => [Form.i.neg()] },

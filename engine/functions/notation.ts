@@ -27,13 +27,7 @@ export function asFactor(text: string): string {
 
 /** pi times a form, pi in front: `\pi b(\sigma_1-\sigma_2)`, `\frac{\pi\sigma}{b}`. */
 export function piTimes(form: Form, print: Printer): string {
-  const text = print.form(form);
-  if (isSum(text.replace(/^-/, ''))) return `\\pi${parenthesised(text)}`;
-  const [sign, size] = text.startsWith('-') ? ['-', text.slice(1)] : ['', text];
-  const fraction = /^\\frac\{(.*)\}\{([^{}]*)\}$/.exec(size);
-  if (!fraction) return size === '1' ? `${sign}\\pi` : `${sign}\\pi ${size}`;
-  const above = fraction[1] as string;
-  return `${sign}\\frac{\\pi ${above === '1' ? '' : asFactor(above)}}{${fraction[2]}}`;
+  return print.form(Form.pi.mul(form));
 }
 
 /** The argument of sinh or cosh of pi times a form, in parentheses unless it reads `\pi(...)`. */

@@ -114,6 +114,8 @@ export interface SpecialFunction {
   readonly parameters: readonly string[];
   readonly reflections: readonly Reflection[];
   readonly shifts: readonly Shift[];
+  /** The exact value at special arguments; null where there is none to give. */
+  readonly exactValue?: (argument: Form, parameters: readonly Form[]) => Form | null;
   readonly zeros: readonly Lattice[];
   readonly growth: readonly Growth[];
   readonly notations: readonly Notation[];

@@ -93,11 +93,7 @@ function groupLatex(outer: Term['factors'], imaginary: boolean, inner: readonly 
     factors: term.factors,
   }));
   const lead = fraction(content, unit, outer);
-  const body = joinSigned(
-    [...primitive]
-      .sort((a, b) => a.factors.length - b.factors.length)
-      .map((t) => fraction(t.coefficient.re, '', t.factors)),
-  );
+  const body = joinSigned(bracketOrder(primitive).map((t) => fraction(t.coefficient.re, '', t.factors)));
   return {
     negative: lead.negative,
     either: lead.either ?? false,
@@ -105,7 +101,7 @@ function groupLatex(outer: Term['factors'], imaginary: boolean, inner: readonly 
   };
 }
 
-/** Greatest rational that divides all coefficients, with the sign of the first term of lowest degree. */
+/** Greatest rational that divides all coefficients; negative only when all of them are. */
 function contentOf(terms: readonly Term[]): Rational {
   let numerator = 0n;
   let denominator = 1n;
@@ -114,9 +110,15 @@ function contentOf(terms: readonly Term[]): Rational {
     numerator = gcd(numerator, q.numerator);
     denominator = (denominator * q.denominator) / gcd(denominator, q.denominator);
   }
-  const lowest = [...terms].sort((a, b) => a.factors.length - b.factors.length)[0] as Term;
   const size = Rational.of(numerator, denominator);
-  return lowest.coefficient.re.sign() < 0 ? size.neg() : size;
+  return terms.every(({ coefficient }) => coefficient.re.sign() < 0) ? size.neg() : size;
+}
+
+/** Terms of low degree first, but a positive one in front where there is one: 1 - r, 2r - 1. */
+function bracketOrder(terms: readonly Term[]): Term[] {
+  const sorted = [...terms].sort((a, b) => a.factors.length - b.factors.length);
+  const first = sorted.findIndex(({ coefficient }) => coefficient.re.sign() > 0);
+  return first <= 0 ? sorted : [sorted[first] as Term, ...sorted.filter((_, k) => k !== first)];
 }
 
 function fraction(coefficient: Rational, unit: string, factors: Term['factors']): Signed {

@@ -15,6 +15,13 @@ const OWN: Readonly<Record<string, string>> = {
   '@w3': '\\omega_3',
 };
 
+/**
+ * A name that sorts by the place of its group, so that forms print gauge coordinates before masses: `0:sigma_a`.
+ */
+export function placedName(place: number, name: string): string {
+  return `${place}:${name}`;
+}
+
 /** Stem of the name that stands for the sum of all coordinates of a group. */
 export const TRACE = '@tr:';
 
@@ -24,6 +31,8 @@ export const TRACE = '@tr:';
 export function symbolLatex(name: string): string {
   const own = OWN[name];
   if (own !== undefined) return own;
+  const placed = /^\d+:(.*)$/.exec(name);
+  if (placed) return symbolLatex(placed[1] as string);
   if (name.startsWith(TRACE)) return `\\operatorname{tr}${symbolLatex(name.slice(TRACE.length))}`;
   const parts = /^([A-Za-z]+)('*)([0-9]*)('*)(?:_([A-Za-z0-9']+))?$/.exec(name);
   if (!parts) return `\\mathrm{${escapeText(name)}}`;

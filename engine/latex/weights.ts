@@ -3,7 +3,7 @@ import type { IndexPattern, PatternRelation, PatternTerm } from '../lie/index-pa
 import type { TheoryGroup } from '../theory/theory';
 import type { TheoryWeights } from '../theory/weights';
 import { EITHER_SIGN } from './form';
-import { TRACE } from './symbol';
+import { placedName, TRACE } from './symbol';
 
 /** A product over weights as it is printed: the product signs, and the weight they run over. */
 export interface PrintedWeights {
@@ -48,7 +48,7 @@ function printPattern(group: TheoryGroup, place: number, pattern: IndexPattern):
   const letters = LETTERS[place % LETTERS.length] as string;
   const letter = new Map(pattern.indices.map(({ name }, k) => [name, letters.charAt(k)]));
   const terms = pattern.terms.map((term) => {
-    const symbol = termSymbol(group, term, letter);
+    const symbol = termSymbol(group, place, term, letter);
     const signed = term.sign === 'either' ? symbol.mul(Form.symbol(EITHER_SIGN)) : symbol;
     return signed.scale(term.coefficient);
   });
@@ -56,13 +56,13 @@ function printPattern(group: TheoryGroup, place: number, pattern: IndexPattern):
 }
 
 /** sigma_a for an index, sigma_3 for a coordinate, tr sigma for the sum of all. */
-function termSymbol(group: TheoryGroup, term: PatternTerm, letter: ReadonlyMap<string, string>): Form {
+function termSymbol(group: TheoryGroup, place: number, term: PatternTerm, letter: ReadonlyMap<string, string>): Form {
   const stem = stemOf(group);
-  if (term.kind === 'index') return Form.symbol(`${stem}_${letter.get(term.index) ?? term.index}`);
-  if (term.kind === 'coordinate') return Form.symbol(group.coordinates[term.coordinate] as string);
-  if (term.range === group.coordinates.length) return Form.symbol(`${TRACE}${stem}`);
-  const names = group.coordinates.slice(term.offset, term.offset + term.range);
-  return Form.sum(names.map((name) => Form.symbol(name)));
+  const symbol = (name: string): Form => Form.symbol(placedName(place, name));
+  if (term.kind === 'index') return symbol(`${stem}_${letter.get(term.index) ?? term.index}`);
+  if (term.kind === 'coordinate') return symbol(group.coordinates[term.coordinate] as string);
+  if (term.range === group.coordinates.length) return symbol(`${TRACE}${stem}`);
+  return Form.sum(group.coordinates.slice(term.offset, term.offset + term.range).map(symbol));
 }
 
 /** The name that all coordinates of a group share. */

@@ -19,7 +19,26 @@ function reduceFactor<W extends WeightSet>(factor: Factor<W>): Factor<W>[] {
   if (!declared.elementary || (declared.shifts.length === 0 && declared.reflections.length === 0)) return [factor];
   const oriented = orient(factor);
   const shifted = oriented.flatMap((f) => reduceByShift(f));
-  return shifted.flatMap((f) => (f.argument.key === factor.argument.key ? [f] : orient(f)));
+  return shifted
+    .flatMap((f) => (f.argument.key === factor.argument.key ? [f] : orient(f)))
+    .flatMap((f) => exactFactors(f));
+}
+
+/** Replaces a function at a special argument by its exact value. */
+function exactFactors<W extends WeightSet>(factor: Factor<W>): Factor<W>[] {
+  const value =
+    factor.name === 'linear' ? null : (functions[factor.name].exactValue?.(factor.argument, factor.parameters) ?? null);
+  if (value === null) return [factor];
+  const parts = splitUnit(value);
+  return parts.map((argument) => ({ ...factor, name: 'linear', argument, parameters: [] }));
+}
+
+/** A constant i c as the two factors i and c. */
+function splitUnit(value: Form): Form[] {
+  const turned = value.mul(Form.i.neg());
+  const imaginary = turned.terms.every(({ coefficient }) => coefficient.isReal()) && !turned.isZero();
+  const real = value.terms.every(({ coefficient }) => coefficient.isReal());
+  return !real && imaginary ? [Form.i, turned] : [value];
 }
 
 /** Makes the leading coefficient positive where f is even or odd. */

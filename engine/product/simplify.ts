@@ -28,6 +28,29 @@ export function simplify<W extends WeightSet>(product: Product<W>, depth: Depth,
   return current;
 }
 
+/**
+ * Equal factors under one power, and factors that are 1 by themselves left out; nothing that stems from different
+ * modes is paired.
+ */
+export function collectEqual<W extends WeightSet>(product: Product<W>): Product<W> {
+  return buckets(product).flatMap((bucket) => {
+    const collected = new Map<string, Factor<W>>();
+    for (const factor of bucket) {
+      const present = collected.get(factor.argument.key);
+      collected.set(factor.argument.key, present ? join(present, factor, factor.power) : factor);
+    }
+    return [...collected.values()].filter((factor) => factor.power !== 0 && !isUnity(factor));
+  });
+}
+
+/** True for a single function at the fixed point of a reflection f(x) f(2c - x) = 1. */
+function isUnity(factor: Factor): boolean {
+  return functions[factor.name].reflections.some(
+    ({ center, power, sign }) =>
+      power === -1 && sign === 1 && factor.weights === null && center(factor.parameters).equals(factor.argument),
+  );
+}
+
 /** Each round removes special functions or leaves the product as it is; two suffice in practice. */
 const MAXIMAL_ROUNDS = 6;
 
@@ -217,19 +240,41 @@ function pairTwo<W extends WeightSet>(
   }
 }
 
-/** Over a set that is its own opposite, f(x) and f(flipped x) make such a quotient by themselves. */
+/**
+ * Over a set that is its own opposite, f(x) and f(flipped x) make such a quotient by themselves; a single function
+ * does so with its own square.
+ */
 function pairItself<W extends WeightSet>(open: Factor<W>[], i: number, lattice: StepLattice, made: Factor<W>[]): void {
   const a = open[i] as Factor<W>;
-  if (a.power === 0 || !flippable(a)) return;
+  const single = a.weights === null;
+  if (a.power === 0 || !(single || flippable(a))) return;
   for (const reflection of functions[a.name].reflections) {
     if (reflection.power !== -1 || reflection.sign !== 1) continue;
     const partner = reflection.center(a.parameters).scale(2).sub(flipped(a.argument));
     const steps = lattice.decompose(a.argument.sub(partner));
     if (steps === null) continue;
-    made.push(...attach(expandChain(a.name, partner, a.parameters, steps), a.power, a, true, a.from));
-    open[i] = { ...a, power: 0 };
+    const chain = expandChain(a.name, partner, a.parameters, steps);
+    const left = single ? a.power % 2 : 0;
+    made.push(...attach(chain, single ? (a.power - left) / 2 : a.power, a, !single, a.from));
+    const root = left === 0 ? null : rootOf(chain);
+    if (root !== null) made.push({ ...constantFactor(root, a.from), power: left });
+    open[i] = { ...a, power: root === null ? left : 0 };
     return;
   }
+}
+
+/**
+ * The positive root of a product of exact positive constants; null if it is not one. A special function whose square is
+ * such a constant is positive there: between its zeros and poles on the axis of its reflection it has no sign to change.
+ */
+function rootOf(chain: readonly FunctionAt[]): Form | null {
+  let square = Form.one;
+  for (const { name, argument, parameters, power } of chain) {
+    const value = functions[name].exactValue?.(argument, parameters)?.toRational() ?? null;
+    if (value === null || value.sign() <= 0) return null;
+    square = square.mul(Form.number(value).pow(power));
+  }
+  return Form.call('sqrt', square);
 }
 
 function attach<W extends WeightSet>(

@@ -6,7 +6,7 @@ import { modesLatex } from '../latex/modes';
 import { displayLatex, type Piece, productLatex } from '../latex/product';
 import { symbolLatex } from '../latex/symbol';
 import { stemOf } from '../latex/weights';
-import { simplify } from '../product/simplify';
+import { collectEqual, simplify } from '../product/simplify';
 import { type ElementaryProduct, elementary, isSpecial, quantity } from '../spheres/quantity';
 import type { Sphere } from '../spheres/sphere';
 import { gaugeGroups, type Theory } from '../theory/theory';
@@ -31,7 +31,7 @@ export function formProduct(printable: Printable, form: FormulaForm): Elementary
     case 'modes':
       return null;
     case 'unpaired':
-      return { product: raw, at: [] };
+      return { product: collectEqual(raw), at: [] };
     case 'functions':
       return { product: simplify(raw, 'functions'), at: [] };
     case 'elementary':
