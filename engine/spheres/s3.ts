@@ -1,5 +1,6 @@
 import { Form } from '../exact/form';
 import { type Factor, WEIGHT } from '../product/factor';
+import { threeSphereConditions } from '../theory/checks/three-sphere';
 import { gaugeGroups, type Multiplet, type Theory, type TheoryGroup } from '../theory/theory';
 import { matterWeights, rootWeights, type TheoryWeights, type WeightedSet } from '../theory/weights';
 import { s3Modes } from './s3-modes';
@@ -57,7 +58,7 @@ export const s3: Sphere = {
     ...(theory.round ? [] : ['$Q=b+b^{-1}$']),
     'The Coulomb parameters are real and dimensionless; $1/|W|$ and the measure are not included.',
   ],
-  conditions: [],
+  conditions: threeSphereConditions,
   specialFunction: 'doubleSine',
   sources: [
     { key: 'KWY-2009', text: 'A. Kapustin, B. Willett, I. Yaakov, arXiv:0909.4559 (2009)' },
