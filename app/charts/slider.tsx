@@ -1,0 +1,67 @@
+import { useEffect, useId, useRef } from 'react';
+import type { ParameterCard } from '../../engine/requests/result';
+import { Tex } from '../page/tex';
+import { useSession } from '../state/session';
+import { useSelected } from '../state/store';
+import styles from './slider.module.css';
+import { sliderStep, sliderText } from './slider-step';
+
+/** The card says `r = 1/3`; a slider is labelled by what stands before the sign. */
+function symbolLatex({ latex }: ParameterCard): string {
+  return latex.split('=')[0] ?? latex;
+}
+
+/**
+ * A parameter's slider. While it moves, only what is drawn from the parameter follows; when it is let go, the number
+ * in the text is replaced, one step of undo.
+ */
+export function Slider({ card }: { readonly card: ParameterCard }) {
+  const { text, outline, live } = useSession();
+  const moved = useSelected(live.state, (values) => values[card.name]?.value);
+  const field = useRef<HTMLInputElement>(null);
+  const label = useId();
+  const { range } = card;
+
+  const commit = useRef<() => void>(() => undefined);
+  useEffect(() => {
+    commit.current = () => {
+      const value = live.state.get()[card.name]?.value;
+      if (value === undefined || !range) return;
+      const insert = sliderText(value, range);
+      if (insert === card.valueText || !text.editSince(outline.state.get().revision, [{ ...card.valueSpan, insert }])) {
+        live.cancel(card.name);
+      } else live.release(card.name, text.state.get().revision);
+    };
+  }, [card, range, text, outline, live]);
+
+  // React's change is the browser's input; the browser's change, once a slider is let go, has no name in React.
+  useEffect(() => {
+    const input = field.current;
+    const settle = () => commit.current();
+    input?.addEventListener('change', settle);
+    return () => input?.removeEventListener('change', settle);
+  }, []);
+
+  if (!range || card.value === null) return null;
+  const shown = moved === undefined ? card.valueText : sliderText(moved, range);
+  return (
+    <div className={styles.slider}>
+      <span id={label}>
+        <Tex tex={symbolLatex(card)} />
+      </span>
+      <input
+        ref={field}
+        type="range"
+        aria-labelledby={label}
+        aria-valuetext={shown}
+        data-parameter={card.name}
+        min={range.from}
+        max={range.to}
+        step={sliderStep(range)}
+        value={moved ?? card.value}
+        onChange={(event) => live.move(card.name, event.target.valueAsNumber)}
+      />
+      <output className={styles.value}>{shown}</output>
+    </div>
+  );
+}
