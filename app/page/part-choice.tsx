@@ -1,0 +1,35 @@
+import type { RequestCard } from '../../engine/requests/result';
+import { useSession } from '../state/session';
+import { Choice } from './choice';
+
+const parts = ['abs', 'arg', 're', 'im', 'log'] as const;
+
+interface PartChoiceProps {
+  readonly card: RequestCard;
+  readonly curves: number;
+}
+
+/** Which part of a complex quantity one curve or map shows; the choice is a word in the text. */
+export function PartChoice({ card, curves }: PartChoiceProps) {
+  const { text, outline } = useSession();
+  const now = /^plot\s+(abs|arg|re|im|log)\b/.exec(card.text)?.[1] ?? '';
+  if (curves !== 1) return null;
+
+  function choose(part: string): void {
+    const { text: drawnFrom, revision } = outline.state.get();
+    const line = drawnFrom.slice(card.span.from, card.span.to);
+    const [, head = '', old = ''] = /^(plot\s+)((?:abs|arg|re|im|log)\s+)?/.exec(line) ?? [];
+    if (head === '') return;
+    const from = card.span.from + head.length;
+    text.editSince(revision, [{ from, to: from + old.length, insert: `${part} ` }]);
+  }
+
+  return (
+    <Choice
+      label="part shown"
+      options={parts.map((part) => ({ value: part, content: part }))}
+      value={parts.find((part) => part === now) ?? 'none'}
+      onChange={choose}
+    />
+  );
+}
