@@ -48,12 +48,16 @@ export class Form {
   static readonly pi = Form.atom({ kind: 'constant', name: 'pi', key: 'pi' });
 
   readonly terms: readonly Term[];
-  /** Canonical text; equal forms have equal keys. */
-  readonly key: string;
+  #key: string | null = null;
 
   private constructor(terms: readonly Term[]) {
     this.terms = terms;
-    this.key = terms.length === 0 ? '0' : terms.map(termKey).join(' + ');
+  }
+
+  /** Canonical text; equal forms have equal keys. */
+  get key(): string {
+    this.#key ??= this.terms.length === 0 ? '0' : this.terms.map(termKey).join(' + ');
+    return this.#key;
   }
 
   static number(value: Rational | number | bigint): Form {

@@ -1,9 +1,10 @@
 import { type DoubleValue, formDouble } from '../arithmetic/form-double';
-import { Form } from '../exact/form';
-import type { DoubleKernel } from '../functions/special-function';
+import type { Form } from '../exact/form';
+import type { DoubleKernel, FunctionName } from '../functions/special-function';
 import { functions } from '../functions/table';
 import type { Product } from '../product/factor';
-import { collectEntries, type Entry } from './precise';
+import { type AffineEntry, type AffineProduct, affineProduct } from './affine';
+import type { Entry } from './precise';
 
 /**
  * A product compiled for doubles: everything but the variables has a value, equal factors are evaluated once, and
@@ -25,15 +26,21 @@ export function compile(
   variables: readonly string[],
   values: (name: string) => Form | null,
 ): Program {
-  const entries = collectEntries(product, (name) => (variables.includes(name) ? null : values(name)));
-  const symbols = new Set(entries.flatMap((e) => [e.argument, ...e.parameters].flatMap((f) => f.symbols())));
-  for (const variable of variables) symbols.delete(variable);
-  const moving = entries.filter((entry) => dependsOn(entry, variables));
-  const still = entries.filter((entry) => !moving.includes(entry));
-  const unset = [...symbols];
-  const constant = unset.length > 0 ? { re: 0, im: 0 } : constantLog(still);
-  const kernels = new Map<string, DoubleKernel>();
-  const steps = unset.length > 0 ? [] : moving.map((entry) => compileEntry(entry, variables, kernels));
+  return compileAffine(affineProduct(product, variables, values), variables);
+}
+
+/** The same from the entries, where they are needed for other things too. */
+export function compileAffine({ affine, others, unset }: AffineProduct, variables: readonly string[]): Program {
+  const kernels = new Kernels();
+  const moves = ({ slopes }: AffineEntry): boolean => slopes.some(({ re, im }) => re !== 0 || im !== 0);
+  const constant = constantLog(
+    affine.filter((entry) => !moves(entry)),
+    kernels,
+  );
+  const steps = [
+    ...affine.filter(moves).map((entry) => affineStep(entry, kernels)),
+    ...(unset.length > 0 ? [] : others.map((entry) => pointwise(entry, variables, kernels))),
+  ];
   return {
     unset,
     addLog: (points, re, im) => {
@@ -48,16 +55,32 @@ export function compile(
   };
 }
 
-function dependsOn(entry: Entry, variables: readonly string[]): boolean {
-  return [entry.argument, ...entry.parameters].some((form) => form.symbols().some((name) => variables.includes(name)));
+/** Kernels by function and parameters: each makes its tables once. */
+class Kernels {
+  readonly #known = new Map<string, DoubleKernel>();
+
+  of(name: FunctionName, parameters: readonly Form[]): DoubleKernel {
+    const key = `${name}|${parameters.map((form) => form.key).join('|')}`;
+    const known = this.#known.get(key);
+    if (known) return known;
+    const kernel = functions[name].double(parameters.map((form) => formDouble(form, () => null) ?? NOT_A_NUMBER));
+    this.#known.set(key, kernel);
+    return kernel;
+  }
 }
 
-function constantLog(entries: readonly Entry[]): DoubleValue {
+const NOT_A_NUMBER: DoubleValue = { re: Number.NaN, im: Number.NaN };
+
+/** All entries of one function are evaluated as one array. */
+function constantLog(entries: readonly AffineEntry[], kernels: Kernels): DoubleValue {
   const re = new Float64Array(1);
   const im = new Float64Array(1);
-  for (const entry of entries) {
-    const x = formDouble(entry.argument, () => null) ?? { re: Number.NaN, im: Number.NaN };
-    kernelOf(entry, new Map()).addLog(Float64Array.of(x.re), Float64Array.of(x.im), entry.power, re, im);
+  const x = new Float64Array(1);
+  const y = new Float64Array(1);
+  for (const { name, parameters, constant, power } of entries) {
+    x[0] = constant.re;
+    y[0] = constant.im;
+    kernels.of(name, parameters).addLog(x, y, power, re, im);
   }
   return { re: re[0] as number, im: im[0] as number };
 }
@@ -70,111 +93,45 @@ type Step = (
   im: Float64Array,
 ) => void;
 
-function compileEntry(entry: Entry, variables: readonly string[], kernels: Map<string, DoubleKernel>): Step {
-  if (entry.parameters.some((form) => form.symbols().length > 0)) return pointwise(entry, variables);
-  const kernel = kernelOf(entry, kernels);
-  const fill = compileArgument(entry.argument, variables);
+function affineStep({ name, parameters, constant, slopes, power }: AffineEntry, kernels: Kernels): Step {
+  const kernel = kernels.of(name, parameters);
+  const real = constant.im === 0 && slopes.every(({ im }) => im === 0);
   return (points, xRe, xIm, re, im) => {
-    const real = fill(points, xRe, xIm);
-    kernel.addLog(xRe, real ? null : xIm, entry.power, re, im);
+    xRe.fill(constant.re);
+    xIm.fill(constant.im);
+    slopes.forEach((slope, variable) => {
+      const point = points[variable] as Float64Array;
+      if (slope.re !== 0)
+        for (let k = 0; k < xRe.length; k++) xRe[k] = (xRe[k] as number) + slope.re * (point[k] as number);
+      if (slope.im !== 0)
+        for (let k = 0; k < xIm.length; k++) xIm[k] = (xIm[k] as number) + slope.im * (point[k] as number);
+    });
+    kernel.addLog(xRe, real ? null : xIm, power, re, im);
   };
 }
 
-function kernelOf(entry: Entry, kernels: Map<string, DoubleKernel>): DoubleKernel {
-  const key = [entry.name, ...entry.parameters.map((p) => p.key)].join('|');
-  const known = kernels.get(key);
-  if (known) return known;
-  const parameters = entry.parameters.map((p) => formDouble(p, () => null) ?? { re: Number.NaN, im: Number.NaN });
-  const kernel = functions[entry.name].double(parameters);
-  kernels.set(key, kernel);
-  return kernel;
-}
-
-/** A function whose periods move with a variable: its tables are made anew at every point. */
-function pointwise(entry: Entry, variables: readonly string[]): Step {
-  return (points, _xRe, _xIm, re, im) => {
+/** Arguments that are not affine, and periods that move with a variable: evaluated point by point from their forms. */
+function pointwise({ name, argument, parameters, power }: Entry, variables: readonly string[], kernels: Kernels): Step {
+  const still = parameters.every((form) => form.symbols().length === 0);
+  return (points, xRe, xIm, re, im) => {
     for (let k = 0; k < re.length; k++) {
-      const at = (name: string): DoubleValue | null => {
-        const index = variables.indexOf(name);
+      const at = (symbol: string): DoubleValue | null => {
+        const index = variables.indexOf(symbol);
         return index < 0 ? null : { re: (points[index] as Float64Array)[k] as number, im: 0 };
       };
-      const parameters = entry.parameters.map((p) => formDouble(p, at) ?? { re: Number.NaN, im: Number.NaN });
-      const x = formDouble(entry.argument, at) ?? { re: Number.NaN, im: Number.NaN };
-      functions[entry.name]
-        .double(parameters)
-        .addLog(
-          Float64Array.of(x.re),
-          Float64Array.of(x.im),
-          entry.power,
-          re.subarray(k, k + 1),
-          im.subarray(k, k + 1),
-        );
+      const x = formDouble(argument, at) ?? NOT_A_NUMBER;
+      xRe[k] = x.re;
+      xIm[k] = x.im;
+      if (still) continue;
+      const kernel = functions[name].double(parameters.map((form) => formDouble(form, at) ?? NOT_A_NUMBER));
+      kernel.addLog(
+        xRe.subarray(k, k + 1),
+        xIm.subarray(k, k + 1),
+        power,
+        re.subarray(k, k + 1),
+        im.subarray(k, k + 1),
+      );
     }
-  };
-}
-
-/** Fills the argument arrays; answers whether all arguments are real. */
-type Fill = (points: readonly Float64Array[], xRe: Float64Array, xIm: Float64Array) => boolean;
-
-interface NumericTerm {
-  readonly re: number;
-  readonly im: number;
-  /** Powers of the variables, most often a single first power. */
-  readonly powers: readonly { readonly variable: number; readonly power: number }[];
-}
-
-/** Polynomials in the variables run as such; anything else is evaluated point by point. */
-function compileArgument(form: Form, variables: readonly string[]): Fill {
-  const terms: NumericTerm[] = [];
-  for (const term of form.split()) {
-    const numeric = numericTerm(term, variables);
-    if (numeric === null) return fillPointwise(form, variables);
-    terms.push(numeric);
-  }
-  const real = terms.every(({ im }) => im === 0);
-  return (points, xRe, xIm) => {
-    xRe.fill(0);
-    if (!real) xIm.fill(0);
-    for (const { re, im, powers } of terms) {
-      for (let k = 0; k < xRe.length; k++) {
-        let x = 1;
-        for (const { variable, power } of powers) {
-          const value = (points[variable] as Float64Array)[k] as number;
-          x *= power === 1 ? value : value ** power;
-        }
-        xRe[k] = (xRe[k] as number) + re * x;
-        if (!real) xIm[k] = (xIm[k] as number) + im * x;
-      }
-    }
-    return real;
-  };
-}
-
-function numericTerm(form: Form, variables: readonly string[]): NumericTerm | null {
-  const powers: { variable: number; power: number }[] = [];
-  let rest = form;
-  for (const { atom, power } of form.terms[0]?.factors ?? []) {
-    if (atom.kind !== 'symbol') continue;
-    const variable = variables.indexOf(atom.name);
-    if (variable < 0) continue;
-    powers.push({ variable, power });
-    rest = rest.substitute((name) => (name === atom.name ? Form.one : null));
-  }
-  if (rest.symbols().length > 0) return null;
-  const value = formDouble(rest, () => null);
-  return value === null ? null : { ...value, powers };
-}
-
-function fillPointwise(form: Form, variables: readonly string[]): Fill {
-  return (points, xRe, xIm) => {
-    for (let k = 0; k < xRe.length; k++) {
-      const value = formDouble(form, (name) => {
-        const index = variables.indexOf(name);
-        return index < 0 ? null : { re: (points[index] as Float64Array)[k] as number, im: 0 };
-      });
-      xRe[k] = value?.re ?? Number.NaN;
-      xIm[k] = value?.im ?? Number.NaN;
-    }
-    return false;
+    if (still) kernels.of(name, parameters).addLog(xRe, xIm, power, re, im);
   };
 }

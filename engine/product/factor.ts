@@ -21,6 +21,16 @@ export interface WeightSet {
   readonly weights: () => readonly Weight[];
   /** One of each pair w, -w; asked only of sets that are their own opposites and do not hold zero. */
   readonly half: () => readonly Weight[];
+  /** The same weights as rows of coefficients in doubles, for programs. */
+  readonly rows: (half: boolean) => WeightRows;
+}
+
+/** Weights in doubles: rows[k * names.length + j] is the coefficient of the coordinate names[j] in weight k. */
+export interface WeightRows {
+  /** Coordinates on which the weights are linear; the fluxes have the names `fluxes[j]`, null where there is none. */
+  readonly names: readonly string[];
+  readonly fluxes: readonly (string | null)[];
+  readonly rows: Float64Array;
 }
 
 export interface Weight {

@@ -1,5 +1,5 @@
 import type { FormulaRequest } from '../language/tree';
-import { isSpecial } from '../spheres/quantity';
+import { isSpecial, quantity } from '../spheres/quantity';
 import type { Analysis } from './analysis';
 import { type Answer, failure } from './answer';
 import { formProduct, formulaView, type Printable } from './formula';
@@ -37,5 +37,7 @@ export function printableTheory(analysis: Analysis, name: string, notation: numb
       value === null || range !== null ? [] : [[parameter, value] as const],
     ),
   );
-  return { sphere: entry.sphere, theory: entry.built.theory, fixed, notation };
+  const { sphere } = entry;
+  const { theory } = entry.built;
+  return { sphere, theory, fixed, notation, oneLoop: quantity(sphere, theory, 'one-loop') ?? [] };
 }

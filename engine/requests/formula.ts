@@ -7,8 +7,8 @@ import { displayLatex, type Piece, productLatex } from '../latex/product';
 import { symbolLatex } from '../latex/symbol';
 import { stemOf } from '../latex/weights';
 import { collectEqual, simplify } from '../product/simplify';
-import { type ElementaryProduct, elementary, isSpecial, quantity } from '../spheres/quantity';
-import type { Sphere } from '../spheres/sphere';
+import { type ElementaryProduct, elementary, isSpecial } from '../spheres/quantity';
+import type { Sphere, TheoryProduct } from '../spheres/sphere';
 import { gaugeGroups, type Theory } from '../theory/theory';
 import type { FormulaView } from './result';
 
@@ -19,14 +19,15 @@ export interface Printable {
   /** Closed values of the parameters without a range. */
   readonly fixed: ReadonlyMap<string, Form>;
   readonly notation: number;
+  /** The one-loop product as it comes from the multiplets. */
+  readonly oneLoop: TheoryProduct;
 }
 
 export const FORMS: readonly FormulaForm[] = ['modes', 'unpaired', 'functions', 'elementary'];
 
 /** The product behind a form, and the parameter values it holds at; null for the modes, which are no such product. */
 export function formProduct(printable: Printable, form: FormulaForm): ElementaryProduct | null {
-  const { sphere, theory, fixed } = printable;
-  const raw = quantity(sphere, theory, 'one-loop') ?? [];
+  const { sphere, theory, fixed, oneLoop: raw } = printable;
   switch (form) {
     case 'modes':
       return null;

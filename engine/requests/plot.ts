@@ -1,9 +1,10 @@
 import type { Part, PlotRequest, RangeClause } from '../language/tree';
 import { symbolLatex } from '../latex/symbol';
+import { affineProduct } from '../numeric/affine';
 import { asymptote } from '../numeric/growth';
 import { marksOnLine } from '../numeric/marks';
-import { compile } from '../numeric/program';
-import { elementary } from '../spheres/quantity';
+import { compile, compileAffine, type Program } from '../numeric/program';
+import { elementary, namesIn } from '../spheres/quantity';
 import type { TheoryProduct } from '../spheres/sphere';
 import { type Analysis, realNumber } from './analysis';
 import { type Answer, failure } from './answer';
@@ -83,13 +84,13 @@ function makeCurve(
   const problem = unreadable(entry, quantity.theory.name);
   if (problem !== null || !entry?.built?.theory || !entry.sphere) return problem ?? '';
   const free = request.over.map(({ name }) => name);
-  const resolved = resolvePoint(analysis, entry.sphere, entry.built.theory, request.at, free, 'zero');
-  if (resolved.kind === 'failure') return resolved.message;
   const raw = theoryQuantity(entry, quantity.what.name);
   if (raw === null) return unknownQuantity(entry, quantity.what.name);
+  const used = namesIn(entry.built.theory, raw);
+  const resolved = resolvePoint(analysis, entry.sphere, entry.built.theory, request.at, free, 'zero', used);
+  if (resolved.kind === 'failure') return resolved.message;
   const { product } = elementary(entry.sphere, entry.built.theory, raw, new Map());
-  const name = request.curves.length > 1 || request.over.length > 0 ? quantity.what.name : quantity.theory.name;
-  return { name, part: quantity.log ? 'log' : part, product, point: resolved.point };
+  return { name: quantity.what.name, part: quantity.log ? 'log' : part, product, point: resolved.point };
 }
 
 function line(curves: readonly Curve[], axis: PlotAxis): Pick<PlotResult, 'series' | 'marks' | 'asymptotes'> {
@@ -98,15 +99,16 @@ function line(curves: readonly Curve[], axis: PlotAxis): Pick<PlotResult, 'serie
   const marks: PlotMark[] = [];
   const asymptotes: PlotSeries[] = [];
   curves.forEach((curve, k) => {
-    const { y, part } = values(curve, [axis.name], [x]);
+    const entries = affineProduct(curve.product, [axis.name], curve.point.values);
+    const { y, part } = values(curve, compileAffine(entries, [axis.name]), [x]);
     const name = `${part} ${curve.name}`;
     series.push({ name, x: Array.from(x), y });
-    for (const { at, order } of marksOnLine(curve.product, axis.name, curve.point.values, axis.from, axis.to)) {
+    for (const { at, order } of marksOnLine(entries, axis.from, axis.to)) {
       marks.push({ kind: order > 0 ? 'zero' : 'pole', x: at, order: Math.abs(order), series: k });
     }
     if (part === 'abs' || part === 'log') {
       for (const end of [-1, 1] as const) {
-        const log = asymptote(curve.product, axis.name, curve.point.values, end, x);
+        const log = asymptote(entries, axis.name, end, x);
         if (log === null) continue;
         const side = Array.from(x, (_, index) => index).filter((index) => end * (x[index] as number) > 0);
         asymptotes.push({
@@ -130,7 +132,8 @@ function map(curve: Curve, axes: readonly PlotAxis[]): PlotSeries {
     x[k] = xs[k % MAP_POINTS] as number;
     y[k] = ys[Math.floor(k / MAP_POINTS)] as number;
   }
-  const { y: flat, part } = values(curve, [first.name, second.name], [x, y]);
+  const program = compile(curve.product, [first.name, second.name], curve.point.values);
+  const { y: flat, part } = values(curve, program, [x, y]);
   const z = Array.from(ys, (_, row) => flat.slice(row * MAP_POINTS, (row + 1) * MAP_POINTS));
   return { name: `${part} ${curve.name}`, x: Array.from(xs), y: Array.from(ys), z };
 }
@@ -143,14 +146,14 @@ function grid({ from, to }: PlotAxis, count: number): Float64Array {
 const NEARLY_REAL = 1e-9;
 
 function values(
-  { product, point, part }: Curve,
-  variables: readonly string[],
+  { part }: Curve,
+  program: Program,
   points: readonly Float64Array[],
 ): { y: (number | null)[]; part: Part } {
   const length = (points[0] as Float64Array).length;
   const re = new Float64Array(length);
   const im = new Float64Array(length);
-  compile(product, variables, point.values).addLog(points, re, im);
+  program.addLog(points, re, im);
   const shown = part ?? (im.every((phase) => Math.abs(Math.sin(phase)) < NEARLY_REAL) ? 're' : 'abs');
   return { part: shown, y: Array.from(re, (log, k) => finite(show(shown, log, im[k] as number))) };
 }

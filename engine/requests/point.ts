@@ -17,9 +17,9 @@ export type PointResult =
   | { readonly kind: 'failure'; readonly message: string };
 
 /**
- * The point of a request: assignments first, then the notebook's parameters. Coulomb parameters that are not set stay
- * open when they are `free` (the axes of a plot), are zero for plots, and are an error for values; masses and FI
- * parameters that are not set are zero, and a note says so.
+ * The point of a request: assignments first, then the notebook's parameters. Names in `free` (the axes of a plot) stay
+ * open. Of the names that the quantity depends on (`used`), Coulomb parameters that are not set are zero for plots and
+ * an error for values; masses and FI parameters that are not set are zero, and a note says so.
  */
 export function resolvePoint(
   analysis: Analysis,
@@ -28,6 +28,7 @@ export function resolvePoint(
   at: readonly Assignment[],
   free: readonly Name[],
   unsetCoulomb: 'error' | 'zero',
+  used: ReadonlySet<string>,
 ): PointResult {
   const settable = settableNames(analysis, theory);
   const dependent = new Map(theory.groups.flatMap(({ dependent: relations }) => [...relations]));
@@ -49,7 +50,7 @@ export function resolvePoint(
   }
   const axes = new Set(free.map(({ name }) => name));
   const notes: string[] = [];
-  const failure = fillUnset(theory, axes, set, unsetCoulomb, notes);
+  const failure = fillUnset(theory, axes, set, unsetCoulomb, notes, used);
   if (failure !== null) return { kind: 'failure', message: failure };
   const geometry = sphere.geometry(theory);
   const values = (name: string): Form | null => {
@@ -100,8 +101,10 @@ function fillUnset(
   set: Map<string, Form>,
   unsetCoulomb: 'error' | 'zero',
   notes: string[],
+  used: ReadonlySet<string>,
 ): string | null {
-  const open = (names: readonly string[]): string[] => names.filter((name) => !set.has(name) && !axes.has(name));
+  const open = (names: readonly string[]): string[] =>
+    names.filter((name) => used.has(name) && !set.has(name) && !axes.has(name));
   const coulomb = open(independent(theory, 'gauge'));
   if (coulomb.length > 0 && unsetCoulomb === 'error') {
     return `Coulomb parameters without a value: ${coulomb.join(', ')}. Add \`at ${coulomb.map((name) => `${name} = 0.3`).join(', ')}\`.`;

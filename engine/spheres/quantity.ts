@@ -66,3 +66,16 @@ export function elementary(
 export function isSpecial(factor: Factor<TheoryWeights>): boolean {
   return !functions[factor.name].elementary;
 }
+
+/** Names of all coordinates and parameters that a product depends on, geometry symbols left out. */
+export function namesIn(theory: Theory, product: TheoryProduct): ReadonlySet<string> {
+  const names = new Set<string>();
+  for (const { argument, weights } of product) {
+    for (const name of argument.symbols()) if (!name.startsWith('@')) names.add(name);
+    for (const { group } of weights?.parts ?? []) {
+      const { coordinates, dependent } = theory.groups[group] as Theory['groups'][number];
+      for (const name of coordinates) if (!dependent.has(name)) names.add(name);
+    }
+  }
+  return names;
+}

@@ -3,7 +3,7 @@ import { Rational } from '../exact/rational';
 import type { WeightOrbit } from '../lie/orbit';
 import type { Representation } from '../lie/representation';
 import { parseRepresentation } from '../lie/representation';
-import type { Weight, WeightSet } from '../product/factor';
+import type { Weight, WeightRows, WeightSet } from '../product/factor';
 import type { Theory, TheoryGroup } from './theory';
 
 /** One group's share in a set of weights: an orbit of its Weyl group, or the opposite one. */
@@ -51,6 +51,20 @@ export class TheoryWeights implements WeightSet {
     return this.sums(true);
   }
 
+  rows(half: boolean): WeightRows {
+    const groups = this.parts.map(({ group }) => this.groups[group] as TheoryGroup);
+    const names = groups.flatMap(independentNames);
+    let rows: number[][] = [[]];
+    this.parts.forEach(({ orbit }, k) => {
+      const own = independentRows(groups[k] as TheoryGroup, orbit, half && k === 0);
+      rows = rows.flatMap((row) => own.map((more) => [...row, ...more]));
+    });
+    const fluxes = groups.flatMap((group) =>
+      independentNames(group).map((name) => (group.role === 'gauge' ? fluxName(name) : null)),
+    );
+    return { names, fluxes, rows: Float64Array.from(rows.flat()) };
+  }
+
   /** With `half`, the first part gives one of each pair, which leaves one of each pair of sums. */
   private sums(half: boolean): readonly Weight[] {
     let sums: Weight[] = [{ position: Form.zero, flux: Form.zero }];
@@ -67,6 +81,25 @@ export class TheoryWeights implements WeightSet {
 /** Name of the flux that goes with a Coulomb parameter: `flux2` for `sigma2`, `flux` for `sigma`. */
 export function fluxName(coordinate: string): string {
   return coordinate.replace(/^[A-Za-z_]+/, 'flux');
+}
+
+function independentNames({ coordinates, dependent }: TheoryGroup): string[] {
+  return coordinates.filter((name) => !dependent.has(name));
+}
+
+/** Weights of an orbit on the independent coordinates: what a dependent one contributes is spread over the others. */
+function independentRows(group: TheoryGroup, orbit: WeightOrbit, half: boolean): number[][] {
+  const { denominator, vectors, width } = half ? orbit.halfVectors() : orbit.vectors();
+  const { independent, dependent } = group.group;
+  return Array.from({ length: vectors.length / width }, (_, row) => {
+    const entry = (k: number): number => (vectors[row * width + k] as number) / denominator;
+    return independent.map((coordinate) =>
+      dependent.reduce((sum, { coordinate: bound, terms }) => {
+        const share = terms.find((term) => term.coordinate === coordinate)?.coefficient.toNumber() ?? 0;
+        return sum + share * entry(bound);
+      }, entry(coordinate)),
+    );
+  });
 }
 
 function orbitForms(group: TheoryGroup, orbit: WeightOrbit, half: boolean): readonly Weight[] {
