@@ -16,7 +16,7 @@ export interface Piece {
 }
 
 /** More weights than this are not written out. */
-const MAXIMAL_EXPANDED = 64;
+const MAXIMAL_EXPANDED = 24;
 
 export const printer: Printer = { form: formLatex };
 

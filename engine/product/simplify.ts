@@ -188,11 +188,17 @@ function collectConstants<W extends WeightSet>(constants: readonly Factor<W>[], 
 const UNITS = new Set([Form.one, Form.one.neg(), Form.i, Form.i.neg()].map((form) => form.key));
 
 /** Replaces quotients at arguments that differ by periods; what they leave is taken over the same weights. */
-function pairByShifts<W extends WeightSet>(product: Product<W>, geometry: Geometry): Product<W> {
+function pairByShifts<W extends WeightSet>(
+  product: Product<W>,
+  geometry: Geometry,
+  lattices: Map<string, StepLattice>,
+): Product<W> {
   return buckets(product).flatMap((bucket) => {
     const first = bucket[0] as Factor<W>;
     if (functions[first.name].elementary || functions[first.name].shifts.length === 0) return bucket;
-    const lattice = StepLattice.of(first.name, first.parameters, geometry);
+    const key = `${first.name}|${first.parameters.map((form) => form.key).join('|')}`;
+    const lattice = lattices.get(key) ?? StepLattice.of(first.name, first.parameters, geometry);
+    lattices.set(key, lattice);
     const open = [...bucket];
     const made: Factor<W>[] = [];
     for (let i = 0; i < open.length; i++) {
