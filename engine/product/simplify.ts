@@ -20,8 +20,10 @@ export type Depth = 'functions' | 'elementary';
 export function simplify<W extends WeightSet>(product: Product<W>, depth: Depth, geometry: Geometry = []): Product<W> {
   let current = gather(product);
   if (depth === 'functions') return current;
+  // Within one call: the lattice of a function is the same for all its factors and in every round.
+  const lattices = new Map<string, StepLattice>();
   for (let round = 0; round < MAXIMAL_ROUNDS; round++) {
-    const next = gather(reduceElementary(pairByShifts(current, geometry)));
+    const next = gather(reduceElementary(pairByShifts(current, geometry, lattices)));
     if (next.length === current.length && next.every((f, k) => sameFactor(f, current[k]))) return next;
     current = next;
   }
