@@ -3,6 +3,7 @@ import type { FixedComplex } from '../arithmetic/fixed-complex';
 import { multiplyComplex, squareComplex } from '../arithmetic/fixed-complex';
 import { piFixed } from '../arithmetic/fixed-constants';
 import { expScaled } from '../arithmetic/fixed-exp';
+import { powerSum } from '../arithmetic/fixed-series';
 import { sinCosFixed } from '../arithmetic/fixed-trig';
 import type { FarTable } from './double-sine-far-table';
 import type { DoubleSineFrame } from './double-sine-frame';
@@ -11,7 +12,6 @@ import { log2MidpointError, log2ResidueError } from './double-sine-heights';
 import type { NearTable } from './double-sine-near-table';
 import { fixedFromDyadic, nodeCount } from './double-sine-near-table';
 import type { ScaledSeries } from './double-sine-series';
-import { powerSum } from './double-sine-series';
 
 /** log s_b(x) inside the strip, with the frame's precision, and the error of the method in ulps of the frame's bits. */
 export interface CoreValue {

@@ -1,5 +1,4 @@
 import { bitLength, shiftRounded } from '../arithmetic/fixed';
-import type { FixedComplex } from '../arithmetic/fixed-complex';
 import { piFixed } from '../arithmetic/fixed-constants';
 import { sinCosFixed } from '../arithmetic/fixed-trig';
 import type { DoubleSineFrame } from './double-sine-frame';
@@ -82,28 +81,4 @@ export function log2LargestOf(frame: DoubleSineFrame, lists: readonly (readonly 
     for (const value of list) bits |= value < 0n ? -value : value;
   }
   return Math.max(0, bitLength(bits) - frame.precision);
-}
-
-/**
- * sum_{n < count} a_n z^n for real a_n. Horner's scheme for real z; else the real recurrence b_n = a_n + 2 Re(z) b_{n+1} - |z|^2 b_{n+2}
- * (Knuth, The Art of Computer Programming 2, 4.6.4), two real products a term. With |z| <= rho < 1 an error d made in every step
- * ends as at most d/(1 - rho)^2.
- */
-export function powerSum(coefficients: readonly bigint[], count: number, z: FixedComplex, bits: number): FixedComplex {
-  const shift = BigInt(bits);
-  const { re, im } = z;
-  let sum = 0n;
-  if (im === 0n) {
-    for (let n = count - 1; n >= 0; n--) sum = (coefficients[n] as bigint) + ((re * sum) >> shift);
-    return { re: sum, im: 0n };
-  }
-  const twice = re << 1n;
-  const norm = (re * re + im * im) >> shift;
-  let before = 0n;
-  for (let n = count - 1; n > 0; n--) {
-    const next = (coefficients[n] as bigint) + ((twice * sum - norm * before) >> shift);
-    before = sum;
-    sum = next;
-  }
-  return { re: (coefficients[0] ?? 0n) + ((re * sum - norm * before) >> shift), im: (im * sum) >> shift };
 }
