@@ -36,6 +36,9 @@ function collectNames(node: ExpressionNode, into: Name[]): void {
     case 'name':
       if (!CONSTANT_FORMS.has(node.name)) into.push({ name: node.name, span: { from: node.from, to: node.to } });
       return;
+    case 'parentheses':
+      collectNames(node.inside, into);
+      return;
     case 'negation':
       collectNames(node.operand, into);
       return;
@@ -69,6 +72,8 @@ class Evaluator {
         return this.#remembered(node, () => this.#forms.sum([Form.number(node.value)]));
       case 'name':
         return this.#remembered(node, () => CONSTANT_FORMS.get(node.name) ?? Form.symbol(node.name));
+      case 'parentheses':
+        return this.form(node.inside);
       case 'negation':
         return this.form(node.operand)?.neg() ?? null;
       case 'sum':

@@ -11,6 +11,7 @@ export type ExpressionNode = Span &
   (
     | { readonly kind: 'number'; readonly value: Rational }
     | { readonly kind: 'name'; readonly name: string }
+    | { readonly kind: 'parentheses'; readonly inside: ExpressionNode }
     | { readonly kind: 'negation'; readonly operand: ExpressionNode }
     | { readonly kind: 'sum'; readonly terms: readonly ExpressionNode[] }
     | { readonly kind: 'product'; readonly factors: readonly Factor[] }
@@ -127,13 +128,12 @@ class ExpressionParser {
     if (!endsWell(this.#reader)) return null;
     const closing = this.#reader.peek();
     if (closing?.text !== ')') {
-      const separates = !closing || closing.text === ',' || closing.text === ';';
-      return separates
-        ? this.#reader.report('parenthesis-open', opening)
-        : this.#reader.unexpected(closing, 'an operator or `)`');
+      return closing
+        ? this.#reader.unexpected(closing, 'an operator or `)`')
+        : this.#reader.report('parenthesis-open', opening);
     }
     this.#reader.next();
-    return { ...inside, from: opening.from, to: closing.to };
+    return { kind: 'parentheses', inside, from: opening.from, to: closing.to };
   }
 
   #nameOrCall(token: Token): ExpressionNode | null {

@@ -27,7 +27,8 @@ const LOOKS_LIKE_WORK: Readonly<Record<WorkWord, RegExp>> = {
  */
 export function hintAt(paragraph: ProsePiece, before: Piece | null, reading: Reading): void {
   const { from, to } = paragraph;
-  const hint = hintFor(reading.text.slice(from, to), from, before);
+  const follows = before?.kind === 'work' && reading.text.slice(before.to, from).split(/\r\n|\r|\n/).length <= 2;
+  const hint = hintFor(reading.text.slice(from, to), from, follows ? before.word : null);
   if (hint) reading.report(hint.code, hint, hint.data, 'hint');
 }
 
@@ -36,14 +37,14 @@ interface Hint extends Span {
   readonly data: Readonly<Record<string, string>>;
 }
 
-function hintFor(paragraph: string, from: number, before: Piece | null): Hint | null {
+/** `block` is the word of the work that ends on the line before. */
+function hintFor(paragraph: string, from: number, block: WorkWord | null): Hint | null {
   const line = /^[^\r\n]*/.exec(paragraph)?.[0] ?? '';
   const indent = line.length - line.trimStart().length;
   const word = /^\S+/.exec(line.slice(indent))?.[0] ?? '';
   const at = { from: from + indent, to: from + indent + word.length };
   if (indent > 0) return isWorkWord(word) ? { ...at, code: 'hint-work-indented', data: { word } } : null;
   if (word.startsWith('%')) return { ...at, code: 'hint-comment-in-prose', data: {} };
-  const block = before?.kind === 'work' && from - before.to <= LONGEST_NEWLINE ? before.word : null;
   if (block && LINE_WORDS[block]?.some((candidate) => candidate === word)) {
     return { ...at, code: 'hint-line-not-indented', data: { word, block } };
   }
@@ -52,8 +53,6 @@ function hintFor(paragraph: string, from: number, before: Piece | null): Hint | 
   if (LIST_OR_QUOTE.test(line) || !/[\r\n][^\S\r\n]+\S/.test(paragraph)) return null;
   return { ...at, code: 'hint-paragraph-indented', data: {} };
 }
-
-const LONGEST_NEWLINE = 2;
 
 /** How much of a line is looked at; the patterns cost quadratic time. */
 const LOOK_AHEAD = 200;

@@ -29,7 +29,7 @@ export function readQuantity(reader: TokenReader): Quantity | null {
   if (reader.peek(1)?.text === '(') return readFunction(reader, token, log, start);
   const what = readWhat(reader);
   if (!what) return null;
-  if (!reader.take('of')) return reader.report('of-missing', reader.here, { what: what.name });
+  if (!reader.take('of')) return reader.report('of-missing', reader.here, { name: what.name });
   const subject = reader.name('subject-missing', 'the name of a theory or a spectrum');
   if (!subject) return null;
   const span = { from: start, to: subject.span.to };

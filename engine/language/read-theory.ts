@@ -32,7 +32,8 @@ export function readTheory(piece: WorkPiece, reading: Reading): TheoryBlock | nu
   };
   for (const line of rest) readTheoryLine(line, draft, reading);
   if (!name) return null;
-  if (!draft.sphere) reading.report('sphere-missing', name.span, { theory: name.name });
+  const anySphere = rest.some((line) => line[0]?.text === 'sphere');
+  if (!anySphere) reading.report('sphere-missing', name.span, { theory: name.name });
   checkTable(draft, reading);
   const { incomplete: _, groups, multiplets, ...lines } = draft;
   return {

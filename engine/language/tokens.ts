@@ -82,7 +82,7 @@ export function* piecesOf(tree: Tree, text: string): Generator<Piece> {
     const { from, to, type } = cursor;
     const word = WORD_OF_NODE.get(type.id);
     if (word) yield workPiece(cursor, word, text);
-    else yield { kind: type.id === term.Paragraph ? 'paragraph' : 'other', from, to };
+    else if (type.id !== term.Comment) yield { kind: type.id === term.Paragraph ? 'paragraph' : 'other', from, to };
   } while (cursor.nextSibling());
 }
 
@@ -102,7 +102,7 @@ function workPiece(cursor: TreeCursor, word: WorkWord, text: string): WorkPiece 
       while (cursor.nextSibling());
       cursor.parent();
     } else pushToken(first, cursor, text);
-    to = cursor.to;
+    if (cursor.type.id !== term.Comment) to = cursor.to;
   }
   cursor.parent();
   return { kind: 'work', word, wordSpan, from, to, lines };

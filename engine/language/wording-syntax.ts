@@ -70,7 +70,7 @@ const theories = {
     `\`${d.word}\` begins no line of a theory.${meant(d.meant)} Lines begin with ${quoted(THEORY_LINE_WORDS)}.`,
   'line-twice': (d) => `A theory has one \`${d.word}\` line; delete one of them.`,
   'sphere-missing': (d) =>
-    `The theory \`${d.theory}\` lives nowhere: add a line \`sphere S3\` (or ${quoted(SPHERES)}).`,
+    `The theory \`${d.theory}\` lives nowhere: add a line \`sphere\` with one of ${quoted(SPHERES)}.`,
   'sphere-word-missing': () => `The sphere is missing after \`sphere\`: one of ${quoted(SPHERES)}.`,
   'sphere-unknown': (d) => `There is no sphere \`${d.word}\` here; known are ${quoted(SPHERES)}.`,
   'sphere-option-missing': () => 'A squashing is missing after the comma, such as `b = 5/4` or `w1 = 1`.',
@@ -137,7 +137,7 @@ const requests = {
   'of-missing': (d) => `Say of what: \`${d.name} of NAME\`, with the name of a theory or a spectrum.`,
   'subject-missing': (d) => `A name is missing after \`${d.after}\`: that of a theory or a spectrum of this notebook.`,
   'special-function-unknown': (d) => `There is no function \`${d.name}\` to ask for; known are ${quoted(SIGNATURES)}.`,
-  'argument-count': (d) => `\`${d.name}\` has ${d.count} arguments here; it is written \`${d.signature}\`.`,
+  'argument-count': (d) => `\`${d.name}\` is written \`${d.signature}\`; the number of arguments here is ${d.count}.`,
   'prescription-unknown': (d) =>
     `A determinant is regularised ${PRESCRIPTIONS.map((word) => `\`by ${word}\``).join(' or ')}${d.word ? `, not by \`${d.word}\`` : ''}.`,
   'formula-form-unknown': (d) =>
