@@ -77,7 +77,7 @@ export function stepsToFarPoint(a: DoubleComplex, order: number, bits: number): 
 /** Lists are made for whole multiples of this many bits, so that close precisions share one. */
 const LIST_STEP = 64;
 
-function listBits(bits: number): number {
+export function listBits(bits: number): number {
   return LIST_STEP * Math.ceil(bits / LIST_STEP);
 }
 
@@ -85,7 +85,7 @@ function listBits(bits: number): number {
  * (2 pi)^(2j) B_2j/(2j)! for j = 1, 2, ..., that is +-2 zeta(2j), with `bits` fraction bits; error <= 2 units each.
  * Long enough for every series at a far point of that precision.
  */
-const scaledBernoulli = memoiseBounded(16, (bits: number): readonly bigint[] => {
+export const scaledBernoulli = memoiseBounded(16, (bits: number): readonly bigint[] => {
   const count = Math.ceil(0.2 * bits) + 16;
   const working = bits + 64;
   const square = (4n * piFixed(working) * piFixed(working)) >> BigInt(working);
