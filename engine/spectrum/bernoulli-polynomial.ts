@@ -2,7 +2,7 @@ import { memoiseBounded } from '../arithmetic/memo';
 import { Form } from '../exact/form';
 import { Rational } from '../exact/rational';
 import { bernoulliNumber } from '../functions/bernoulli';
-import type { Polynomial } from './polynomial';
+import { evaluatePolynomial, type Polynomial } from './polynomial';
 
 /** B_n(x) = sum_k binomial(n, k) B_(n-k) x^k (DLMF 24.2.5). */
 export const bernoulliPolynomial = memoiseBounded(64, (n: number): Polynomial => {
@@ -14,3 +14,10 @@ export const bernoulliPolynomial = memoiseBounded(64, (n: number): Polynomial =>
   }
   return result;
 });
+
+/** P with P(x + 1) - P(x) = p(x), from Bernoulli polynomials (DLMF 24.4.1). */
+export function powerSums(p: Polynomial, at: Form): Form {
+  return Form.sum(
+    p.map((c, k) => c.mul(evaluatePolynomial(bernoulliPolynomial(k + 1), at)).scale(Rational.of(1, k + 1))),
+  );
+}

@@ -1,8 +1,8 @@
 import { Form } from '../exact/form';
 import { Rational } from '../exact/rational';
 
-import { bernoulliPolynomial } from './bernoulli-polynomial';
-import { evaluatePolynomial, type Polynomial, polynomialIn } from './polynomial';
+import { powerSums } from './bernoulli-polynomial';
+import { polynomialIn } from './polynomial';
 import { MAXIMAL_MODES, type Remark, remark, type WrittenTower } from './tower';
 
 /** An index from `from` in steps of 1; `last` steps, or endless (null). */
@@ -44,11 +44,4 @@ export function summedOver(form: Form, { name, last }: Range): Form | null {
   const p = polynomialIn(form, name);
   if (p === null || last === null) return null;
   return powerSums(p, Form.number(last + 1)).sub(powerSums(p, Form.zero));
-}
-
-/** P with P(x + 1) - P(x) = p(x), from Bernoulli polynomials (DLMF 24.4.1). */
-function powerSums(p: Polynomial, at: Form): Form {
-  return Form.sum(
-    p.map((c, k) => c.mul(evaluatePolynomial(bernoulliPolynomial(k + 1), at)).scale(Rational.of(1, k + 1))),
-  );
 }

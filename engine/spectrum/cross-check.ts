@@ -1,0 +1,154 @@
+import { Form } from '../exact/form';
+import { Rational } from '../exact/rational';
+import type { Estimate } from '../functions/euler-maclaurin';
+import { logarithmOf } from './anomaly';
+import { barnesZetaAtZero } from './barnes-polynomial';
+import { barnesTerms } from './barnes-term';
+import { exactNumbers } from './exact-numbers';
+import { regularisedCount } from './expansion';
+import { fewerBits, negative } from './factor-value';
+import { isFailure, linearSum, type SumFailure } from './linear-sum';
+import { multiplyPolynomials, type Polynomial, polynomialIn, scalePolynomial, zeroPolynomial } from './polynomial';
+import { polynomialRoots } from './polynomial-roots';
+import { type Prescription, rootlessSum } from './rootless-sum';
+import { severalSum } from './several-sum';
+import { estimateOf, scaleEstimate, sumOf } from './total';
+import type { Tower, TowerFactor } from './tower';
+
+/** How a second value was found. */
+export type CheckRoute = 'rootless' | 'roots' | 'further';
+
+export interface CheckValue {
+  readonly route: CheckRoute;
+  readonly estimate: Estimate;
+}
+
+/**
+ * log det by a way of its own, tower by tower and without pairing: towers of linear factors as one polynomial without
+ * its roots, towers with other factors by their roots, several indices with further steps.
+ */
+export function checkValue(
+  towers: readonly Tower[],
+  prescription: Prescription,
+  bits: number,
+): CheckValue | SumFailure {
+  const working = bits + 16;
+  const parts: Estimate[] = [];
+  const routes = new Set<CheckRoute>();
+  for (const tower of towers) {
+    const found =
+      tower.indices.length > 1 ? severalCheck(tower, prescription, working) : singleCheck(tower, prescription, working);
+    if (isFailed(found)) return found;
+    const exponent = estimateOf(Form.number(tower.exponent), working);
+    if (exponent === null) return 'value-undefined';
+    parts.push(scaleEstimate(found.estimate, exponent, working));
+    routes.add(found.route);
+  }
+  const route = (['roots', 'rootless', 'further'] as const).find((r) => routes.has(r)) ?? 'further';
+  return { route, estimate: fewerBits(sumOf(parts), 16) };
+}
+
+function isFailed(found: CheckValue | SumFailure): found is SumFailure {
+  return typeof found === 'string';
+}
+
+function singleCheck(tower: Tower, prescription: Prescription, bits: number): CheckValue | SumFailure {
+  const degeneracy = polynomialIn(tower.degeneracy, tower.indices[0] as string) ?? zeroPolynomial;
+  if (tower.factors.some(({ kind }) => kind === 'irreducible')) return byRoots(tower, degeneracy, prescription, bits);
+  const q = tower.factors.reduce<Polynomial>(
+    (product, factor) => {
+      let result = product;
+      for (let k = 0; k < factor.power; k++) result = multiplyPolynomials(result, factorPolynomial(factor));
+      return result;
+    },
+    [Form.one],
+  );
+  const endless = rootlessSum(q, degeneracy, { from: 0, to: null }, bits, prescription, FURTHER);
+  if (isFailure(endless)) return endless;
+  const parts = [endless];
+  if (tower.last !== null) {
+    const above = rootlessSum(q, degeneracy, { from: tower.last + 1, to: null }, bits, prescription, FURTHER);
+    if (isFailure(above)) return above;
+    parts.push(negative(above));
+  }
+  return withScales(tower, degeneracy, prescription, parts, bits, 'rootless');
+}
+
+/** Steps by which the second value lies further out. */
+const FURTHER = 7;
+
+function factorPolynomial(factor: TowerFactor): Polynomial {
+  return factor.kind === 'linear' ? [factor.constant, Form.one] : factor.polynomial;
+}
+
+function byRoots(
+  tower: Tower,
+  degeneracy: Polynomial,
+  prescription: Prescription,
+  bits: number,
+): CheckValue | SumFailure {
+  const parts: Estimate[] = [];
+  for (const factor of tower.factors) {
+    const shifts = polynomialRoots(factorPolynomial(factor), bits);
+    if (shifts === null) return 'value-undefined';
+    for (const shift of shifts) {
+      const multiplicity = scalePolynomial(degeneracy, factor.power);
+      const value = linearSum(shift, multiplicity, { from: 0, to: tower.last }, bits, FURTHER);
+      if (isFailure(value)) return value;
+      parts.push(value);
+    }
+  }
+  if (prescription === 'operator') {
+    const bare = { ...tower, exponent: Rational.one, factors: tower.factors.map((f) => ({ ...f, scale: [] })) };
+    const anomaly = estimateOf(exactNumbers([bare], 'operator')?.anomaly ?? Form.zero, bits);
+    if (anomaly === null) return 'value-undefined';
+    parts.push(anomaly);
+  }
+  return withScales(tower, degeneracy, prescription, parts, bits, 'roots');
+}
+
+/** Adds the constants taken out of the factors: their logarithm times the regularised number of factors. */
+function withScales(
+  tower: Tower,
+  degeneracy: Polynomial,
+  prescription: Prescription,
+  parts: readonly Estimate[],
+  bits: number,
+  route: CheckRoute,
+): CheckValue | SumFailure {
+  const constants: Form[] = [];
+  const run = { from: 0, to: tower.last };
+  const total = Form.sum(
+    tower.factors.map((f) => regularisedCount(factorPolynomial(f), degeneracy, run).scale(f.power)),
+  );
+  for (const factor of tower.factors) {
+    const own = regularisedCount(factorPolynomial(factor), degeneracy, run);
+    // By operator the constant of the whole polynomial counts with zeta(0) of the whole: the mean over its factors.
+    const share = Rational.of((factorPolynomial(factor).length - 1) * factor.power, tower.order);
+    const count = prescription === 'factors' ? own.scale(factor.power) : total.scale(share);
+    for (const { base, weight } of factor.scale) constants.push(logarithmOf(base).mul(count).scale(weight));
+  }
+  const constant = estimateOf(Form.sum(constants), bits);
+  return constant === null ? 'value-undefined' : { route, estimate: sumOf([...parts, constant]) };
+}
+
+function severalCheck(tower: Tower, prescription: Prescription, bits: number): CheckValue | SumFailure {
+  const parts: Estimate[] = [];
+  const constants: Form[] = [];
+  for (const factor of tower.factors) {
+    if (factor.kind !== 'linear') return 'value-undefined';
+    for (const { shift, periods, multiplicity } of barnesTerms(tower, factor)) {
+      const value = severalSum(shift, periods, multiplicity.scale(factor.power), bits, FURTHER);
+      if (isFailure(value)) return value;
+      parts.push(value);
+      const count = barnesZetaAtZero(shift, periods).mul(multiplicity).scale(factor.power);
+      for (const { base, weight } of factor.scale) constants.push(logarithmOf(base).mul(count).scale(weight));
+    }
+  }
+  const constant = estimateOf(Form.sum(constants), bits);
+  if (constant === null) return 'value-undefined';
+  parts.push(constant);
+  const numbers = exactNumbers([{ ...tower, exponent: Rational.one }], prescription);
+  const anomaly = prescription === 'operator' ? estimateOf(numbers?.anomaly ?? Form.zero, bits) : null;
+  return { route: 'further', estimate: sumOf(anomaly === null ? parts : [...parts, anomaly]) };
+}
