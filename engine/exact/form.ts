@@ -129,9 +129,9 @@ export class Form {
     return Form.fromCollected(collected);
   }
 
-  /** 1/form; exact for a single term, else an `inverse` atom. Throws RangeError at zero. */
+  /** 1/form; exact for a single term, else an `inverse` atom. Throws FormError at zero. */
   inverse(): Form {
-    if (this.terms.length === 0) throw new RangeError('Division by zero.');
+    if (this.terms.length === 0) throw new FormError('An exact expression divides by zero.');
     if (this.terms.length > 1) return Form.atom(callAtom('inverse', [this]));
     const term = this.terms[0] as Term;
     let result = Form.gaussian(term.coefficient.inverse());
@@ -235,8 +235,14 @@ export class Form {
   }
 }
 
-/** Thrown when a form has more terms than any formula of the field; the border turns it into a refusal. */
-export class FormTooLargeError extends RangeError {
+/**
+ * Thrown where exact values that a user chose leave a form without meaning (a division by zero) or without end. The
+ * requests turn it into a refusal in words.
+ */
+export class FormError extends RangeError {}
+
+/** Thrown when a form has more terms than any formula of the field. */
+export class FormTooLargeError extends FormError {
   constructor(count: number) {
     super(`An exact expression would have ${count} terms; the limit is ${MAXIMAL_TERMS}.`);
   }

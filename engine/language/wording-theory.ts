@@ -4,6 +4,8 @@ import type { Wording } from './wording-syntax';
 export const theoryWording = {
   refused: (d) => `${d.what} ${d.why} ${d.remedy}`,
   'name-unknown': (d) => `\`${d.name}\` has no value. Add \`let ${d.name} = ...\` above, or correct the name.`,
+  'value-undefined': (d) =>
+    `\`${d.text}\` is undefined at the values of its parameters: it divides by zero. Change one of them.`,
   range: (d) => `The range of \`${d.name}\` has to run from a real number to a larger one.`,
   'sphere-not-offered': (d) => `\`${d.sphere}\` is not offered yet; theories can be put on ${d.offered}.`,
   'sphere-option': (d) => `\`${d.name}\` is no parameter of ${d.sphere}; it takes ${d.allowed}.`,

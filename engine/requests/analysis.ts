@@ -6,7 +6,7 @@ import type { Block, Diagnostic, Notebook, Parameter, Request, SpectrumBlock, Th
 import type { Sphere } from '../spheres/sphere';
 import { spheres } from '../spheres/table';
 import { type BuiltTheory, buildTheory } from '../theory/build';
-import { problem } from '../theory/report';
+import { problem, unknownNames, valueAt } from '../theory/report';
 
 /** A `let` with its value in closed form; null when it could not be worked out. */
 export interface ParameterEntry {
@@ -78,31 +78,27 @@ function readParameters(
   const entries = new Map<string, ParameterEntry>();
   for (const block of blocks) {
     if (block.kind !== 'let' || entries.has(block.name.name)) continue;
-    const override = overrides.get(block.name.name);
-    const value = override ?? closed(block.value.form, entries);
-    if (value === null) {
-      for (const name of block.value.names) {
-        if (entries.get(name.name)?.value) continue;
-        diagnostics.push(problem('name-unknown', name.span, { name: name.name }));
-      }
-    }
-    entries.set(block.name.name, { block, value, range: readRange(block, entries, diagnostics) });
+    const values = new Map(
+      [...entries].flatMap(([name, entry]) => (entry.value ? [[name, entry.value] as const] : [])),
+    );
+    const unknown = unknownNames(block.value, values);
+    for (const name of unknown) diagnostics.push(problem('name-unknown', name.span, { name: name.name }));
+    const typed = unknown.length > 0 ? null : valueAt(block.value, values, (found) => diagnostics.push(found));
+    const value = overrides.get(block.name.name) ?? typed;
+    entries.set(block.name.name, { block, value, range: readRange(block, values, diagnostics) });
   }
   return entries;
 }
 
-function closed(form: Form, entries: ReadonlyMap<string, ParameterEntry>): Form | null {
-  const value = form.substitute((name) => entries.get(name)?.value ?? null);
-  return value.symbols().length === 0 ? value : null;
-}
-
 function readRange(
   block: Parameter,
-  entries: ReadonlyMap<string, ParameterEntry>,
+  values: ReadonlyMap<string, Form>,
   diagnostics: Diagnostic[],
 ): { from: number; to: number } | null {
   if (block.range === null) return null;
-  const ends = [block.range.from, block.range.to].map((end) => realNumber(closed(end.form, entries)));
+  const ends = [block.range.from, block.range.to].map((end) =>
+    realNumber(valueAt(end, values, (found) => diagnostics.push(found))),
+  );
   const [from, to] = ends as [number | null, number | null];
   if (from === null || to === null || from >= to) {
     const span = { from: block.range.from.span.from, to: block.range.to.span.to };

@@ -1,4 +1,4 @@
-import type { Form } from '../exact/form';
+import { type Form, FormError } from '../exact/form';
 import { functions } from '../functions/table';
 import type { FormulaForm } from '../language/tree';
 import { formLatex } from '../latex/form';
@@ -40,8 +40,17 @@ export function formProduct(printable: Printable, form: FormulaForm): Elementary
   }
 }
 
-/** One form of a theory's one-loop formula. */
+/** One form of a theory's one-loop formula; a refusal where exact values leave it undefined. */
 export function formulaView(printable: Printable, form: FormulaForm): FormulaView {
+  try {
+    return definedView(printable, form);
+  } catch (error) {
+    if (!(error instanceof FormError)) throw error;
+    return { kind: 'refused', message: `${error.message} Change the values that lead to it.` };
+  }
+}
+
+function definedView(printable: Printable, form: FormulaForm): FormulaView {
   const { sphere, theory, notation } = printable;
   const notes = [...sphere.conventions(theory), ...dependentNotes(theory)];
   const made = formProduct(printable, form);

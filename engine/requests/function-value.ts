@@ -1,4 +1,6 @@
 import { formatBall } from '../arithmetic/decimal-text';
+import { formDouble } from '../arithmetic/form-double';
+import type { Form } from '../exact/form';
 import { functions } from '../functions/table';
 import type { Quantity } from '../language/tree';
 import { evaluatePrecise } from '../numeric/precise';
@@ -11,7 +13,10 @@ import type { ValueResult } from './result';
 type FunctionQuantity = Extract<Quantity, { kind: 'function' }>;
 
 /** A special function of given arguments as a product of one factor; a string says why it cannot be had. */
-export function functionProduct(quantity: FunctionQuantity): TheoryProduct | string {
+export function functionProduct(
+  quantity: FunctionQuantity,
+  values: (name: string) => Form | null,
+): TheoryProduct | string {
   const word = quantity.function.name;
   const declared = Object.values(functions).find(({ spelling }) => spelling === word);
   if (!declared) return `\`${word}\` is not offered yet.`;
@@ -19,17 +24,28 @@ export function functionProduct(quantity: FunctionQuantity): TheoryProduct | str
   if (quantity.arguments.length !== expected) {
     return `\`${word}\` takes ${expected} arguments; ${quantity.arguments.length} were given.`;
   }
-  const [argument, ...parameters] = quantity.arguments.map(({ form }) => form);
+  const [argument, ...parameters] = quantity.arguments.map(({ form }) => form.substitute(values));
   if (!argument) return `\`${word}\` needs an argument.`;
+  const outside = parameters.findIndex((form) => !positive(form));
+  if (outside >= 0) {
+    const typed = quantity.arguments[outside + 1]?.text ?? '';
+    return `\`${word}\` is defined for \`${declared.parameters[outside]}\` with positive real part; \`${typed}\` has none.`;
+  }
   return [{ name: declared.name, argument, parameters, power: 1, weights: null, half: false, from: [] }];
+}
+
+/** Periods need a positive real part; one with free names passes, and is looked at when they have values. */
+function positive(form: Form): boolean {
+  const value = formDouble(form, () => null);
+  return value === null || (value.re > 0 && Number.isFinite(value.re));
 }
 
 /** `value doublesine(0.3 + 0.2i, 5/4), 50 digits`. */
 export function functionValue(analysis: Analysis, quantity: FunctionQuantity, digits: number): Answer {
   const of = quantity.function.name;
-  const product = functionProduct(quantity);
-  if (typeof product === 'string') return failure(of, product);
   const values = (name: string) => analysis.values.get(name) ?? null;
+  const product = functionProduct(quantity, values);
+  if (typeof product === 'string') return failure(of, product);
   const value = evaluatePrecise(product, values, digits);
   switch (value.kind) {
     case 'value': {

@@ -1,3 +1,4 @@
+import type { Form } from '../exact/form';
 import type { Part, PlotRequest, RangeClause } from '../language/tree';
 import { symbolLatex } from '../latex/symbol';
 import { affineProduct } from '../numeric/affine';
@@ -71,13 +72,11 @@ function makeCurve(
 ): Curve | string {
   if (quantity.kind === 'determinant') return 'Determinants of spectra are not offered yet.';
   if (quantity.kind === 'function') {
-    const product = functionProduct(quantity);
-    if (typeof product === 'string') return product;
     const names = axes.map(({ name }) => name);
-    const point: Point = {
-      values: (name) => (names.includes(name) ? null : (analysis.values.get(name) ?? null)),
-      notes: [],
-    };
+    const values = (name: string): Form | null => (names.includes(name) ? null : (analysis.values.get(name) ?? null));
+    const product = functionProduct(quantity, values);
+    if (typeof product === 'string') return product;
+    const point: Point = { values, notes: [] };
     return { name: quantity.function.name, part: quantity.log ? 'log' : part, product, point };
   }
   const entry = analysis.theories.get(quantity.theory.name);

@@ -1,3 +1,4 @@
+import { FormError } from '../exact/form';
 import type { Request } from '../language/tree';
 import type { Analysis } from './analysis';
 import { type Answer, failure, type Surroundings } from './answer';
@@ -11,13 +12,23 @@ import { runValue } from './value';
 /** Answers one request of a notebook. Never throws on what a user typed: what cannot be done is a failure in words. */
 export function run(analysis: Analysis, request: Request, surroundings: Surroundings): Result {
   const start = surroundings.now();
-  const answer = runByKind(analysis, request, surroundings);
+  const answer = guarded(() => runByKind(analysis, request, surroundings), request.kind);
   return {
     ...answer,
     line: analysis.lines.place(request.span.from).line,
     request: requestText(analysis.text, request.span),
     seconds: Math.max(0, surroundings.now() - start),
   } as Result;
+}
+
+/** Exact values may leave an expression undefined, a division by zero say; that is the user's to mend, and said. */
+function guarded(work: () => Answer, of: string): Answer {
+  try {
+    return work();
+  } catch (error) {
+    if (error instanceof FormError) return failure(of, `${error.message} Change the values that lead to it.`);
+    throw error;
+  }
 }
 
 function runByKind(analysis: Analysis, request: Request, surroundings: Surroundings): Answer {

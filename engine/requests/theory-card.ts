@@ -1,3 +1,4 @@
+import { FormError } from '../exact/form';
 import { functions } from '../functions/table';
 import type { FormulaForm, MultipletRow, Span, TheoryBlock } from '../language/tree';
 import { formLatex } from '../latex/form';
@@ -6,7 +7,8 @@ import { representationLatex } from '../latex/representation';
 import { symbolLatex } from '../latex/symbol';
 import type { Sphere } from '../spheres/sphere';
 import type { ReadRow } from '../theory/build';
-import type { TheoryGroup } from '../theory/theory';
+import type { Condition, Finding } from '../theory/checks/condition';
+import type { Theory, TheoryGroup } from '../theory/theory';
 import type { Analysis, TheoryEntry } from './analysis';
 import { FORMS, formulaView } from './formula';
 import { printableTheory } from './formula-request';
@@ -110,7 +112,7 @@ function checks(entry: TheoryEntry | undefined): Check[] {
   const theory = entry?.built?.theory;
   if (!theory || !entry?.sphere) return [];
   return entry.sphere.conditions.flatMap((condition) =>
-    condition.examine(theory, printer).map(({ verdict, says, formula, source, detail }) => ({
+    examine(condition, theory).map(({ verdict, says, formula, source, detail }) => ({
       id: detail === undefined ? condition.id : `${condition.id}:${detail}`,
       verdict,
       says,
@@ -118,6 +120,16 @@ function checks(entry: TheoryEntry | undefined): Check[] {
       source,
     })),
   );
+}
+
+/** A condition whose expressions are undefined at the present values is unknown, and says so. */
+function examine(condition: Condition, theory: Theory): readonly Finding[] {
+  try {
+    return condition.examine(theory, printer);
+  } catch (error) {
+    if (!(error instanceof FormError)) throw error;
+    return [{ verdict: 'unknown', says: `${condition.title}: ${error.message}`, formula: '', source: '' }];
+  }
 }
 
 /** All checks of a theory, for the batch output too. */

@@ -1,7 +1,7 @@
 import { Form } from '../exact/form';
 import type { Expression, GroupLine, GroupOption, MixedLine } from '../language/tree';
 import { type Group, parseGroup } from '../lie/group';
-import { problem, type Report, refused, unknownNames } from './report';
+import { problem, type Report, refused, unknownNames, valueAt } from './report';
 import type { SphereRules } from './rules';
 import type { MixedLevel, TheoryGroup } from './theory';
 
@@ -114,7 +114,8 @@ function readValue(
     for (const { name } of unknown) backgrounds.add(name);
     return expression.form;
   }
-  const value = expression.form.substitute((name) => parameters.get(name) ?? null);
+  const value = valueAt(expression, parameters, report);
+  if (value === null) return null;
   if (unknown.length > 0 || value.toRational() === null) {
     report(problem('level-number', expression.span, { text: expression.text }));
     return null;
@@ -159,7 +160,7 @@ export function buildMixed(
       }
     }
     const unknown = unknownNames(line.level, parameters);
-    const value = line.level.form.substitute((name) => parameters.get(name) ?? null).toRational();
+    const value = valueAt(line.level, parameters, report)?.toRational() ?? null;
     if (unknown.length > 0 || value === null)
       report(problem('level-number', line.level.span, { text: line.level.text }));
     const [i, j] = places as [number, number];

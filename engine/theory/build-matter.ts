@@ -1,7 +1,7 @@
 import type { Form } from '../exact/form';
 import type { MultipletRow, TheoryBlock } from '../language/tree';
 import { parseRepresentation, type Representation } from '../lie/representation';
-import { problem, type Report, refused } from './report';
+import { problem, type Report, refused, valueAt } from './report';
 import type { SphereRules } from './rules';
 import type { Multiplet, TheoryGroup } from './theory';
 
@@ -100,12 +100,11 @@ function readRCharge(
     report(problem('r-charge-name', name.span, { name: name.name, text: cell.text }));
   }
   if (unknown.length > 0) return null;
-  if (canonical.fixed) {
-    const value = expression.form.substitute((name) => parameters.get(name) ?? null);
-    if (!value.equals(canonical.value)) {
-      report(problem('r-charge-fixed', cell.span, { text: cell.text, value: canonical.value.key }));
-      return null;
-    }
+  const value = valueAt(expression, parameters, report);
+  if (value === null) return null;
+  if (canonical.fixed && !value.equals(canonical.value)) {
+    report(problem('r-charge-fixed', cell.span, { text: cell.text, value: canonical.value.key }));
+    return null;
   }
   return expression.form;
 }

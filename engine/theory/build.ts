@@ -4,7 +4,7 @@ import type { Diagnostic, MultipletRow, Name, SphereLine, TheoryBlock } from '..
 import type { Representation } from '../lie/representation';
 import { buildGroups, buildMixed } from './build-groups';
 import { buildMatter, type ReadRow } from './build-matter';
-import { problem, type Report, unknownNames } from './report';
+import { problem, type Report, unknownNames, valueAt } from './report';
 import type { SphereRules } from './rules';
 import type { SuperpotentialTerm, Theory, TheoryGroup } from './theory';
 
@@ -78,7 +78,8 @@ function buildGeometry(
       for (const name of unknown) report(problem('name-unknown', name.span, { name: name.name }));
       continue;
     }
-    const value = option.value.form.substitute((name) => parameters.get(name) ?? null);
+    const value = valueAt(option.value, parameters, report);
+    if (value === null) continue;
     const sign = signOf(value);
     if (sign !== 'positive') {
       report(problem(`squashing-${sign}`, option.value.span, { name: known.name, value: option.value.text }));

@@ -1,4 +1,4 @@
-import type { Form } from '../exact/form';
+import { type Form, FormError } from '../exact/form';
 import type { Diagnostic, Expression, Name, Severity, Span } from '../language/tree';
 import type { Refusal } from '../lie/refusal';
 
@@ -23,4 +23,19 @@ export function refused(refusal: Refusal, span: Span): Diagnostic {
 /** Names in an expression that no `let` gives a value. */
 export function unknownNames(expression: Expression, parameters: ReadonlyMap<string, Form>): readonly Name[] {
   return expression.names.filter(({ name }) => !parameters.has(name));
+}
+
+/** An expression at the parameters' values; null, and a report, where they leave it undefined (a division by zero). */
+export function valueAt(
+  { form, span, text }: Expression,
+  parameters: ReadonlyMap<string, Form>,
+  report: Report,
+): Form | null {
+  try {
+    return form.substitute((name) => parameters.get(name) ?? null);
+  } catch (error) {
+    if (!(error instanceof FormError)) throw error;
+    report(problem('value-undefined', span, { text }));
+    return null;
+  }
 }
