@@ -106,7 +106,7 @@ export function sinCosWorking(x: bigint, working: number): SinCos {
   const halfPi = piFixed(working + extra + 1) >> 2n;
   const wide = x << BigInt(extra);
   const close = Math.round(numberFromFixed(x, working) * (2 / Math.PI));
-  const quotient = Math.abs(close) < 2 ** 20 ? BigInt(close) : (2n * wide + halfPi) / (2n * halfPi);
+  const quotient = Math.abs(close) < 2 ** 20 ? BigInt(close) : floorDivide(2n * wide + halfPi, 2n * halfPi);
   const r = (wide - quotient * halfPi) >> BigInt(extra);
   const { cos, sin } = sinCosReduced(absolute(r), working);
   const signed = r < 0n ? -sin : sin;
@@ -120,6 +120,12 @@ export function sinCosWorking(x: bigint, working: number): SinCos {
     default:
       return { sin: -cos, cos: signed };
   }
+}
+
+/** Integer part of a quotient, towards minus infinity; BigInt division goes towards zero. */
+function floorDivide(a: bigint, b: bigint): bigint {
+  const quotient = a / b;
+  return a < 0n && quotient * b !== a ? quotient - 1n : quotient;
 }
 
 /** sin and cos for 0 <= r <= pi/4 (a little more is allowed): two table rotations and the series, then one more rotation. */
