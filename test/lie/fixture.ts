@@ -7,6 +7,7 @@ interface Fixture {
   irreps: IrrepRow[];
   tensor: TensorRow[];
   powers: PowerRow[];
+  consistency: ConsistencyRow[];
 }
 
 interface TypeRow {
@@ -60,6 +61,26 @@ export interface PowerRow extends TypeRow {
   power: number;
   result: [number[], number, number][];
 }
+
+/** Dynkin labels and how many multiplets carry them. */
+export type Counted = readonly [number[], number];
+
+export type ConsistencyRow =
+  | (TypeRow & { kind: '3d-parity'; chirals: Counted[]; sumI2: number; level: 'Z' | 'Z+1/2' })
+  | (TypeRow & { kind: '4d-N2'; hypers: Counted[]; halfHypers: Counted[]; b: number; wittenAnomaly: boolean })
+  | (TypeRow & { kind: '4d-N1'; chirals: Counted[]; b: number; cubic?: number })
+  | (TypeRow & { kind: '5d-level'; hypers: Counted[]; kappaTimes2: number; sumCubic: number; allowed: boolean })
+  | {
+      kind: '3d-parity-U';
+      N: number;
+      kTimes2: number;
+      kPrimeTimes2: number;
+      fund: number;
+      antifund: number;
+      detCharges: [number, number][];
+      allowed: boolean;
+    }
+  | { kind: '2d-FI'; N: number; chirals: [number[], number, number][]; coefficient: number; calabiYau: boolean };
 
 export const fixture: Fixture = JSON.parse(readFileSync(new URL('../fixtures/lie/lie.json', import.meta.url), 'utf8'));
 
