@@ -21,7 +21,7 @@ const SINGLE_MODE = '@mode';
 /** The towers a written tower consists of, finite ranges beside endless ones written out; or why it has none. */
 export function analyseTower(written: WrittenTower, place: number): Tower[] | Remark {
   const exponent = written.exponent.toRational();
-  if (exponent === null) return remark('tower-exponent', place, 'row', { exponent: written.exponent.key });
+  if (exponent === null) return remark('tower-power', place, 'row', { exponent: written.exponent.key });
   const ranges = readRanges(written, place);
   if (!('ranges' in ranges)) return ranges;
   const endless = ranges.ranges.filter(({ last }) => last === null);

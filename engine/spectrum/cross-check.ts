@@ -40,7 +40,7 @@ export function checkValue(
       tower.indices.length > 1 ? severalCheck(tower, prescription, working) : singleCheck(tower, prescription, working);
     if (isFailed(found)) return found;
     const exponent = estimateOf(Form.number(tower.exponent), working);
-    if (exponent === null) return 'value-undefined';
+    if (exponent === null) return 'spectrum-undefined';
     parts.push(scaleEstimate(found.estimate, exponent, working));
     routes.add(found.route);
   }
@@ -90,7 +90,7 @@ function byRoots(
   const parts: Estimate[] = [];
   for (const factor of tower.factors) {
     const shifts = polynomialRoots(factorPolynomial(factor), bits);
-    if (shifts === null) return 'value-undefined';
+    if (shifts === null) return 'spectrum-undefined';
     for (const shift of shifts) {
       const multiplicity = scalePolynomial(degeneracy, factor.power);
       const value = linearSum(shift, multiplicity, { from: 0, to: tower.last }, bits, FURTHER);
@@ -101,7 +101,7 @@ function byRoots(
   if (prescription === 'operator') {
     const bare = { ...tower, exponent: Rational.one, factors: tower.factors.map((f) => ({ ...f, scale: [] })) };
     const anomaly = estimateOf(exactNumbers([bare], 'operator')?.anomaly ?? Form.zero, bits);
-    if (anomaly === null) return 'value-undefined';
+    if (anomaly === null) return 'spectrum-undefined';
     parts.push(anomaly);
   }
   return withScales(tower, degeneracy, prescription, parts, bits, 'roots');
@@ -129,14 +129,14 @@ function withScales(
     for (const { base, weight } of factor.scale) constants.push(logarithmOf(base).mul(count).scale(weight));
   }
   const constant = estimateOf(Form.sum(constants), bits);
-  return constant === null ? 'value-undefined' : { route, estimate: sumOf([...parts, constant]) };
+  return constant === null ? 'spectrum-undefined' : { route, estimate: sumOf([...parts, constant]) };
 }
 
 function severalCheck(tower: Tower, prescription: Prescription, bits: number): CheckValue | SumFailure {
   const parts: Estimate[] = [];
   const constants: Form[] = [];
   for (const factor of tower.factors) {
-    if (factor.kind !== 'linear') return 'value-undefined';
+    if (factor.kind !== 'linear') return 'spectrum-undefined';
     for (const { shift, periods, multiplicity } of barnesTerms(tower, factor)) {
       const value = severalSum(shift, periods, multiplicity.scale(factor.power), bits, FURTHER);
       if (isFailure(value)) return value;
@@ -146,7 +146,7 @@ function severalCheck(tower: Tower, prescription: Prescription, bits: number): C
     }
   }
   const constant = estimateOf(Form.sum(constants), bits);
-  if (constant === null) return 'value-undefined';
+  if (constant === null) return 'spectrum-undefined';
   parts.push(constant);
   const numbers = exactNumbers([{ ...tower, exponent: Rational.one }], prescription);
   const anomaly = prescription === 'operator' ? estimateOf(numbers?.anomaly ?? Form.zero, bits) : null;

@@ -30,7 +30,7 @@ export function factorValue(pairing: Pairing, bits: number): Estimate | SumFailu
   for (const { base, exponent } of pairing.constants) {
     const logarithm = estimateOf(logarithmOf(base), bits + 32);
     const factor = estimateOf(exponent, bits + 32);
-    if (logarithm === null || factor === null) return 'value-undefined';
+    if (logarithm === null || factor === null) return 'spectrum-undefined';
     parts.push(fewerBits(scaleEstimate(logarithm, factor, bits + 32), 32));
   }
   return sumOf(parts);

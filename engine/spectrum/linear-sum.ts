@@ -24,7 +24,7 @@ export const MAXIMAL_STEPS = 100_000;
 const SUMMED_RUN = 2048;
 
 /** Why a sum has no value: a form without one (division by zero), or too many terms. */
-export type SumFailure = 'value-undefined' | 'value-too-far';
+export type SumFailure = 'spectrum-undefined' | 'spectrum-too-far';
 
 export function isFailure(value: Estimate | SumFailure): value is SumFailure {
   return typeof value === 'string';
@@ -52,18 +52,18 @@ export function linearSum(
   const rough = formFixed(a, 64);
   const expansion = shiftPolynomial(multiplicity, a.neg());
   const roughExpansion = fixedCoefficients(expansion, 64);
-  if (rough === null || roughExpansion === null) return 'value-undefined';
+  if (rough === null || roughExpansion === null) return 'spectrum-undefined';
   const start = { re: numberFromFixed(rough.re, 64) + run.from, im: numberFromFixed(rough.im, 64) };
   const steps =
     run.to === null ? stepsToFarPoint(start, multiplicity.length, bits + 64) + offset : run.to - run.from + 1;
-  if (steps > MAXIMAL_STEPS) return 'value-too-far';
+  if (steps > MAXIMAL_STEPS) return 'spectrum-too-far';
   const size = Math.hypot(start.re + steps, start.im) + Math.abs(start.re) + 2;
   const terms = roughExpansion.map((c, k) => numberFromFixed(absoluteComplex(c) + 1n, 64) * size ** (k + 1));
   const guard = 20 + Math.ceil(Math.log2(1 + terms.reduce((sum, t) => sum + t, 0) * (Math.log(size) + 2)));
   const working = bits + guard;
   const shift = formFixed(a, working);
   const factor = fixedMultiplicity(multiplicity, working, Math.abs(run.from) + steps);
-  if (shift === null || factor === null) return 'value-undefined';
+  if (shift === null || factor === null) return 'spectrum-undefined';
   let sum = zeroComplex;
   let error = 0;
   for (let j = 0; j < steps; j++) {
@@ -78,7 +78,7 @@ export function linearSum(
   if (run.to !== null) return rounded(sum, error, guard);
   const at = { re: shift.re + (BigInt(run.from + steps) << BigInt(working)), im: shift.im };
   const tail = endlessTail(expansion, at, working);
-  if (tail === null) return 'value-undefined';
+  if (tail === null) return 'spectrum-undefined';
   return rounded(subtractComplex(sum, tail.value), error + tail.error, guard);
 }
 

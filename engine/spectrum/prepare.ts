@@ -62,5 +62,5 @@ export function prepare(written: readonly WrittenTower[]): Prepared | Remark {
 export function withAllValues(spectrum: Spectrum, values: Values): WrittenTower[] | Remark {
   const written = substituteTowers(spectrum, values, true);
   const open = openNames(written);
-  return open.length === 0 ? written : remark('names-unset', null, 'row', { names: open.join(', ') });
+  return open.length === 0 ? written : remark('spectrum-names-unset', null, 'row', { names: open.join(', ') });
 }

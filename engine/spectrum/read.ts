@@ -1,6 +1,7 @@
 import { Form } from '../exact/form';
 import type { Diagnostic, Expression, IndexRange, SpectrumBlock, TowerKind, TowerRow } from '../language/tree';
 import { analyseTower, isRemark } from './analyse';
+import { guarded } from './guard';
 import { inspect } from './inspect';
 import { type RefusalCode, type Remark, remark, type Spectrum, type WrittenRange, type WrittenTower } from './tower';
 
@@ -25,9 +26,9 @@ export function readSpectrum(
   parameters: ReadonlyMap<string, Form>,
 ): { readonly spectrum: Spectrum; readonly diagnostics: readonly Diagnostic[] } {
   const written = block.towers.map((row) => readTower(row, block.indices, parameters));
-  const remarks: Remark[] = written.flatMap((tower, place) => repeatedRange(tower, place));
+  const remarks: Remark[] = [];
   const sound = written.filter((tower, place) => {
-    const found = analyseTower(tower, place);
+    const found = guarded(() => analyseTower(tower, place), place);
     if (!isRemark(found)) return true;
     remarks.push(found);
     return false;
@@ -37,7 +38,8 @@ export function readSpectrum(
   if (block.towers.length === 0) {
     diagnostics.push(diagnosticOf(remark('spectrum-empty', null, 'row'), written, block));
   }
-  const further = inspect(spectrum).map((found) => diagnosticOf(found, sound, block));
+  const inspected = guarded(() => inspect(spectrum), null);
+  const further = (isRemark(inspected) ? [inspected] : inspected).map((found) => diagnosticOf(found, sound, block));
   return { spectrum, diagnostics: [...diagnostics, ...further] };
 }
 
@@ -73,12 +75,6 @@ function readRange({ name, from, to, span }: IndexRange, parameters: ReadonlyMap
   const value = (form: Form): Form => form.substitute((symbol) => parameters.get(symbol) ?? null);
   if (to === null) return { name: name.name, from: from.form, to: null, span };
   return { name: name.name, from: value(from.form), to: value(to.form), span };
-}
-
-function repeatedRange(tower: WrittenTower, place: number): Remark[] {
-  return tower.ranges
-    .filter(({ name }, k) => tower.ranges.findIndex((other) => other.name === name) < k)
-    .map(({ name, span }) => remark('tower-range-twice', place, 'row', { index: name }, span));
 }
 
 const WARNINGS: ReadonlySet<string> = new Set([

@@ -6,6 +6,7 @@ import { isRemark } from './analyse';
 import { type CheckRoute, checkValue } from './cross-check';
 import { type ExactNumbers, exactNumbers } from './exact-numbers';
 import { factorValue } from './factor-value';
+import { guarded } from './guard';
 import { inspectTowers } from './inspect';
 import { isFailure } from './linear-sum';
 import type { ModeClass } from './pairing';
@@ -48,7 +49,19 @@ export function determinant(
   values: Values,
   digits: number,
 ): SpectrumValue | SpectrumRefusal {
-  if (digits > MAXIMAL_DIGITS) return refuse(remark('value-digits', null, 'row', { limit: `${MAXIMAL_DIGITS}` }));
+  if (digits < 1 || digits > MAXIMAL_DIGITS) {
+    return refuse(remark('spectrum-digits', null, 'row', { limit: `${MAXIMAL_DIGITS}` }));
+  }
+  const found = guarded(() => defined(spectrum, prescription, values, digits), null);
+  return isRemark(found) ? refuse(found) : found;
+}
+
+function defined(
+  spectrum: Spectrum,
+  prescription: Prescription,
+  values: Values,
+  digits: number,
+): SpectrumValue | SpectrumRefusal {
   const written = withAllValues(spectrum, values);
   if (isRemark(written)) return refuse(written);
   const prepared = prepare(written);
@@ -77,7 +90,7 @@ function zeroRefusal({ pairing }: Prepared): Remark | null {
   const data = { order: `${Math.abs(total)}` };
   if (total > 0) return remark('determinant-zero', first.place, 'eigenvalue', data);
   if (total < 0) return remark('determinant-infinite', first.place, 'eigenvalue', data);
-  return remark('value-undefined', first.place, 'eigenvalue');
+  return remark('spectrum-undefined', first.place, 'eigenvalue');
 }
 
 function evaluate(
@@ -92,12 +105,12 @@ function evaluate(
   const factors = factorValue(prepared.pairing, bits);
   if (isFailure(factors)) return failed(factors);
   const anomaly = prescription === 'operator' ? estimateOf(exact.anomaly, bits) : null;
-  if (prescription === 'operator' && anomaly === null) return failed('value-undefined');
+  if (prescription === 'operator' && anomaly === null) return failed('spectrum-undefined');
   const log = anomaly === null ? factors : sumOf([factors, anomaly]);
   const zeta0 = estimateOf(exact.zeta0, bits);
   const scale = estimateOf(exact.scale, bits);
   const difference = estimateOf(exact.anomaly, bits);
-  if (zeta0 === null || scale === null || difference === null) return failed('value-undefined');
+  if (zeta0 === null || scale === null || difference === null) return failed('spectrum-undefined');
   const check = checkValue(prepared.towers, prescription, bits);
   const modulus = remarks.some(({ code }) => code === 'square-root-sign');
   const shown = modulus ? { value: { re: log.value.re, im: 0n }, error: log.error } : log;

@@ -27,15 +27,15 @@ export function severalSum(
 ): Estimate | SumFailure {
   const working = bits + GUARD;
   const rough = periods.map((w) => formFixed(w, 64));
-  if (rough.some((w) => w === null)) return 'value-undefined';
+  if (rough.some((w) => w === null)) return 'spectrum-undefined';
   if (rough.every((w) => w !== null && w.re < 0n)) return turned(shift, periods, multiplicity, bits, further);
   const x = formFixed(shift, working);
   const w = periods.map((p) => formFixed(p, working));
   const factor = estimateOf(multiplicity, working);
-  if (x === null || factor === null || !w.every((p) => p !== null)) return 'value-undefined';
+  if (x === null || factor === null || !w.every((p) => p !== null)) return 'spectrum-undefined';
   const first = logBarnesGamma(x, w, working, further);
   const second = logBarnesGamma(x, w, working, further + FURTHER_STEPS);
-  if (first === null || second === null) return 'value-too-far';
+  if (first === null || second === null) return 'spectrum-too-far';
   const gap = sizeOf(difference(first.value, second.value));
   const value = { value: negative(second.value), error: first.error + second.error + gap };
   const total = scaleEstimate(value, factor, working);
@@ -53,7 +53,7 @@ function turned(
   const mirrored = periods.map((w) => w.neg());
   const rest = severalSum(shift.neg(), mirrored, multiplicity, bits, further);
   const phase = estimateOf(Form.pi.mul(Form.i).mul(multiplicity).mul(barnesZetaAtZero(shift.neg(), mirrored)), bits);
-  if (typeof rest === 'string' || phase === null) return typeof rest === 'string' ? rest : 'value-undefined';
+  if (typeof rest === 'string' || phase === null) return typeof rest === 'string' ? rest : 'spectrum-undefined';
   return sumOf([rest, phase]);
 }
 

@@ -113,9 +113,8 @@ export type RefusalCode =
   | 'tower-range-bound'
   | 'tower-range-order'
   | 'tower-range-length'
-  | 'tower-range-twice'
-  | 'tower-exponent'
-  | 'tower-too-large'
+  | 'tower-power'
+  | 'spectrum-too-large'
   | 'degeneracy-not-polynomial'
   | 'degeneracy-degree'
   | 'degeneracy-infinite'
@@ -125,10 +124,10 @@ export type RefusalCode =
   | 'spectrum-empty'
   | 'determinant-zero'
   | 'determinant-infinite'
-  | 'names-unset'
-  | 'value-undefined'
-  | 'value-too-far'
-  | 'value-digits';
+  | 'spectrum-names-unset'
+  | 'spectrum-undefined'
+  | 'spectrum-too-far'
+  | 'spectrum-digits';
 
 export type WarningCode =
   | 'zero-mode'
