@@ -1,3 +1,4 @@
+import { formDouble } from '../../arithmetic/form-double';
 import type { Form } from '../../exact/form';
 import { Rational } from '../../exact/rational';
 import { dimension } from '../../lie/invariants';
@@ -84,4 +85,10 @@ export function indexSum(theory: Theory, group: number, part: number): Rational 
 /** The exact value of a level at the parameters' values; zero where none is given. */
 export function levelValue(theory: Theory, level: Form | null): Rational {
   return level?.substitute((name) => theory.parameters.get(name) ?? null).toRational() ?? Rational.zero;
+}
+
+/** An R-charge at the parameters' values: exact where it is rational, else in doubles; its real part where it is complex. */
+export function rChargeValue(theory: Theory, form: Form): Rational | number {
+  const value = form.substitute((name) => theory.parameters.get(name) ?? null);
+  return value.toGaussian()?.re ?? formDouble(value, () => null)?.re ?? Number.NaN;
 }

@@ -38,6 +38,23 @@ interface Piece {
  * more than two copies transform under several non-abelian groups, that is not done, and a yes stays open.
  */
 export function containsSinglet(groups: readonly Group[], fields: readonly MonomialField[]): SingletAnswer {
+  const names = fields.map(
+    ({ representations, power, withDual }) =>
+      `${power}${withDual ? '+' : ''} ${representations.map(({ key }) => key).join(' | ')}`,
+  );
+  const key = `${groups.map(({ name }) => name).join()}: ${names.join(' ; ')}`;
+  const known = singlets.get(key);
+  if (known) return known;
+  const found = findSinglets(groups, fields);
+  if (singlets.size >= ANSWERS_KEPT) singlets.clear();
+  singlets.set(key, found);
+  return found;
+}
+
+// Pure memoisation, by groups and fields.
+const singlets = new Map<string, SingletAnswer>();
+
+function findSinglets(groups: readonly Group[], fields: readonly MonomialField[]): SingletAnswer {
   if (fields.some(({ power }) => power > POWER_LIMIT)) return { answer: 'too large', missing: [] };
   const choices = fields.map((field) => piecesOf(groups, field));
   if (choices.includes(null)) return { answer: 'too large', missing: [] };

@@ -42,3 +42,11 @@ export function listWords(words: readonly string[], last = 'and'): string {
 }
 
 export const half = Rational.of(1, 2);
+
+/** A number given as an integer multiple of 1/scale, or as a double. */
+export function scaledLatex(
+  value: number,
+  { exact, scale }: { readonly exact: boolean; readonly scale: number },
+): string {
+  return exact && Number.isSafeInteger(value) ? rationalLatex(Rational.of(value, scale)) : decimal(value / scale);
+}

@@ -1,0 +1,112 @@
+import { Rational } from '../../exact/rational';
+import type { Printer } from '../../functions/special-function';
+import type { Theory } from '../theory';
+import type { Condition, Finding } from './condition';
+import { coulombBranch } from './coulomb-branch';
+import { fluxLatex } from './direction';
+import { growthOf } from './growth';
+import { compareR, fieldsOf, HALF, type Operator, operatorsOf } from './operators';
+import { decimal, listWords, rationalLatex } from './words';
+
+/** Charged chirals with 0 < R < 2: no pole of the integrand crosses the real Coulomb parameters. */
+export const contour: Condition = {
+  id: 'contour',
+  title: 'R-charges and the contour',
+  examine: (theory, print) => {
+    const charged = fieldsOf(theory, print).filter((field) => !field.representations.every((one) => one.isTrivial));
+    if (charged.length === 0) return [];
+    const outside = charged.filter(
+      ({ rCharge }) => !(compareR(rCharge, Rational.zero) > 0 && compareR(rCharge, Rational.of(2)) < 0),
+    );
+    const common = {
+      formula: '0<R<2',
+      source: 'D. L. Jafferis, arXiv:1012.3210 (2010); B. Willett, I. Yaakov, arXiv:1104.0487 (2011)',
+    };
+    if (outside.length === 0) {
+      const says = 'All charged chirals have $0<R<2$: no pole lies on the wrong side of the real contour.';
+      return [{ ...common, verdict: 'holds', says }];
+    }
+    const words = outside.map(({ latex, rCharge }) => `$R(${latex})=${rLatex(rCharge)}$`);
+    const says =
+      `${listWords(words)} ${outside.length === 1 ? 'lies' : 'lie'} outside $0<R<2$: poles cross the real contour, and the ` +
+      'integral has to be continued in $R$.';
+    return [{ ...common, verdict: 'fails', says }];
+  },
+};
+
+/**
+ * The unitarity bound on gauge-invariant chiral operators: 1/2, where they are free. It is a statement about the
+ * R-charge at the superconformal point; below the bound an operator decouples and the R-symmetry mixes with a new one.
+ */
+export const unitarity: Condition = {
+  id: 'unitarity',
+  title: 'Unitarity bound of chiral operators',
+  examine: (theory, print) => {
+    if (theory.supersymmetry === 4) return [];
+    const { bare, searched } = bareMonopole(theory, print);
+    const operators = [...operatorsOf(theory, print), ...bare].filter(({ fTerm }) => fTerm !== 'vanishes');
+    const low = operators.filter(({ rCharge }) => !(compareR(rCharge, HALF) > 0));
+    if (low.length > 0) return low.map(lowFinding);
+    const [first, ...others] = operators;
+    if (first === undefined) return [];
+    const least = others.reduce((best, one) => (number(one.rCharge) < number(best.rCharge) ? one : best), first);
+    return [
+      {
+        verdict: 'holds',
+        says:
+          `All gauge-invariant chiral operators found have $R>\\frac{1}{2}$, the smallest $R(${least.latex})=` +
+          `${rLatex(least.rCharge)}$; searched: fields, products of two and three, traces, baryons${searched}.`,
+        ...GROUNDS,
+      },
+    ];
+  },
+};
+
+const GROUNDS = {
+  formula: 'R(\\mathcal{O})\\geq\\tfrac{1}{2}',
+  source:
+    'D. L. Jafferis, I. R. Klebanov, S. S. Pufu, B. R. Safdi, arXiv:1103.1181 (2011); S. Safdi, I. Klebanov, J. Lee, ' +
+    'arXiv:1212.4502 (2012)',
+};
+
+function lowFinding({ latex, rCharge, fTerm }: Operator): Finding {
+  const below = compareR(rCharge, HALF) < 0;
+  const lead = `The chiral operator $${latex}$ has $R=${rLatex(rCharge)}$`;
+  if (!below && Number.isFinite(number(rCharge))) {
+    return { detail: latex, verdict: 'holds', says: `${lead}, the bound itself: it is free.`, ...GROUNDS };
+  }
+  const words =
+    fTerm === 'related'
+      ? `${lead}, below $\\frac{1}{2}$; the superpotential relates it to others, which was not worked out.`
+      : `${lead}, below $\\frac{1}{2}$: at a superconformal point with these R-charges it would decouple.`;
+  return { detail: latex, verdict: below && fTerm === 'none' ? 'fails' : 'unknown', says: words, ...GROUNDS };
+}
+
+/** The lightest bare monopole operator that is gauge-invariant: no effective level along its flux. */
+function bareMonopole(
+  theory: Theory,
+  print: Printer,
+): { readonly bare: readonly Operator[]; readonly searched: string } {
+  if (!theory.groups.some(({ role }) => role === 'gauge')) return { bare: [], searched: '' };
+  const branch = coulombBranch(theory);
+  if (branch === null) return { bare: [], searched: ', no monopole operators' };
+  const growth = growthOf(theory, branch);
+  const neutral = branch.rays
+    .filter(({ point, sums }) => growth.phase(point, sums).every((entry) => entry === 0))
+    .map(({ point, sums }) => ({ point, value: growth.monopole(point, sums) }))
+    .sort((a, b) => a.value - b.value);
+  const [lightest] = neutral;
+  const searched = ', bare monopole operators along the rays of the Coulomb branch';
+  if (lightest === undefined) return { bare: [], searched };
+  const latex = `V_{${fluxLatex(theory, branch, lightest.point, print)}}`;
+  const rCharge = growth.exactMonopoles ? Rational.of(lightest.value, growth.scale) : lightest.value / growth.scale;
+  return { bare: [{ latex, fields: [], rCharge, fTerm: 'none' }], searched };
+}
+
+function rLatex(value: Rational | number): string {
+  return typeof value === 'number' ? decimal(value) : rationalLatex(value);
+}
+
+function number(value: Rational | number): number {
+  return typeof value === 'number' ? value : value.toNumber();
+}
