@@ -272,11 +272,9 @@ function multiplyTerms(a: Term, b: Term): readonly Term[] {
     powers.set(atom.key, { atom, power: power + (powers.get(atom.key)?.power ?? 0) });
   }
   const merged = [...powers.values()].filter(({ power }) => power !== 0);
+  merged.sort((x, y) => (x.atom.key < y.atom.key ? -1 : 1));
   const reducible = merged.find(({ atom, power }) => isRoot(atom) && (power < 0 || power > 1));
-  if (!reducible) {
-    merged.sort((x, y) => (x.atom.key < y.atom.key ? -1 : 1));
-    return [{ coefficient, factors: merged }];
-  }
+  if (!reducible) return [{ coefficient, factors: merged }];
   const rest: Term = { coefficient, factors: merged.filter((f) => f !== reducible) };
   const reduced = powerOfAtom(reducible.atom, reducible.power);
   return reduced.terms.flatMap((term) => multiplyTerms(rest, term));

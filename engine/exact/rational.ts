@@ -115,18 +115,26 @@ export class Rational {
     return this.numerator < 0n ? -1 : this.numerator > 0n ? 1 : 0;
   }
 
-  /** Nearest double up to two units in the last place; safe for numerators and denominators beyond 2^1024. */
+  /** Nearest double up to two units in the last place, whatever the size of numerator and denominator. */
   toNumber(): number {
     const n = Number(this.numerator);
     const d = Number(this.denominator);
     if (Number.isFinite(n) && Number.isFinite(d)) return n / d;
-    const excess = BigInt(Math.max(this.numerator.toString(2).length, this.denominator.toString(2).length) - 1000);
-    return Number(this.numerator >> excess) / Number(this.denominator >> excess);
+    // A quotient of 64 or 65 bits, and its power of two in two steps: one alone may leave the doubles.
+    const shift = 64 + bitsOf(this.denominator) - bitsOf(this.numerator);
+    const [up, down] = shift >= 0 ? [BigInt(shift), 0n] : [0n, BigInt(-shift)];
+    const quotient = Number((this.numerator << up) / (this.denominator << down));
+    const half = Math.trunc(shift / 2);
+    return quotient * 2 ** -half * 2 ** (half - shift);
   }
 
   toString(): string {
     return this.denominator === 1n ? `${this.numerator}` : `${this.numerator}/${this.denominator}`;
   }
+}
+
+function bitsOf(value: bigint): number {
+  return (value < 0n ? -value : value).toString(2).length;
 }
 
 /** Greatest common divisor of two non-negative integers. */
