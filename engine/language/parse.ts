@@ -1,5 +1,5 @@
 import { hintAt } from './hints';
-import { parser } from './notebook.parser.gen';
+import { notebookLanguageParser } from './notebook-language-parser';
 import { readLet } from './read-let';
 import { readRequest } from './read-request';
 import { readSpectrum } from './read-spectrum';
@@ -24,7 +24,7 @@ export function parseNotebook(text: string): Notebook {
     if (proseFrom !== null) blocks.push(proseBlock(proseFrom, proseTo, text));
     proseFrom = null;
   };
-  for (const piece of piecesOf(parser.parse(text), text)) {
+  for (const piece of piecesOf(notebookLanguageParser.parse(text), text)) {
     if (piece.kind === 'work') {
       endProse();
       const block = readWork(piece, reading);

@@ -11,6 +11,7 @@ import { SPECTRUM_LINE_WORDS } from './words';
 
 /** A spectrum with its indices and towers. Lines that cannot be read are reported and left out. */
 export function readSpectrum(piece: WorkPiece, reading: Reading): SpectrumBlock | null {
+  const { mark } = reading;
   const [first = [], ...rest] = piece.lines;
   const head = new TokenReader(first, piece.wordSpan, reading);
   const name = head.name('name-missing', 'the name of the spectrum');
@@ -32,9 +33,15 @@ export function readSpectrum(piece: WorkPiece, reading: Reading): SpectrumBlock 
       if (tower) towers.push(tower);
     }
   }
-  return (
-    name && { kind: 'spectrum', span: { from: piece.from, to: piece.to }, name, indices: [...indices.values()], towers }
-  );
+  if (!name) return null;
+  return {
+    kind: 'spectrum',
+    span: { from: piece.from, to: piece.to },
+    name,
+    indices: [...indices.values()],
+    towers,
+    sound: reading.soundSince(mark),
+  };
 }
 
 function readIndex(reader: TokenReader): IndexRange | null {

@@ -1,4 +1,4 @@
-import { checkTable } from './check-table';
+import { listed } from './names';
 import { nearest } from './near-words';
 import { readGroupLine } from './read-group-line';
 import { readHeader, readMultiplet } from './read-matter';
@@ -16,6 +16,7 @@ import { GROUP_OPTIONS, THEORY_LINE_WORDS, type TheoryLineWord } from './words';
  * out as a whole.
  */
 export function readTheory(piece: WorkPiece, reading: Reading): TheoryBlock | null {
+  const { mark } = reading;
   const [first = [], ...rest] = piece.lines;
   const head = new TokenReader(first, piece.wordSpan, reading);
   const name = head.name('name-missing', 'the name of the theory');
@@ -28,22 +29,29 @@ export function readTheory(piece: WorkPiece, reading: Reading): TheoryBlock | nu
     header: null,
     multiplets: new Map(),
     superpotential: [],
-    incomplete: false,
   };
   for (const line of rest) readTheoryLine(line, draft, reading);
   if (!name) return null;
   const anySphere = rest.some((line) => line[0]?.text === 'sphere');
   if (!anySphere) reading.report('sphere-missing', name.span, { theory: name.name });
-  checkTable(draft, reading);
-  const { incomplete: _, groups, multiplets, ...lines } = draft;
+  reportNeutralGroups(draft, reading);
   return {
     kind: 'theory',
     span: { from: piece.from, to: piece.to },
     name,
-    ...lines,
-    groups: [...groups.values()],
-    multiplets: [...multiplets.values()],
+    ...draft,
+    groups: [...draft.groups.values()],
+    multiplets: [...draft.multiplets.values()],
+    sound: reading.soundSince(mark),
   };
+}
+
+/** A group no column speaks of leaves every multiplet neutral, which is seldom meant. */
+function reportNeutralGroups({ header, multiplets, groups }: TheoryDraft, reading: Reading): void {
+  if (!header || multiplets.size === 0) return;
+  const columns = new Set(header.columns.map((column) => column.name));
+  const missing = [...groups.keys()].filter((name) => !columns.has(name));
+  if (missing.length > 0) reading.report('column-missing', header.span, { names: listed(missing) }, 'warning');
 }
 
 function readTheoryLine(line: Line, draft: TheoryDraft, reading: Reading): void {
@@ -55,13 +63,12 @@ function readTheoryLine(line: Line, draft: TheoryDraft, reading: Reading): void 
     READERS[word](new TokenReader(line.slice(1), first, reading, stops), draft, first);
     return;
   }
-  draft.incomplete = true;
-  if (first.kind === 'junk') reading.report('unexpected-character', first, { character: first.text });
-  else
-    reading.report('theory-line-unknown', first, {
-      word: first.text,
-      meant: nearest(first.text, THEORY_LINE_WORDS) ?? '',
-    });
+  if (first.kind === 'junk') {
+    reading.report('unexpected-character', first, { character: first.text });
+  } else {
+    const meant = nearest(first.text, THEORY_LINE_WORDS) ?? '';
+    reading.report('theory-line-unknown', first, { word: first.text, meant });
+  }
 }
 
 const OPTION_WORDS: ReadonlySet<string> = new Set(GROUP_OPTIONS);
@@ -70,16 +77,19 @@ type LineReader = (reader: TokenReader, draft: TheoryDraft, word: Token) => void
 
 const readGroup: LineReader = (reader, draft, word) => {
   const group = readGroupLine(reader, word);
-  if (!group) draft.incomplete = true;
-  else if (draft.groups.has(group.name.name)) {
+  if (!group) return;
+  if (draft.groups.has(group.name.name)) {
     reader.report('group-twice', group.name.span, { name: group.name.name });
   } else draft.groups.set(group.name.name, group);
 };
 
 const readRow: LineReader = (reader, draft, word) => {
   const row = readMultiplet(reader, word, word.text as MultipletKind, draft.header);
-  if (!row) draft.incomplete = true;
-  else if (draft.multiplets.has(row.name.name)) {
+  if (!row) return;
+  if (!draft.header && draft.multiplets.size === 0) {
+    reader.report('matter-missing', row.span, { name: row.name.name });
+  }
+  if (draft.multiplets.has(row.name.name)) {
     reader.report('multiplet-twice', row.name.span, { name: row.name.name });
   } else draft.multiplets.set(row.name.name, row);
 };

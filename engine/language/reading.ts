@@ -26,6 +26,15 @@ export class Reading {
     return null;
   }
 
+  /** How many problems there are so far; `soundSince` asks about those that come after. */
+  get mark(): number {
+    return this.diagnostics.length;
+  }
+
+  soundSince(mark: number): boolean {
+    return !this.diagnostics.slice(mark).some(({ severity }) => severity === 'error');
+  }
+
   /** A reading of the same text whose problems may not count. */
   aside(): Reading {
     return new Reading(this.text, this.forms);

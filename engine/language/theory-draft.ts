@@ -9,6 +9,4 @@ export interface TheoryDraft {
   header: MatterHeader | null;
   readonly multiplets: Map<string, MultipletRow>;
   readonly superpotential: Monomial[];
-  /** Whether a `gauge`, `flavor` or multiplet line could not be read; its name is then not known. */
-  incomplete: boolean;
 }

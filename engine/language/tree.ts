@@ -75,6 +75,8 @@ export interface TheoryBlock {
   readonly header: MatterHeader | null;
   readonly multiplets: readonly MultipletRow[];
   readonly superpotential: readonly Monomial[];
+  /** False when something in it could not be read, which is then a diagnostic: the block lacks what was there. */
+  readonly sound: boolean;
 }
 
 export interface SphereLine {
@@ -136,6 +138,8 @@ export interface SpectrumBlock {
   readonly name: Name;
   readonly indices: readonly IndexRange[];
   readonly towers: readonly TowerRow[];
+  /** False when something in it could not be read, which is then a diagnostic: the block lacks what was there. */
+  readonly sound: boolean;
 }
 
 /** `n >= 0`, or `n = 1 .. 5`. */

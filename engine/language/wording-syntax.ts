@@ -81,7 +81,6 @@ const theories = {
   'group-rank': (d) =>
     `\`${d.group}(...)\` needs a whole number, as in \`${d.group}(2)\`${d.word ? `; found \`${d.word}\`` : ''}.`,
   'group-twice': (d) => `The group \`${d.name}\` is already there; give this one another name.`,
-  'group-unknown': (d) => `No group is called \`${d.name}\`; there are: ${d.allowed || 'none'}.`,
   'option-missing': () => `An option is missing after the comma: one of ${quoted(GROUP_OPTIONS)}.`,
   'option-unknown': (d) =>
     `\`${d.word}\` is no option of a group.${meant(d.meant)} Known are ${quoted(GROUP_OPTIONS)}.`,
@@ -94,10 +93,8 @@ const theories = {
     `No \`matter\` line stands before \`${d.name}\`: it names the columns of the table, as in \`matter  G  F  R\`.`,
   'column-name': (d) => `\`${d.word}\` is no column: columns are names of groups, and \`R\`.`,
   'column-twice': (d) => `The column \`${d.name}\` stands twice; delete one of them.`,
-  'column-unknown': (d) =>
-    `No group is called \`${d.name}\`; columns are the groups of the theory (${d.allowed || 'none'}) and \`R\`.`,
   'column-missing': (d) =>
-    `The table has no column for ${d.names}; add one to the \`matter\` line, and a cell to each row.`,
+    `The table has no column for ${d.names}, so that every multiplet is neutral there. Add one to the \`matter\` line, and a cell to each row.`,
   'multiplet-name': (d) => `\`${d.word}\` is no name for a multiplet: a letter, then letters, digits, \`_\` or \`'\`.`,
   'multiplet-name-missing': (d) => `The name of the multiplet is missing after \`${d.word}\`.`,
   'multiplet-name-taken': (d) => `No multiplet can be called \`${d.name}\`: \`${d.name} of ...\` means something else.`,
@@ -113,7 +110,6 @@ const theories = {
   'monomial-missing': (d) => `A product of fields is missing${d.word ? ` at \`${d.word}\`` : ''}.`,
   'field-missing': () => 'The name of a multiplet is missing here.',
   'field-power': () => 'The power of a field is a whole number from 1 to 999.',
-  'field-unknown': (d) => `No multiplet is called \`${d.name}\`; there are: ${d.allowed || 'none'}.`,
 } satisfies Record<string, Wording>;
 
 const spectra = {

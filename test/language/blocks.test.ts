@@ -100,6 +100,15 @@ describe('blocks', () => {
     expect(diagnostics.map(({ code }) => code)).toEqual(['expression-expected', 'quantity-missing', 'name-missing']);
   });
 
+  test('a theory or a spectrum with bad lines is kept without them, and says so', () => {
+    const text = 'theory A\n  sphere S3\n  gauge\n\nspectrum s\n  boson\n  boson n\n\ntheory B\n  sphere S3\n';
+    expect(parseNotebook(text).blocks).toMatchObject([
+      { name: { name: 'A' }, sphere: { sphere: { name: 'S3' } }, groups: [], sound: false },
+      { name: { name: 's' }, towers: [{ kind: 'boson' }], sound: false },
+      { name: { name: 'B' }, sound: true },
+    ]);
+  });
+
   test('every line end and a byte order mark are understood', () => {
     for (const end of ['\n', '\r\n', '\r']) {
       const text = [
