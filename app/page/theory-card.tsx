@@ -31,7 +31,7 @@ function useFormula(card: TheoryCardData, form: FormulaForm): { formula: Formula
 
 export function TheoryCard({ card }: { readonly card: TheoryCardData }) {
   const { view } = useSession();
-  const form = useSelected(view, (state) => state.forms[card.name]) ?? 'functions';
+  const form = useSelected(view, (state) => state.forms[card.name]) ?? card.preferredForm;
   const notation = useSelected(view, (state) => state.notation[card.name]) ?? 0;
   const { formula, stale } = useFormula(card, form);
 

@@ -1,8 +1,9 @@
+import { FormError } from '../exact/form';
 import type { FormulaRequest } from '../language/tree';
-import { isSpecial, quantity } from '../spheres/quantity';
+import { type ElementaryProduct, elementary, isSpecial, quantity } from '../spheres/quantity';
 import type { Analysis } from './analysis';
 import { type Answer, failure } from './answer';
-import { formProduct, formulaView, type Printable } from './formula';
+import { formulaView, type Printable } from './formula';
 import type { FormulaResult } from './result';
 import { unreadable } from './subject';
 
@@ -24,8 +25,12 @@ export function runFormula(analysis: Analysis, request: FormulaRequest): Answer 
 
 /** Elementary where nothing else is left, else special functions. */
 export function preferredForm(printable: Printable): 'elementary' | 'functions' {
-  const made = formProduct(printable, 'elementary');
-  return made?.product.some(isSpecial) ? 'functions' : 'elementary';
+  try {
+    return printable.elementary().product.some(isSpecial) ? 'functions' : 'elementary';
+  } catch (error) {
+    if (!(error instanceof FormError)) throw error;
+    return 'functions';
+  }
 }
 
 /** A theory of the notebook with what printing needs; null when it cannot be read. */
@@ -39,5 +44,11 @@ export function printableTheory(analysis: Analysis, name: string, notation: numb
   );
   const { sphere } = entry;
   const { theory } = entry.built;
-  return { sphere, theory, fixed, notation, oneLoop: quantity(sphere, theory, 'one-loop') ?? [] };
+  const oneLoop = quantity(sphere, theory, 'one-loop') ?? [];
+  let known: ElementaryProduct | null = null;
+  const reduced = (): ElementaryProduct => {
+    known ??= elementary(sphere, theory, oneLoop, fixed);
+    return known;
+  };
+  return { sphere, theory, notation, oneLoop, elementary: reduced };
 }

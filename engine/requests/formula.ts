@@ -1,4 +1,4 @@
-import { type Form, FormError } from '../exact/form';
+import { FormError } from '../exact/form';
 import { functions } from '../functions/table';
 import type { FormulaForm } from '../language/tree';
 import { formLatex } from '../latex/form';
@@ -7,7 +7,7 @@ import { displayLatex, type Piece, productLatex } from '../latex/product';
 import { symbolLatex } from '../latex/symbol';
 import { stemOf } from '../latex/weights';
 import { collectEqual, simplify } from '../product/simplify';
-import { type ElementaryProduct, elementary, isSpecial } from '../spheres/quantity';
+import { type ElementaryProduct, isSpecial } from '../spheres/quantity';
 import type { Sphere, TheoryProduct } from '../spheres/sphere';
 import { gaugeGroups, type Theory } from '../theory/theory';
 import type { FormulaView } from './result';
@@ -16,18 +16,18 @@ import type { FormulaView } from './result';
 export interface Printable {
   readonly sphere: Sphere;
   readonly theory: Theory;
-  /** Closed values of the parameters without a range. */
-  readonly fixed: ReadonlyMap<string, Form>;
   readonly notation: number;
   /** The one-loop product as it comes from the multiplets. */
   readonly oneLoop: TheoryProduct;
+  /** The same in elementary functions as far as they go, at the values of parameters without a range; worked out once. */
+  readonly elementary: () => ElementaryProduct;
 }
 
 export const FORMS: readonly FormulaForm[] = ['modes', 'unpaired', 'functions', 'elementary'];
 
 /** The product behind a form, and the parameter values it holds at; null for the modes, which are no such product. */
 export function formProduct(printable: Printable, form: FormulaForm): ElementaryProduct | null {
-  const { sphere, theory, fixed, oneLoop: raw } = printable;
+  const { oneLoop: raw } = printable;
   switch (form) {
     case 'modes':
       return null;
@@ -36,7 +36,7 @@ export function formProduct(printable: Printable, form: FormulaForm): Elementary
     case 'functions':
       return { product: simplify(raw, 'functions'), at: [] };
     case 'elementary':
-      return elementary(sphere, theory, raw, fixed);
+      return printable.elementary();
   }
 }
 

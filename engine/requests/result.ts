@@ -62,6 +62,8 @@ export interface TheoryCard extends CardBase {
   readonly indent: string;
   readonly checks: readonly Check[];
   readonly formulas: Readonly<Record<FormulaForm, FormulaView>>;
+  /** The form to show first: elementary where nothing else is left, else special functions. */
+  readonly preferredForm: FormulaForm;
   /** Notations to choose from, LaTeX labels; the index is passed back in `OutlineOptions`. */
   readonly notations: readonly string[];
   /** Names of the `let` parameters this theory uses. */

@@ -10,8 +10,8 @@ import type { ReadRow } from '../theory/build';
 import type { Condition, Finding } from '../theory/checks/condition';
 import type { Theory, TheoryGroup } from '../theory/theory';
 import type { Analysis, TheoryEntry } from './analysis';
-import { FORMS, formulaView } from './formula';
-import { printableTheory } from './formula-request';
+import { FORMS, formulaView, type Printable } from './formula';
+import { preferredForm, printableTheory } from './formula-request';
 import type { Check, FormulaView, TheoryCard, TheoryColumn, TheoryRow } from './result';
 import { unreadable } from './subject';
 
@@ -27,6 +27,7 @@ export function theoryCard(
   const rows = own?.built?.rows ?? [];
   const theory = own?.built?.theory ?? null;
   const sphere = own?.sphere ?? null;
+  const printable = own ? printableTheory(analysis, block.name.name, notation) : null;
   return {
     kind: 'theory',
     name: block.name.name,
@@ -45,7 +46,8 @@ export function theoryCard(
     insertRowAt: insertion(analysis.text, block),
     indent: indentOf(analysis.text, block),
     checks: theory && sphere ? checks(own) : [],
-    formulas: formulas(analysis, own, block.name.name, notation),
+    formulas: formulas(printable, own ? unreadable(own, block.name.name) : SAME_NAME),
+    preferredForm: printable === null ? 'functions' : preferredForm(printable),
     notations: notationLabels(own),
     parameters: theory ? [...analysis.parameters.keys()].filter((name) => mentions(theory, name)) : [],
   };
@@ -135,14 +137,9 @@ function examine(condition: Condition, theory: Theory): readonly Finding[] {
 /** All checks of a theory, for the batch output too. */
 export { checks as theoryChecks };
 
-function formulas(
-  analysis: Analysis,
-  entry: TheoryEntry | undefined,
-  name: string,
-  notation: number,
-): Record<FormulaForm, FormulaView> {
-  const printable = entry ? printableTheory(analysis, name, notation) : null;
-  const why = entry ? unreadable(entry, name) : 'Another theory above has the same name; rename one of them.';
+const SAME_NAME = 'Another theory above has the same name; rename one of them.';
+
+function formulas(printable: Printable | null, why: string | null): Record<FormulaForm, FormulaView> {
   const view = (form: FormulaForm): FormulaView =>
     printable === null ? { kind: 'refused', message: why ?? '' } : formulaView(printable, form);
   const [modes, unpaired, special, elementary] = FORMS.map(view) as [
