@@ -1,6 +1,7 @@
 import { Form } from '../exact/form';
 import { Rational } from '../exact/rational';
 import { factorise } from './factorise';
+import { formText } from './form-text';
 import { coefficient, degreeOf, type Polynomial, polynomialIn } from './polynomial';
 import { type Range, readRanges, summedOver } from './ranges';
 import {
@@ -21,7 +22,7 @@ const SINGLE_MODE = '@mode';
 /** The towers a written tower consists of, finite ranges beside endless ones written out; or why it has none. */
 export function analyseTower(written: WrittenTower, place: number): Tower[] | Remark {
   const exponent = written.exponent.toRational();
-  if (exponent === null) return remark('tower-power', place, 'row', { exponent: written.exponent.key });
+  if (exponent === null) return remark('tower-power', place, 'row', { exponent: formText(written.exponent) });
   const ranges = readRanges(written, place);
   if (!('ranges' in ranges)) return ranges;
   const endless = ranges.ranges.filter(({ last }) => last === null);
@@ -187,7 +188,7 @@ function splitFactor(form: Form, indices: readonly string[], place: number): Spl
   if (main === undefined) return { factors: [], order: 0 };
   const p = polynomialIn(form, main);
   if (p === null || used.some((name) => polynomialIn(form, name) === null)) {
-    return remark('tower-not-polynomial', place, 'eigenvalue', { factor: form.key, index: used.join(', ') });
+    return remark('tower-not-polynomial', place, 'eigenvalue', { factor: formText(form), index: used.join(', ') });
   }
   if (degreeOf(p) > MAXIMAL_DEGREE) {
     return remark('tower-degree', place, 'eigenvalue', { degree: `${degreeOf(p)}`, limit: `${MAXIMAL_DEGREE}` });
@@ -207,7 +208,10 @@ function splitPolynomial(p: Polynomial): Split {
 /** Linear forms in several indices; a polynomial of higher degree must be a product of such forms. */
 function splitForms(form: Form, p: Polynomial, indices: readonly string[], place: number): Split | Remark {
   const linear = degreeOf(p) === 1 ? { leading: Form.one, shifts: [form] } : shiftsOf(p, indices[0] as string);
-  const refused = remark('tower-several-indices', place, 'eigenvalue', { factor: form.key, index: indices.join(', ') });
+  const refused = remark('tower-several-indices', place, 'eigenvalue', {
+    factor: formText(form),
+    index: indices.join(', '),
+  });
   if (linear === null || linear.leading.symbols().some((name) => indices.includes(name))) return refused;
   const factors: TowerFactor[] = [];
   for (const shift of linear.shifts) {

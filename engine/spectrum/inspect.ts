@@ -1,6 +1,7 @@
 import { formDouble } from '../arithmetic/form-double';
 import { Form } from '../exact/form';
 import { analyseTower, isRemark } from './analyse';
+import { formText } from './form-text';
 import { type Pairing, pairTowers } from './pairing';
 import { binomialCoefficients, evaluatePolynomial, type Polynomial, polynomialIn } from './polynomial';
 import { noValues, substituteTowers } from './prepare';
@@ -26,7 +27,7 @@ export function inspectTowers(towers: readonly Tower[], pairing: Pairing | null)
   if (pairing === null) return unique(remarks);
   const zero = zeroModes(pairing).map(({ place, order }) => {
     const sign = (order.toRational()?.sign() ?? 1) < 0 ? 'infinite' : 'zero';
-    return remark('zero-mode', place, 'eigenvalue', { order: order.key, determinant: sign });
+    return remark('zero-mode', place, 'eigenvalue', { order: formText(order), determinant: sign });
   });
   return unique([...remarks, ...zero, ...signRemarks(towers, pairing)]);
 }
@@ -44,13 +45,13 @@ function degeneracyRemarks(tower: Tower): Remark[] {
   if (degeneracy.symbols().some((name) => !indices.includes(name))) return [];
   const value = formDouble(degeneracy, () => ({ re: 0.375, im: 0 }));
   if (value !== null && Math.abs(value.im) > 1e-12 * Math.abs(value.re)) {
-    return [remark('degeneracy-not-real', place, 'degeneracy', { degeneracy: degeneracy.key })];
+    return [remark('degeneracy-not-real', place, 'degeneracy', { degeneracy: formText(degeneracy) })];
   }
   const negative = indices.length === 1 ? firstNegative(tower) : null;
   if (negative !== null) return [remark('degeneracy-negative', place, 'degeneracy', negative)];
   return isIntegerValued(degeneracy, indices)
     ? []
-    : [remark('degeneracy-fraction', place, 'degeneracy', { degeneracy: degeneracy.key })];
+    : [remark('degeneracy-fraction', place, 'degeneracy', { degeneracy: formText(degeneracy) })];
 }
 
 function firstNegative({ degeneracy, indices, last }: Tower): { step: string; value: string } | null {

@@ -2,6 +2,7 @@ import { Form } from '../exact/form';
 import { Rational } from '../exact/rational';
 
 import { powerSums } from './bernoulli-polynomial';
+import { formText } from './form-text';
 import { polynomialIn } from './polynomial';
 import { MAXIMAL_MODES, type Remark, remark, type WrittenTower } from './tower';
 
@@ -19,17 +20,18 @@ export function readRanges(written: WrittenTower, place: number): { ranges: Rang
   let modes = 1;
   for (const { name, from, to, span } of written.ranges) {
     const bound = [from, ...(to === null ? [] : [to])].find((form) => form.symbols().some((s) => names.includes(s)));
-    if (bound !== undefined) return remark('tower-range-bound', place, 'row', { index: name, bound: bound.key }, span);
+    if (bound !== undefined)
+      return remark('tower-range-bound', place, 'row', { index: name, bound: formText(bound) }, span);
     if (to === null) {
       ranges.push({ name, from, last: null });
       continue;
     }
     const length = to.sub(from).toRational();
     if (length === null || !length.isInteger()) {
-      return remark('tower-range-bound', place, 'row', { index: name, bound: to.key }, span);
+      return remark('tower-range-bound', place, 'row', { index: name, bound: formText(to) }, span);
     }
     if (length.compare(Rational.of(-1)) < 0) {
-      return remark('tower-range-order', place, 'row', { index: name, from: from.key, to: to.key }, span);
+      return remark('tower-range-order', place, 'row', { index: name, from: formText(from), to: formText(to) }, span);
     }
     const last = Number(length.numerator);
     modes *= last + 1;

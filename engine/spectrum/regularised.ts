@@ -6,6 +6,7 @@ import { isRemark } from './analyse';
 import { type CheckRoute, checkValue } from './cross-check';
 import { type ExactNumbers, exactNumbers } from './exact-numbers';
 import { factorValue } from './factor-value';
+import { formText } from './form-text';
 import { guarded } from './guard';
 import { inspectTowers } from './inspect';
 import { isFailure } from './linear-sum';
@@ -144,7 +145,7 @@ function furtherRemarks(prepared: Prepared, prescription: Prescription, exact: E
   if (prescription === 'operator' && new Set(prepared.towers.map(({ order }) => order)).size > 1) {
     remarks.push(remark('mixed-order', null, 'row'));
   }
-  if (!exact.scale.isZero()) remarks.push(remark('scale-dependent', null, 'row', { scale: exact.scale.key }));
+  if (!exact.scale.isZero()) remarks.push(remark('scale-dependent', null, 'row', { scale: formText(exact.scale) }));
   const near = prepared.pairing.classes.find((found) => isNearZero(found, digits));
   if (near) remarks.push(remark('near-zero-mode', near.rows[0]?.place ?? null, 'eigenvalue'));
   return remarks;

@@ -1,6 +1,7 @@
 import { formDouble } from '../arithmetic/form-double';
 import { Form } from '../exact/form';
 import { rootBound } from './complex-roots';
+import { formText } from './form-text';
 import type { ModeClass, Pairing } from './pairing';
 import { evaluatePolynomial, type Polynomial } from './polynomial';
 import { type Remark, remark, type Tower } from './tower';
@@ -14,7 +15,7 @@ export function signRemarks(towers: readonly Tower[], pairing: Pairing): Remark[
   );
   const exponent = pairing.constants.find(({ base }) => isMinusOne(base))?.exponent;
   if (flipped && exponent) {
-    remarks.push(remark('negative-axis', flipped.place, 'eigenvalue', { exponent: exponent.key }));
+    remarks.push(remark('negative-axis', flipped.place, 'eigenvalue', { exponent: formText(exponent) }));
   }
   let total = Form.zero;
   for (const found of pairing.classes) total = total.add(negativeMultiplicity(found));
