@@ -166,6 +166,7 @@ export function tanFixed(x: bigint, bits: number): bigint {
 
 /** cot x with `bits` fraction bits for x != 0; |error| <= max(1, cot^2 x) ulp. */
 export function cotFixed(x: bigint, bits: number): bigint {
+  if (x === 0n) throw new RangeError('cotangent of zero');
   return quotientOf(x, bits, (value) => [value.cos, value.sin]);
 }
 

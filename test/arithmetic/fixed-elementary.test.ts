@@ -124,4 +124,5 @@ test('branch conventions on the axes', () => {
   expect(sqrtComplex({ re: -4n * one, im: 0n }, 100)).toEqual({ re: 0n, im: 2n * one });
   expect(() => atan2Fixed(0n, 0n, 100)).toThrow(RangeError);
   expect(() => logFixed(0n, 100)).toThrow(RangeError);
+  expect(() => cotFixed(0n, 100)).toThrow(RangeError);
 });
