@@ -31,19 +31,25 @@ export function doubleSineKernel(b: number): DoubleKernel {
   return {
     addLog: (xRe, xIm, power, outRe, outIm) => {
       for (let k = 0; k < xRe.length; k++) {
-        const re = xRe[k] as number;
-        const im = xIm === null ? 0 : (xIm[k] as number);
-        if (im === 0) {
-          const phase = realPhase(tables, Math.abs(re));
-          outIm[k] = (outIm[k] as number) + (re < 0 ? -power : power) * phase;
-          continue;
-        }
-        firstQuadrant(tables, Math.abs(re), Math.abs(im), value);
-        outRe[k] = (outRe[k] as number) + (im > 0 ? power : -power) * (value[0] as number);
-        outIm[k] = (outIm[k] as number) + (re < 0 ? -power : power) * (value[1] as number);
+        logDoubleSineDouble(tables, xRe[k] as number, xIm === null ? 0 : (xIm[k] as number), value);
+        outRe[k] = (outRe[k] as number) + power * (value[0] as number);
+        outIm[k] = (outIm[k] as number) + power * (value[1] as number);
       }
     },
   };
+}
+
+/** log s_b(re + i im), written to out[0] + i out[1]; see `doubleSineKernel`. */
+export function logDoubleSineDouble(tables: DoubleSineTables, re: number, im: number, out: Float64Array): void {
+  if (im === 0) {
+    const phase = realPhase(tables, Math.abs(re));
+    out[0] = 0;
+    out[1] = re < 0 ? -phase : phase;
+    return;
+  }
+  firstQuadrant(tables, Math.abs(re), Math.abs(im), out);
+  if (im < 0) out[0] = -(out[0] as number);
+  if (re < 0) out[1] = -(out[1] as number);
 }
 
 /** Im log s_b(x) for real x >= 0; the real part is zero. */

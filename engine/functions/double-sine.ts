@@ -1,8 +1,14 @@
+import type { FixedComplex } from '../arithmetic/fixed-complex';
 import { Form } from '../exact/form';
+import { logDoubleSineClosed } from './double-sine-closed';
 import { doubleSineKernel } from './double-sine-double';
 import { logDoubleSineByMidpoint } from './double-sine-midpoint';
 import { doubleSineModes, doubleSineNotations } from './double-sine-notations';
-import type { FunctionAt, SpecialFunction } from './special-function';
+import { periodOfParameter } from './double-sine-period';
+import { logDoubleSine, logDoubleSineByOtherStep } from './double-sine-precise';
+import { logDoubleSineByProduct } from './double-sine-product';
+import { outsideDomain } from './outside-domain';
+import type { ExactParameter, FunctionAt, PreciseLog, SpecialFunction } from './special-function';
 
 const HALF = Form.ratio(1, 2);
 
@@ -11,7 +17,7 @@ const HALF = Form.ratio(1, 2);
  *   log s_b(x) = -i int_0^oo dt/t [ sin(2xt)/(2 sinh(bt) sinh(t/b)) - x/t ],  |Im x| < Q/2.
  * Poles i (Q/2 + m b + n/b), zeros at the opposite points; s_b(x) s_b(-x) = 1, s_b = s_{1/b},
  * s_b(x - i b/2) = 2 cosh(pi b x) s_b(x + i b/2), s_b(i Q/2 + e) = 1/(2 pi i e) + O(1).
- * Parameter: b, with b > 0.
+ * Parameter: b > 0; in the precise tier also complex b with Re b > 0.
  */
 export const doubleSine: SpecialFunction = {
   name: 'doubleSine',
@@ -41,9 +47,9 @@ export const doubleSine: SpecialFunction = {
   notations: doubleSineNotations,
   modes: doubleSineModes,
   elementary: false,
-  double: ([b]) => doubleSineKernel(b?.im === 0 ? b.re : Number.NaN),
-  precise: (x, [b], bits) => (b && logDoubleSineByMidpoint(x, b, bits)) ?? { kind: 'indistinct' },
-  crossCheck: null,
+  double: ([b]) => (b?.im === 0 && b.re > 0 && Number.isFinite(b.re) ? doubleSineKernel(b.re) : outsideDomain),
+  precise: (x, [b], bits) => preciseLog(x, b as ExactParameter, bits),
+  crossCheck: (x, [b], bits) => secondRoute(x, b as ExactParameter, bits),
   sources: [
     {
       key: 'Kurokawa-Koyama-2003',
@@ -53,6 +59,33 @@ export const doubleSine: SpecialFunction = {
     { key: 'HHL-2011', text: 'N. Hama, K. Hosomichi, S. Lee, arXiv:1102.4716 (2011)' },
   ],
 };
+
+/** Real b > 0 by the midpoint rule with residues, complex b by the q-products. */
+function preciseLog(x: FixedComplex, b: ExactParameter, bits: number): PreciseLog {
+  const period = periodOfParameter(b);
+  if (period !== null) return logDoubleSine(x, period, bits);
+  return (b.approx.re > 0 ? logDoubleSineByProduct(x, b, bits) : null) ?? { kind: 'indistinct' };
+}
+
+/** p + q up to which the closed form at b^2 = p/q is quick. */
+const SIMPLE_RATIO = 12n;
+
+function secondRoute(
+  x: FixedComplex,
+  b: ExactParameter,
+  bits: number,
+): { readonly route: string; readonly log: PreciseLog } | null {
+  const period = periodOfParameter(b);
+  if (period === null) return null;
+  if (b.square !== null && b.square.numerator + b.square.denominator <= SIMPLE_RATIO) {
+    const log = logDoubleSineClosed(x, period, bits);
+    if (log !== null) return { route: 'closed form in dilogarithms at rational b squared', log };
+  }
+  const midpoint = logDoubleSineByMidpoint(x, b, bits);
+  if (midpoint !== null) return { route: 'midpoint rule without residues', log: midpoint };
+  const other = logDoubleSineByOtherStep(x, period, bits);
+  return other && { route: 'midpoint rule with another step', log: other };
+}
 
 /** s_b(x + i p)/s_b(x) = 1/(2 cosh(pi p (x + i p/2))) for p = b and p = 1/b. */
 function inverseCosh(x: Form, period: Form): FunctionAt {

@@ -1,11 +1,11 @@
-import { absolute, bitLength, numberFromFixed, shiftRounded } from '../arithmetic/fixed';
-import { atan2Fixed } from '../arithmetic/fixed-atan';
-import { type FixedComplex, logComplex, logModulus, multiplyComplex, oneComplex } from '../arithmetic/fixed-complex';
+import { numberFromFixed, shiftRounded } from '../arithmetic/fixed';
+import { type FixedComplex, logComplex, oneComplex } from '../arithmetic/fixed-complex';
 import { piFixed } from '../arithmetic/fixed-constants';
 import { logFixed } from '../arithmetic/fixed-log';
 import { type Estimate, farPoint, stepsToFarPoint } from './euler-maclaurin';
 import { scaledHurwitzDerivative } from './hurwitz-derivative';
 import { logTwoSinh } from './hyperbolic-precise';
+import { LogProduct } from './log-product';
 import type { PreciseLog } from './special-function';
 
 /**
@@ -49,29 +49,17 @@ export function logGammaRight(z: FixedComplex, bits: number): Estimate {
   const working = bits + guard;
   const one = oneComplex(working).re;
   let at: FixedComplex = { re: z.re << BigInt(guard), im: z.im << BigInt(guard) };
-  // The product keeps `working` significant bits: its mantissa is cut after every factor, the binary exponent kept.
-  let product = oneComplex(working);
-  let exponent = 0;
-  let angle = 0;
+  const product = new LogProduct(working);
   for (let k = 0; k < steps; k++) {
-    product = multiplyComplex(product, at, working);
-    angle += Math.atan2(approximate.im, approximate.re + k);
-    const excess = Math.max(bitLength(product.re), bitLength(product.im)) - working;
-    if (excess > 0) {
-      product = { re: product.re >> BigInt(excess), im: product.im >> BigInt(excess) };
-      exponent += excess;
-    }
+    product.multiply(at);
     at = { re: at.re + one, im: at.im };
   }
   const point = farPoint(at, working);
   const far = scaledHurwitzDerivative(point, 0, logComplex(at, working), 0);
-  const principal = atan2Fixed(product.im, product.re, working);
-  const turns = BigInt(Math.round((angle - numberFromFixed(principal, working)) / (2 * Math.PI)));
-  const pi = piFixed(working);
-  const modulus = logModulus(product, working - exponent, working);
-  const re = far.value.re + shiftRounded(logFixed(2n * pi, working), 1) - modulus;
-  const im = far.value.im - principal - 2n * turns * pi;
-  const rounding = far.error + BigInt(8 * steps + 8) + absolute(turns);
+  const below = product.logarithm();
+  const re = far.value.re + shiftRounded(logFixed(2n * piFixed(working), working), 1) - below.value.re;
+  const im = far.value.im - below.value.im;
+  const rounding = far.error + below.error + 4n;
   return {
     value: { re: shiftRounded(re, guard), im: shiftRounded(im, guard) },
     error: (rounding >> BigInt(guard)) + 2n,

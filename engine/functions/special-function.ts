@@ -3,7 +3,15 @@ import type { Form } from '../exact/form';
 import type { Rational } from '../exact/rational';
 
 /** The functions a product of factors is made of. The table in `functions/table.ts` has one entry for each. */
-export type FunctionName = 'hyperbolicSine' | 'hyperbolicCosine' | 'doubleSine' | 'gamma' | 'linear' | 'exponential';
+export type FunctionName =
+  | 'hyperbolicSine'
+  | 'hyperbolicCosine'
+  | 'doubleSine'
+  | 'gamma'
+  | 'upsilon'
+  | 'tripleSine'
+  | 'linear'
+  | 'exponential';
 
 /** A function of an argument and parameters (periods), as one entry of a product. */
 export interface FunctionAt {

@@ -5,6 +5,8 @@ import { hyperbolicCosine } from './hyperbolic-cosine';
 import { hyperbolicSine } from './hyperbolic-sine';
 import { linear } from './linear';
 import type { FunctionName, SpecialFunction } from './special-function';
+import { tripleSine } from './triple-sine';
+import { upsilon } from './upsilon';
 
 /** Every function that a product can be made of. The compiler finds a missing one. */
 export const functions = {
@@ -12,6 +14,8 @@ export const functions = {
   hyperbolicCosine,
   doubleSine,
   gamma,
+  upsilon,
+  tripleSine,
   linear,
   exponential,
 } satisfies Record<FunctionName, SpecialFunction> as Record<FunctionName, SpecialFunction>;

@@ -39,3 +39,13 @@ export function unitsOff(log: PreciseLog, wanted: FixedComplex, bits: number, mo
   }
   return Math.hypot(Number(log.re - wanted.re), Number(im));
 }
+
+/** A double, exactly, as a parameter of the precise tier. */
+export function parameterOfDouble(value: number): ExactParameter {
+  const exact = Rational.of(fixedFromNumber(value, 1100), 1n << 1100n);
+  return {
+    square: exact.mul(exact),
+    value: (bits) => ({ re: fixedFromNumber(value, bits), im: 0n }),
+    approx: { re: value, im: 0 },
+  };
+}

@@ -1,0 +1,85 @@
+import { divideFixed, numberFromFixed, shiftRounded } from '../arithmetic/fixed';
+import type { FixedComplex } from '../arithmetic/fixed-complex';
+import { logBarnesGamma } from './barnes-gamma';
+import type { ExactParameter, PreciseLog } from './special-function';
+import { logTripleSineRound } from './triple-sine-closed';
+
+/** A second value of a logarithm and how it was found. */
+export interface SecondRoute {
+  readonly route: string;
+  readonly log: PreciseLog;
+}
+
+/**
+ * log Upsilon_b(x) = 2 log Gamma_2(Q/2) - log Gamma_2(x) - log Gamma_2(Q - x) with the double Gamma function of periods b
+ * and 1/b by steps and asymptotic series; imaginary part up to multiples of 2 pi.
+ */
+export function upsilonSecondRoute(x: FixedComplex, b: ExactParameter, bits: number): SecondRoute | null {
+  if (b.approx.im !== 0 || !(b.approx.re > 0)) return null;
+  const working = bits + 16;
+  const exact = b.value(working).re;
+  const inverse = divideFixed(1n << BigInt(working), exact, working);
+  const periods = [real(exact), real(inverse)];
+  const lifted = { re: x.re << 16n, im: x.im << 16n };
+  const total = exact + inverse;
+  const center = logBarnesGamma(real(total >> 1n), periods, working);
+  const one = logBarnesGamma(lifted, periods, working);
+  const two = logBarnesGamma({ re: total - lifted.re, im: -lifted.im }, periods, working);
+  if (center === null || one === null || two === null) return null;
+  const error = 2n * center.error + one.error + two.error;
+  const value: PreciseLog = {
+    kind: 'value',
+    re: shiftRounded(2n * center.value.re - one.value.re - two.value.re, 16),
+    im: shiftRounded(-one.value.im - two.value.im, 16),
+    error: (error >> 16n) + 2n + argumentShare(x, [b.approx.re, 1 / b.approx.re], bits),
+  };
+  return { route: 'double Gamma functions', log: value };
+}
+
+/** Bits up to which the triple Gamma functions, with tens of thousands of lattice points, are worth their time. */
+const TRIPLE_GAMMA_BITS = 260;
+
+/** log S_3 in closed form for equal periods, else -log Gamma_3(x) - log Gamma_3(|w| - x). */
+export function tripleSineSecondRoute(x: FixedComplex, w: readonly ExactParameter[], bits: number): SecondRoute | null {
+  if (w.length !== 3 || !w.every(({ approx }) => approx.im === 0 && approx.re > 0)) return null;
+  const closed = logTripleSineRound(x, w, bits);
+  if (closed !== null) return { route: 'closed form in polylogarithms', log: closed };
+  if (bits > TRIPLE_GAMMA_BITS) return null;
+  const working = bits + 16;
+  const periods = w.map((period) => real(period.value(working).re));
+  const total = periods.reduce((sum, { re }) => sum + re, 0n);
+  const lifted = { re: x.re << 16n, im: x.im << 16n };
+  const one = logBarnesGamma(lifted, periods, working);
+  const two = logBarnesGamma({ re: total - lifted.re, im: -lifted.im }, periods, working);
+  if (one === null || two === null) return null;
+  const value: PreciseLog = {
+    kind: 'value',
+    re: shiftRounded(-one.value.re - two.value.re, 16),
+    im: shiftRounded(-one.value.im - two.value.im, 16),
+    error:
+      ((one.error + two.error) >> 16n) +
+      2n +
+      argumentShare(
+        x,
+        w.map(({ approx }) => approx.re),
+        bits,
+      ),
+  };
+  return { route: 'triple Gamma functions', log: value };
+}
+
+/** What one unit in x may do to the logarithm: the growth of its derivative, and the zeros outside 0 < x < |w|. */
+function argumentShare(x: FixedComplex, periods: readonly number[], bits: number): bigint {
+  const total = periods.reduce((sum, w) => sum + w, 0);
+  const volume = periods.reduce((product, w) => product * w, 1);
+  const re = numberFromFixed(x.re, bits);
+  const outside = Math.min(re, total - re);
+  const reach = Math.hypot(re, numberFromFixed(x.im, bits)) + total;
+  const growth = (reach ** (periods.length - 1) * (Math.log(reach + 2) + 4)) / volume;
+  const near = Math.max(2 ** -bits, Math.abs(numberFromFixed(x.im, bits)), outside);
+  return BigInt(Math.ceil(8 * growth + 8 / near));
+}
+
+function real(value: bigint): FixedComplex {
+  return { re: value, im: 0n };
+}

@@ -1,0 +1,106 @@
+import { Form } from '../exact/form';
+import { tripleSineSecondRoute } from './barnes-routes';
+import { indexSum, parenthesised, periodText, plus, realFirst } from './notation';
+import { outsideDomain } from './outside-domain';
+import type { FunctionAt, Printer, SpecialFunction } from './special-function';
+import { tripleSineKernel } from './triple-sine-double';
+import { logTripleSine } from './triple-sine-precise';
+
+const HALF = Form.ratio(1, 2);
+
+/**
+ * The triple sine S_3(x | w1, w2, w3) = prod_{n>=0} (n.w + x)(n.w + |w| - x), zeta-regularised (no further constant).
+ * Zeros at -n.w and |w| + n.w; S_3(|w| - x) = S_3(x); S_3(x + w_i) = S_3(x)/S_2(x | w_j, w_k) with
+ * S_2(x | u, v) = s_b(i (x/sqrt(uv) - Q/2)), b = sqrt(u/v); log S_3 -> -(i pi/6) B_33(x | w) for Im x -> +infinity.
+ * Parameters: w1, w2, w3 > 0.
+ */
+export const tripleSine: SpecialFunction = {
+  name: 'tripleSine',
+  spelling: 'triplesine',
+  parameters: ['w1', 'w2', 'w3'],
+  reflections: [{ center: (w) => Form.sum(w).mul(HALF), power: 1, sign: 1 }],
+  shifts: [0, 1, 2].map((index) => ({
+    step: (w: readonly Form[]) => w[index] as Form,
+    quotient: (x: Form, w: readonly Form[]) => [
+      inverseDoubleSine(
+        x,
+        w.filter((_, k) => k !== index),
+      ),
+    ],
+  })),
+  zeros: [
+    { kind: 'zero', start: () => Form.zero, steps: (w) => w.map((period) => period.neg()) },
+    { kind: 'zero', start: (w) => Form.sum(w), steps: (w) => w },
+  ],
+  growth: [
+    { direction: Form.i.neg(), logarithm: (x, w) => cubic(x, w).neg() },
+    { direction: Form.i, logarithm: (x, w) => cubic(x, w) },
+  ],
+  notations: [
+    {
+      label: 'S_3',
+      latex: (x, w, print) => `S_3${parenthesised(`${realFirst(x, print)}${periodList(w, print)}`)}`,
+      definition: (w, print) => {
+        const lead = indexSum(['n_1', 'n_2', 'n_3'], w, print);
+        const factors = `${parenthesised(`${lead}+x`)}${parenthesised(`${plus(lead, Form.sum(w), print)}-x`)}`;
+        return `S_3(x${periodList(w, print)})=\\prod_{n_1,n_2,n_3\\ge0}${factors}`;
+      },
+    },
+  ],
+  modes: (x, w, print) => {
+    const rest = Form.sum(w).sub(x);
+    if (isRound(w)) {
+      // n1 + n2 + n3 = n in (n + 1)(n + 2)/2 ways.
+      const pair = `${parenthesised(plus('n', x, print))}${parenthesised(plus('n', rest, print))}`;
+      return `\\prod_{n\\ge0}\\left[${pair}\\right]^{(n+1)(n+2)/2}`;
+    }
+    const lead = indexSum(['n_1', 'n_2', 'n_3'], w, print);
+    const factors = `${parenthesised(plus(lead, x, print))}${parenthesised(plus(lead, rest, print))}`;
+    return `\\prod_{n_1,n_2,n_3\\ge0}${factors}`;
+  },
+  elementary: false,
+  double: (w) => {
+    const [w1, w2, w3] = w.map(({ re, im }) => (im === 0 && re > 0 && Number.isFinite(re) ? re : null));
+    return w1 && w2 && w3 ? tripleSineKernel(w1, w2, w3) : outsideDomain;
+  },
+  precise: (x, w, bits) => logTripleSine(x, w, bits),
+  crossCheck: (x, w, bits) => tripleSineSecondRoute(x, w, bits),
+  sources: [
+    { key: 'Kurokawa-Koyama-2003', text: 'N. Kurokawa, S. Koyama, Forum Math. 15 (2003) 839: multiple sine functions' },
+    {
+      key: 'Narukawa-2004',
+      text: 'A. Narukawa, Adv. Math. 189 (2004) 247, math/0306164: integrals and modular properties',
+    },
+    { key: 'Lockhart-Vafa-2012', text: 'G. Lockhart, C. Vafa, arXiv:1210.5909 (2012)' },
+  ],
+};
+
+/** 1/S_2(x | u, v) as a double sine. */
+function inverseDoubleSine(x: Form, periods: readonly Form[]): FunctionAt {
+  const [u, v] = periods as [Form, Form];
+  const root = Form.call('sqrt', u.mul(v));
+  const halfQ = u.add(v).div(root).mul(HALF);
+  return {
+    name: 'doubleSine',
+    argument: Form.i.mul(x.div(root).sub(halfQ)),
+    parameters: [Form.call('sqrt', u.div(v))],
+    power: -1,
+  };
+}
+
+/** (i pi/6) B_33(x | w), B_33 = (z^3 - (w1^2 + w2^2 + w3^2) z/4)/(w1 w2 w3) with z = x - |w|/2. */
+function cubic(x: Form, w: readonly Form[]): Form {
+  const z = x.sub(Form.sum(w).mul(HALF));
+  const squares = Form.sum(w.map((period) => period.mul(period))).mul(Form.ratio(1, 4));
+  const volume = w.reduce((product, period) => product.mul(period), Form.one);
+  return Form.i.mul(Form.pi).mul(Form.ratio(1, 6)).mul(z.mul(z).sub(squares).mul(z).div(volume));
+}
+
+function isRound(w: readonly Form[]): boolean {
+  return w.every((period) => period.equals(Form.one));
+}
+
+/** `|w_1,w_2,w_3`; nothing on the round sphere. */
+function periodList(w: readonly Form[], print: Printer): string {
+  return isRound(w) ? '' : `\\,|\\,${w.map((period) => periodText(period, print)).join(',')}`;
+}

@@ -1,0 +1,113 @@
+import type { FixedComplex } from '../arithmetic/fixed-complex';
+import { Form } from '../exact/form';
+import { upsilonSecondRoute } from './barnes-routes';
+import { asFactor, indexSum, parenthesised, periodText, plus, realFirst } from './notation';
+import { outsideDomain } from './outside-domain';
+import type { ExactParameter, FunctionAt, Printer, SpecialFunction } from './special-function';
+import { upsilonKernel } from './upsilon-double';
+import { logUpsilon } from './upsilon-precise';
+
+const HALF = Form.ratio(1, 2);
+
+/**
+ * Upsilon_b(x), normalised by Upsilon_b(Q/2) = 1, Q = b + 1/b:
+ *   log Upsilon_b(x) = int_0^oo dt/t [(Q/2 - x)^2 e^{-2t} - sinh^2((Q/2 - x) t)/(sinh bt sinh t/b)],  0 < Re x < Q.
+ * Zeros at -(m b + n/b) and Q + m b + n/b; Upsilon_b(Q - x) = Upsilon_b(x) = Upsilon_{1/b}(x);
+ * Upsilon_b(x + b) = gamma(bx) b^{1-2bx} Upsilon_b(x), gamma(u) = Gamma(u)/Gamma(1 - u). The zeta-regularised product of
+ * (m b + n/b + x)(m b + n/b + Q - x) is Upsilon_b(x) times its value at Q/2, a constant. Parameter: b > 0.
+ */
+export const upsilon: SpecialFunction = {
+  name: 'upsilon',
+  spelling: 'upsilon',
+  parameters: ['b'],
+  reflections: [{ center: ([b]) => sum(b as Form).mul(HALF), power: 1, sign: 1 }],
+  shifts: [
+    { step: ([b]) => b as Form, quotient: (x, [b]) => quotient(x, b as Form, Form.call('log', b as Form)) },
+    {
+      step: ([b]) => (b as Form).inverse(),
+      quotient: (x, [b]) => quotient(x, (b as Form).inverse(), Form.call('log', b as Form).neg()),
+    },
+  ],
+  zeros: [
+    {
+      kind: 'zero',
+      start: () => Form.zero,
+      steps: ([b]) => [(b as Form).neg(), (b as Form).inverse().neg()],
+    },
+    { kind: 'zero', start: ([b]) => sum(b as Form), steps: ([b]) => [b as Form, (b as Form).inverse()] },
+  ],
+  growth: [],
+  notations: [
+    {
+      label: '\\Upsilon_b',
+      latex: (x, [b], print) => `\\Upsilon_{${subscript(b as Form, print)}}${parenthesised(realFirst(x, print))}`,
+      definition: ([b], print) =>
+        `\\log\\Upsilon_{${subscript(b as Form, print)}}(x)=\\int_0^\\infty\\frac{dt}{t}\\left[z^2e^{-2t}` +
+        `-\\frac{\\sinh^2zt}{${sinh(b as Form, print)}\\,${sinh((b as Form).inverse(), print)}}\\right],` +
+        `\\quad z=${isRound(b as Form) ? '1' : '\\tfrac Q2'}-x`,
+    },
+    {
+      label: 'H',
+      // At b = 1 Upsilon(1 + z) = H(z) = G(1 + z) G(1 - z), Pestun's letter; elsewhere H_b(z) = Upsilon_b(Q/2 + z).
+      latex: (x, [b], print) => {
+        const center = half(b as Form);
+        return `${letterH(b as Form, print)}${parenthesised(realFirst(x.sub(center), print))}`;
+      },
+      definition: ([b], print) =>
+        isRound(b as Form)
+          ? 'H(z)=G(1+z)\\,G(1-z)=e^{-(1+\\gamma)z^2}\\prod_{n\\ge1}\\left(1-\\frac{z^2}{n^2}\\right)^{n}e^{z^2/n}'
+          : `${letterH(b as Form, print)}(z)=\\Upsilon_{${subscript(b as Form, print)}}(\\tfrac Q2+z)`,
+    },
+  ],
+  modes: (x, [b], print) => {
+    const periods = [b as Form, (b as Form).inverse()];
+    const lead = indexSum(['m', 'n'], periods, print);
+    const total = (b as Form).equals(Form.symbol('@b')) ? Form.symbol('@Q') : sum(b as Form);
+    return `\\prod_{m,n\\ge0}${parenthesised(plus(lead, x, print))}${parenthesised(plus(lead, total.sub(x), print))}`;
+  },
+  elementary: false,
+  double: ([b]) => (b?.im === 0 && b.re > 0 && Number.isFinite(b.re) ? upsilonKernel(b.re) : outsideDomain),
+  precise: (x: FixedComplex, [b], bits) => logUpsilon(x, b as ExactParameter, bits),
+  crossCheck: (x, [b], bits) => upsilonSecondRoute(x, b as ExactParameter, bits),
+  sources: [
+    { key: 'Zamolodchikov-1996', text: 'A. Zamolodchikov, Al. Zamolodchikov, hep-th/9506136 (1996), (3.10)-(3.14)' },
+    { key: 'Pestun-2007', text: 'V. Pestun, arXiv:0712.2824 (2007): H' },
+    { key: 'Hama-Hosomichi-2012', text: 'N. Hama, K. Hosomichi, arXiv:1206.6359 (2012)' },
+  ],
+};
+
+/** Upsilon(x + p)/Upsilon(x) = Gamma(px)/Gamma(1 - px) p^{1 - 2px}. */
+function quotient(x: Form, period: Form, logarithm: Form): FunctionAt[] {
+  const u = period.mul(x);
+  return [
+    { name: 'gamma', argument: u, parameters: [], power: 1 },
+    { name: 'gamma', argument: Form.one.sub(u), parameters: [], power: -1 },
+    { name: 'exponential', argument: Form.one.sub(u.scale(2)).mul(logarithm), parameters: [], power: 1 },
+  ];
+}
+
+function sum(b: Form): Form {
+  return b.add(b.inverse());
+}
+
+/** Q/2, with the symbol Q while b is one. */
+function half(b: Form): Form {
+  return (b.equals(Form.symbol('@b')) ? Form.symbol('@Q') : sum(b)).mul(HALF);
+}
+
+function isRound(b: Form): boolean {
+  return b.equals(Form.one);
+}
+
+function subscript(b: Form, print: Printer): string {
+  return isRound(b) ? 'b=1' : (b.toRational()?.toString() ?? print.form(b));
+}
+
+function letterH(b: Form, print: Printer): string {
+  return isRound(b) ? 'H' : `H_{${subscript(b, print)}}`;
+}
+
+function sinh(period: Form, print: Printer): string {
+  if (isRound(period)) return '\\sinh t';
+  return `\\sinh${parenthesised(`${asFactor(periodText(period, print))}t`)}`;
+}
