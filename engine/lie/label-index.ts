@@ -4,7 +4,7 @@
  */
 export class LabelIndex {
   readonly rank: number;
-  rows: Int16Array;
+  rows: Int32Array;
   count = 0;
   private slots: Int32Array;
   /** 32 minus the binary logarithm of the number of slots. */
@@ -12,7 +12,7 @@ export class LabelIndex {
 
   constructor(rank: number) {
     this.rank = rank;
-    this.rows = new Int16Array(16 * rank);
+    this.rows = new Int32Array(16 * rank);
     this.slots = new Int32Array(64).fill(-1);
   }
 
@@ -28,7 +28,7 @@ export class LabelIndex {
     if (known >= 0) return known;
     const rank = this.rank;
     if ((this.count + 1) * rank > this.rows.length) {
-      const grown = new Int16Array(2 * this.rows.length);
+      const grown = new Int32Array(2 * this.rows.length);
       grown.set(this.rows);
       this.rows = grown;
     }

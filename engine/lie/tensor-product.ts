@@ -2,16 +2,17 @@ import { Rational } from '../exact/rational';
 import { dominantCharacter } from './character';
 import type { Group } from './group';
 import { dimension } from './invariants';
+import { LabelIndex } from './label-index';
 import { weightKey } from './orbit';
 import { type Refusal, refusal } from './refusal';
 import { collect, type Term, term, trivialTerm } from './terms';
 import { makeDominant, orbitLabels } from './weyl';
 
 /**
- * Number of weight additions a product of representations may take: a few seconds in a browser. It bounds tensor
+ * Number of weight additions a product of representations may take: about a second in a browser. It bounds tensor
  * products and powers alike.
  */
-const ADDITIONS_ALLOWED = 4_000_000;
+const ADDITIONS_ALLOWED = 2_000_000;
 
 /** The weights of a sum of representations: label rows of whole orbits, each with a charge and a multiplicity. */
 interface WeightRows {
@@ -59,32 +60,35 @@ function weightRows(group: Group, terms: readonly Term[]): WeightRows[] {
  */
 function addWeights(group: Group, terms: readonly Term[], weights: readonly WeightRows[], stretch: number): Term[] {
   const { rank } = group.system;
-  const sums: Term[] = [];
   const moved = new Int32Array(rank);
+  const byCharge = new Map<string, { charge: Rational; found: LabelIndex; counts: number[] }>();
   for (const { labels, charge, multiplicity } of terms) {
     for (const { rows, charge: added, multiplicity: copies } of weights) {
       const total = charge.add(added.mul(Rational.of(stretch)));
-      if (rank === 0) {
-        sums.push(term([], total, multiplicity * copies));
-        continue;
+      let sums = byCharge.get(total.toString());
+      if (!sums) {
+        sums = { charge: total, found: new LabelIndex(rank), counts: [] };
+        byCharge.set(total.toString(), sums);
       }
-      const found = new Map<string, { labels: number[]; count: number }>();
-      for (let start = 0; start < rows.length; start += rank) {
+      const { found, counts } = sums;
+      // Without a simple part there is one empty row.
+      for (let start = 0; start === 0 || start < rows.length; start += Math.max(rank, 1)) {
         for (let i = 0; i < rank; i++) moved[i] = (labels[i] as number) + 1 + stretch * (rows[start + i] as number);
         const sign = makeDominant(group.system, moved) % 2 === 0 ? 1 : -1;
         // On a wall of the chamber the contributions cancel.
         if (moved.includes(0)) continue;
-        const key = moved.join();
-        const known = found.get(key);
-        if (known) known.count += sign;
-        else found.set(key, { labels: Array.from(moved, (label) => label - 1), count: sign });
-      }
-      for (const one of found.values()) {
-        if (one.count !== 0) sums.push(term(one.labels, total, one.count * multiplicity * copies));
+        const place = found.add(moved);
+        counts[place] = (counts[place] ?? 0) + sign * multiplicity * copies;
       }
     }
   }
-  return collect(sums);
+  return [...byCharge.values()].flatMap(({ charge, found, counts }) =>
+    counts.flatMap((count, place) => {
+      if (count === 0) return [];
+      const dominant = Array.from(found.rows.subarray(place * rank, (place + 1) * rank), (label) => label - 1);
+      return [term(dominant, charge, count)];
+    }),
+  );
 }
 
 function tooLarge(): Refusal {
