@@ -1,6 +1,7 @@
 import { Form } from '../exact/form';
 import type { FunctionAt, FunctionName } from '../functions/special-function';
 import { functions } from '../functions/table';
+import { exactOrder } from './divisor';
 
 /** Longest chain of shifts that is written out; longer ones stay special functions. */
 const MAXIMAL_STEPS = 6;
@@ -41,6 +42,19 @@ export class StepLattice {
       if (counts) return counts;
     }
     return null;
+  }
+
+  /**
+   * True unless a factor vanishes or diverges by itself, for every value of the symbols: the way between the two
+   * arguments then leads over a zero or pole of the function, and the quotient is a limit that no product gives.
+   */
+  isRegular(chain: readonly FunctionAt[]): boolean {
+    return chain.every(({ name, argument, parameters }) => {
+      const constant = stages(argument, this.geometry).find((form) => form.symbols().length === 0);
+      if (constant === undefined) return true;
+      const known = parameters.map((form) => stages(form, this.geometry).at(-1) as Form);
+      return exactOrder(name, constant, known) === 0;
+    });
   }
 }
 

@@ -1,4 +1,4 @@
-import { formDouble } from '../arithmetic/form-double';
+import { type DoubleValue, formDouble } from '../arithmetic/form-double';
 import { Form } from '../exact/form';
 import type { FunctionName } from '../functions/special-function';
 import { functions } from '../functions/table';
@@ -61,8 +61,8 @@ export interface DivisorPoint {
   readonly order: number;
 }
 
-/** Lattice points searched along a line, in steps of each kind. */
-const SEARCH = 40;
+/** Most lattice points looked at for one line; no plot can show as many. */
+const MAXIMAL_POINTS = 300_000;
 
 /**
  * Zeros and poles of f(c0 + c1 t)^power for real t in [from, to], in doubles: positions to about 1e-12 of the range.
@@ -70,8 +70,8 @@ const SEARCH = 40;
 export function divisorOnLine(
   name: FunctionName,
   parameters: readonly Form[],
-  c0: { readonly re: number; readonly im: number },
-  c1: { readonly re: number; readonly im: number },
+  c0: DoubleValue,
+  c1: DoubleValue,
   from: number,
   to: number,
 ): DivisorPoint[] {
@@ -80,22 +80,41 @@ export function divisorOnLine(
   const found: DivisorPoint[] = [];
   for (const lattice of functions[name].zeros) {
     const start = formDouble(lattice.start(parameters), () => null);
-    const steps = lattice.steps(parameters).map((step) => formDouble(step, () => null));
-    if (start === null || steps.includes(null)) continue;
+    const steps = lattice.steps(parameters).flatMap((step) => formDouble(step, () => null) ?? []);
+    if (start === null || steps.length < lattice.steps(parameters).length) continue;
     const order = lattice.kind === 'zero' ? 1 : -1;
+    const toward = between(steps);
+    const along = ({ re, im }: DoubleValue): number => re * toward.re + im * toward.im;
+    const reach = Math.max(...[from, to].map((t) => along({ re: c0.re + c1.re * t, im: c0.im + c1.im * t })));
+    const most = Math.floor(MAXIMAL_POINTS ** (1 / steps.length));
     const visit = (k: number, re: number, im: number): void => {
       const step = steps[k];
       if (!step) {
-        const t = (re * c1.re + im * c1.im) / norm;
-        const off = (im * c1.re - re * c1.im) / norm;
+        const t = ((re - c0.re) * c1.re + (im - c0.im) * c1.im) / norm;
+        const off = ((im - c0.im) * c1.re - (re - c0.re) * c1.im) / norm;
         if (Math.abs(off) <= NEAR && t >= from && t <= to) found.push({ at: t, order });
         return;
       }
-      for (let n = 0; n <= SEARCH; n++) visit(k + 1, re + n * step.re, im + n * step.im);
+      // Every step leads on in the direction `toward`, so that counts end where the line does.
+      const left = (reach - along({ re, im })) / along(step);
+      const last = Math.min(most, Math.floor(left + NEAR * (1 + Math.abs(left))));
+      for (let n = 0; n <= last; n++) visit(k + 1, re + n * step.re, im + n * step.im);
     };
-    visit(0, start.re - c0.re, start.im - c0.im);
+    visit(0, start.re, start.im);
   }
   return found;
+}
+
+/** A direction in which all steps lead: they lie in one half plane. */
+function between(steps: readonly DoubleValue[]): DoubleValue {
+  let re = 0;
+  let im = 0;
+  for (const step of steps) {
+    const size = Math.hypot(step.re, step.im);
+    re += step.re / size;
+    im += step.im / size;
+  }
+  return { re, im };
 }
 
 /** Adds up orders at points that coincide; points of total order 0 are dropped. */

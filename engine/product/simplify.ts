@@ -238,9 +238,10 @@ function pairTwo<W extends WeightSet>(
     if (Math.sign(variant.power) === Math.sign(a.power)) continue;
     const steps = lattice.decompose(a.argument.sub(variant.argument));
     if (steps === null) continue;
+    const chain = expandChain(a.name, variant.argument, a.parameters, steps);
+    if (!lattice.isRegular(chain)) continue;
     const shared = Math.min(Math.abs(a.power), Math.abs(b.power));
     const from = [...new Set([...a.from, ...b.from])];
-    const chain = expandChain(a.name, variant.argument, a.parameters, steps);
     made.push(...attach(chain, Math.sign(a.power) * shared, a, a.half, from));
     open[i] = { ...a, power: a.power - Math.sign(a.power) * shared };
     open[j] = { ...b, power: b.power - Math.sign(b.power) * shared };
@@ -262,6 +263,7 @@ function pairItself<W extends WeightSet>(open: Factor<W>[], i: number, lattice: 
     const steps = lattice.decompose(a.argument.sub(partner));
     if (steps === null) continue;
     const chain = expandChain(a.name, partner, a.parameters, steps);
+    if (!lattice.isRegular(chain)) continue;
     const left = single ? a.power % 2 : 0;
     made.push(...attach(chain, single ? (a.power - left) / 2 : a.power, a, !single, a.from));
     const root = left === 0 ? null : rootOf(chain);
