@@ -13,7 +13,7 @@ export const highlighting = styleTags({
   Operator: tags.arithmeticOperator,
   'Comparison RangeDots': tags.compareOperator,
   Bracket: tags.paren,
-  Punctuation: tags.punctuation,
+  'Comma Punctuation': tags.punctuation,
   Comment: tags.lineComment,
   Junk: tags.invalid,
   Heading: tags.heading,

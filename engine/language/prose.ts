@@ -7,8 +7,9 @@ const DOLLAR = 0x24;
 const BACKSLASH = 0x5c;
 const BACKTICK = 0x60;
 
-/** Longest formula or code span looked for inside a paragraph, so that no paragraph costs quadratic time. */
-const LONGEST_SPAN = 4000;
+/** Longest formula and code span looked for inside a paragraph, so that no paragraph costs quadratic time. */
+const LONGEST_MATH = 2000;
+const LONGEST_CODE = 500;
 
 /** The inside of a paragraph: formulas, code spans, text, and the place where it ends. */
 export const prose = new ExternalTokenizer(
@@ -42,7 +43,7 @@ function interrupts(input: InputStream, offset: number): boolean {
 function mathEnd(input: InputStream): number {
   const width = input.peek(1) === DOLLAR ? 2 : 1;
   if (width === 1 && (isBlank(input.peek(1)) || isNewline(input.peek(1)))) return 0;
-  for (let at = width; at < LONGEST_SPAN; at++) {
+  for (let at = width; at < LONGEST_MATH; at++) {
     const code = input.peek(at);
     if (code === END) return 0;
     if (code === BACKSLASH) at++;
@@ -54,7 +55,7 @@ function mathEnd(input: InputStream): number {
 
 function codeEnd(input: InputStream): number {
   const width = backticks(input, 0);
-  for (let at = width; at < LONGEST_SPAN; ) {
+  for (let at = width; at < LONGEST_CODE; ) {
     const run = backticks(input, at);
     if (run === width) return at + run;
     if (run === 0 && (input.peek(at) === END || endsParagraphAt(input, at))) return 0;
@@ -65,7 +66,7 @@ function codeEnd(input: InputStream): number {
 
 function backticks(input: InputStream, offset: number): number {
   let length = 0;
-  while (length < LONGEST_SPAN && input.peek(offset + length) === BACKTICK) length++;
+  while (length < LONGEST_CODE && input.peek(offset + length) === BACKTICK) length++;
   return length;
 }
 
@@ -75,12 +76,12 @@ function endsParagraphAt(input: InputStream, offset: number): boolean {
   return newline > 0 && interrupts(input, offset + newline);
 }
 
-/** Text up to the next formula, code span, or end of the paragraph; at least one character. */
+/** Text up to the next formula, code span, or end of the paragraph; backticks that open nothing belong to it. */
 function textEnd(input: InputStream): number {
-  let at = 0;
+  let at = Math.max(backticks(input, 0), input.next === DOLLAR ? 1 : 0);
   for (;;) {
     const code = input.peek(at);
-    if (code === END || (at > 0 && (code === DOLLAR || code === BACKTICK))) return at;
+    if (code === END || code === DOLLAR || code === BACKTICK) return at;
     const newline = newlineLength(input, at);
     if (newline > 0) {
       at += newline;

@@ -34,6 +34,7 @@ const KIND_OF_NODE: ReadonlyMap<number, TokenKind> = new Map([
   [term.Comparison, 'comparison'],
   [term.RangeDots, 'range'],
   [term.Bracket, 'bracket'],
+  [term.Comma, 'punctuation'],
   [term.Punctuation, 'punctuation'],
   [term.Junk, 'junk'],
   ...[
