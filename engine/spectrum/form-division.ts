@@ -63,6 +63,29 @@ function rootOfTerm(term: Term): Form | null {
   return asForm({ coefficient, factors: term.factors.map(({ atom, power }) => ({ atom, power: power / 2 })) });
 }
 
+/** The form with squares of square roots written out: sqrt(x)^2 is x. */
+export function reduceRoots(form: Form): Form {
+  const isHigh = (term: Term): boolean => term.factors.some(({ atom, power }) => isRoot(atom) && power > 1);
+  if (!form.terms.some(isHigh)) return form;
+  return Form.sum(
+    form.terms.map((term) => {
+      let product = Form.gaussian(term.coefficient);
+      for (const { atom, power } of term.factors) {
+        if (!isRoot(atom) || power < 2) product = product.mul(Form.atom(atom, power));
+        else {
+          product = product.mul((atom.arguments[0] as Form).pow(Math.floor(power / 2)));
+          if (power % 2 === 1) product = product.mul(Form.atom(atom));
+        }
+      }
+      return product;
+    }),
+  );
+}
+
+function isRoot(atom: Atom): atom is Extract<Atom, { kind: 'call' }> {
+  return atom.kind === 'call' && atom.name === 'sqrt';
+}
+
 /** The form with one term. */
 export function asForm(term: Term): Form {
   let form = Form.gaussian(term.coefficient);

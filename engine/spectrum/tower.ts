@@ -127,7 +127,10 @@ export type RefusalCode =
   | 'spectrum-names-unset'
   | 'spectrum-undefined'
   | 'spectrum-too-far'
-  | 'spectrum-digits';
+  | 'spectrum-digits'
+  | 'closed-zero-mode'
+  | 'closed-unknown'
+  | 'closed-unconfirmed';
 
 export type WarningCode =
   | 'zero-mode'
