@@ -1,6 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
 import { levels } from '../../engine/theory/checks/level';
+import type { Theory, TheoryGroup } from '../../engine/theory/theory';
 import { consistencyRows } from './consistency-rows';
 import { says, theoryOf, verdict } from './theory-text';
 
@@ -120,3 +121,72 @@ test('the order of groups and multiplets does not matter', () => {
     { numRuns: 40 },
   );
 });
+
+// The condition in full: K_eff is an integer on all pairs of the cocharacter basis, half of it on the simple coroots;
+// summed over every weight in printed coordinates.
+test('the sums for each group say the same as the whole lattice', () => {
+  const cells: Record<string, string[]> = {
+    'U(2)': ['fund', 'anti', 'det', 'sym2', 'sym2.det^-1', 'adj', '(3,0)'],
+    'U(3)': ['fund', 'alt2', 'det^2', 'adj', 'sym2'],
+    'SU(4)': ['fund', 'alt2', 'sym2'],
+    'SO(3)': ['vector', '[4]'],
+    'Spin(3)': ['[1]', '[2]', '[3]'],
+    'SO(4)': ['[2,0]', '[0,2]', '[1,1]', '[3,1]'],
+    'Spin(4)': ['[1,0]', '[0,1]', '[1,1]', '[3,0]'],
+    'SO(5)': ['vector', 'adj'],
+    'Spin(5)': ['spinor', 'vector'],
+    'Spin(6)': ['spinor', 'vector'],
+    'USp(6)': ['fund', 'alt3', 'alt2'],
+    G2: ['fund'],
+  };
+  const cases = fc.constantFrom(...Object.keys(cells)).chain((group) =>
+    fc.record({
+      group: fc.constant(group),
+      matter: fc.array(fc.constantFrom(...(cells[group] as string[])), { maxLength: 3 }),
+      level: fc.integer({ min: -6, max: 6 }),
+      abelian: fc.integer({ min: -6, max: 6 }),
+    }),
+  );
+  fc.assert(
+    fc.property(cases, ({ group, matter, level, abelian }) => {
+      const options = `level ${level}/4${group.startsWith('U(') ? `, abelian ${abelian}/2` : ''}`;
+      const theory = theoryOf([
+        `gauge G = ${group}, ${options}`,
+        'matter G R',
+        ...matter.map((cell, k) => `chiral q${k} ${cell} 1/2`),
+      ]);
+      expect(verdict(levels, theory)).toBe(onWholeLattice(theory) ? 'holds' : 'fails');
+    }),
+    { numRuns: 150 },
+  );
+});
+
+function onWholeLattice(theory: Theory): boolean {
+  const { group, level, abelianLevel } = theory.groups[0] as TheoryGroup;
+  const k = level?.toRational()?.toNumber() ?? 0;
+  const own = abelianLevel?.toRational()?.toNumber() ?? k;
+  const numbers = (vector: readonly { toNumber(): number }[]) => vector.map((entry) => entry.toNumber());
+  const dot = (a: readonly number[], b: readonly number[]) => a.reduce((sum, x, i) => sum + x * (b[i] as number), 0);
+  const sum = (a: readonly number[]) => a.reduce((total, x) => total + x, 0);
+  const effective = (x: readonly number[], y: readonly number[]): number => {
+    let total = k * group.levelScale.toNumber() * dot(x, y);
+    if (abelianLevel !== null) total += ((own - k) / x.length) * sum(x) * sum(y);
+    for (const { representations } of theory.multiplets) {
+      for (const orbit of representations[0]?.orbits() ?? []) {
+        const { denominator, vectors, width } = orbit.vectors();
+        for (let row = 0; row < vectors.length; row += width) {
+          const weight = Array.from(vectors.subarray(row, row + width), (entry) => entry / denominator);
+          total += (orbit.multiplicity * dot(weight, x) * dot(weight, y)) / 2;
+        }
+      }
+    }
+    return total;
+  };
+  const isInteger = (value: number) => Math.abs(value - Math.round(value)) < 1e-9;
+  const basis = group.cocharacters.map(numbers);
+  const coroots = group.simpleCoroots.map(numbers);
+  return (
+    basis.every((x) => basis.every((y) => isInteger(effective(x, y)))) &&
+    coroots.every((coroot) => isInteger(effective(coroot, coroot) / 2))
+  );
+}

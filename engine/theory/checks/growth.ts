@@ -22,7 +22,8 @@ export interface Growth {
   readonly scale: number;
   readonly exponent: (point: readonly number[], sums: readonly WeightSums[]) => number;
   readonly monopole: (point: readonly number[], sums: readonly WeightSums[]) => number;
-  /** K_n on the lattice basis, times some positive number. */
+  /** K_n on the lattice basis, times `phaseScale`. */
+  readonly phaseScale: number;
   readonly phase: (point: readonly number[], sums: readonly WeightSums[]) => number[];
   /** Whether an imaginary FI parameter contributes. */
   readonly imaginaryFi: boolean;
@@ -61,7 +62,7 @@ export function growthOf(theory: Theory, branch: CoulombBranch): Growth {
     monopole,
     exponent: (point, sums) =>
       monopole(point, sums) + tilted.reduce((sum, entry, k) => sum + entry * (point[k] as number), 0),
-    phase: phaseOf(theory, branch),
+    ...phaseOf(theory, branch),
     imaginaryFi: tilted.some((entry) => entry !== 0),
   };
 }
@@ -94,7 +95,7 @@ function tiltOf(theory: Theory, fi: Form): Rational | number {
   return (2 * im) / (formDouble(q, () => null)?.re ?? Number.NaN);
 }
 
-function phaseOf(theory: Theory, branch: CoulombBranch): Growth['phase'] {
+function phaseOf(theory: Theory, branch: CoulombBranch): Pick<Growth, 'phase' | 'phaseScale'> {
   const bare = levelMatrix(theory, branch);
   const denominator = bare.flat().reduce((least, { denominator: d }) => leastMultiple(least, d), 1n);
   const { unit, matter } = branch;
@@ -102,13 +103,16 @@ function phaseOf(theory: Theory, branch: CoulombBranch): Growth['phase'] {
     row.map((entry) => 2 * unit * unit * Number((entry.numerator * denominator) / entry.denominator)),
   );
   const share = matter.map(({ matter: one, copies }) => (one.withDual ? 0 : copies * Number(denominator)));
-  return (point, sums) =>
-    matrix.map((row, k) => {
-      let total = 0;
-      for (const [l, entry] of row.entries()) total += entry * (point[l] as number);
-      for (const [m, one] of sums.entries()) total += (share[m] as number) * (one.moment[k] as number);
-      return total;
-    });
+  return {
+    phaseScale: 2 * unit * unit * Number(denominator),
+    phase: (point, sums) =>
+      matrix.map((row, k) => {
+        let total = 0;
+        for (const [l, entry] of row.entries()) total += entry * (point[l] as number);
+        for (const [m, one] of sums.entries()) total += (share[m] as number) * (one.moment[k] as number);
+        return total;
+      }),
+  };
 }
 
 /** The form of all levels, mixed ones included, on the lattice bases. */
