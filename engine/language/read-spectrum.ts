@@ -13,9 +13,7 @@ import { SPECTRUM_LINE_WORDS } from './words';
 export function readSpectrum(piece: WorkPiece, reading: Reading): SpectrumBlock | null {
   const { mark } = reading;
   const [first = [], ...rest] = piece.lines;
-  const head = new TokenReader(first, piece.wordSpan, reading);
-  const name = head.name('name-missing', 'the name of the spectrum');
-  if (name) head.expectEnd('the end of the line');
+  const name = new TokenReader(first, piece.wordSpan, reading).blockName('the name of the spectrum');
   const indices = new Map<string, IndexRange>();
   const towers: TowerRow[] = [];
   for (const line of rest) {

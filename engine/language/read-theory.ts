@@ -18,9 +18,7 @@ import { GROUP_OPTIONS, THEORY_LINE_WORDS, type TheoryLineWord } from './words';
 export function readTheory(piece: WorkPiece, reading: Reading): TheoryBlock | null {
   const { mark } = reading;
   const [first = [], ...rest] = piece.lines;
-  const head = new TokenReader(first, piece.wordSpan, reading);
-  const name = head.name('name-missing', 'the name of the theory');
-  if (name) head.expectEnd('the end of the line');
+  const name = new TokenReader(first, piece.wordSpan, reading).blockName('the name of the theory');
   const draft: TheoryDraft = {
     sphere: null,
     groups: new Map(),

@@ -124,6 +124,18 @@ export class TokenReader {
     return { name: spellName(token.text), span: { from: token.from, to: token.to } };
   }
 
+  /** The name of a block, alone on its line; what touches it without being part of it is reported. */
+  blockName(expected: string): Name | null {
+    const name = this.name('name-missing', expected);
+    if (!name) return null;
+    if (this.tight) {
+      this.takeTouching();
+      const span = { from: name.span.from, to: this.last.to };
+      this.report('block-name', span, { word: this.textFrom(span.from) });
+    } else this.expectEnd('the end of the line');
+    return name;
+  }
+
   /** A name that may stand in expressions: words with a meaning there are refused. */
   symbol(missing: SyntaxCode, expected: string): Name | null {
     const name = this.name(missing, expected);

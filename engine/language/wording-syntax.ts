@@ -29,6 +29,7 @@ const general = {
   'unexpected-text': (d) => `\`${d.word}\` cannot stand here; expected ${d.expected}.`,
   'line-ends': (d) => `The line ends too early; expected ${d.expected}.`,
   'name-missing': (d) => `A name is missing after \`${d.after}\`: a letter, then letters, digits, \`_\` or \`'\`.`,
+  'block-name': (d) => `\`${d.word}\` is no name: a letter, then letters, digits, \`_\` or \`'\`.`,
   'reserved-name': (d) =>
     `\`${d.name}\` has a meaning in expressions or requests and cannot be a name. Choose another, such as \`${d.name}1\`.`,
   'comma-missing': (d) => `A comma is missing before \`${d.word}\`.`,

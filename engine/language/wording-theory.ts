@@ -7,7 +7,6 @@ export const theoryWording = {
   'value-undefined': (d) =>
     `\`${d.text}\` is undefined at the values of its parameters: it divides by zero. Change one of them.`,
   range: (d) => `The range of \`${d.name}\` has to run from a real number to a larger one.`,
-  'sphere-not-offered': (d) => `\`${d.sphere}\` is not offered yet; theories can be put on ${d.offered}.`,
   'sphere-option': (d) => `\`${d.name}\` is no parameter of ${d.sphere}; it takes ${d.allowed}.`,
   'squashing-zero': (d) =>
     `\`${d.name}\` is zero: the squashing has to be a positive number, such as \`${d.name} = 5/4\`.`,
@@ -44,5 +43,7 @@ export const theoryWording = {
     `The R-charge \`${d.text}\` uses \`${d.name}\`, which has no value. Add \`let ${d.name} = 1/2\` above.`,
   'r-charge-fixed': (d) =>
     `The R-charge \`${d.text}\` is not possible here: this multiplet has R = ${d.value}. Leave it at that.`,
+  'half-hyper': (d) =>
+    `A half-hyper needs a pseudoreal representation; the weights of \`${d.name}\` do not come in pairs. Write \`hyper\`.`,
   'subject-unknown': (d) => `There is no ${d.kind} called \`${d.name}\`; there is ${d.known}.`,
 } satisfies Record<string, Wording>;

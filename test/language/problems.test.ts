@@ -74,7 +74,9 @@ const parameters: Cases = {
 const theories: Cases = {
   theory: ['name-missing 1:1'],
   'theory\n  gauge': ['name-missing 1:1', 'group-name-missing 2:3'],
-  'theory one-loop\n  sphere S3': ['unexpected-text 1:11'],
+  'theory one-loop\n  sphere S3': ['block-name 1:8'],
+  'theory seiberg-dual(2) A\n  sphere S3': ['block-name 1:8'],
+  'theory A B\n  sphere S3': ['unexpected-text 1:10'],
   'theory A': ['sphere-missing 1:8'],
   'theory A\n  spere S3': ['sphere-missing 1:8', 'theory-line-unknown 2:3'],
   [`${theory()}\n${theory()}`]: ['block-twice 3:8'],
