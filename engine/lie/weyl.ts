@@ -105,6 +105,7 @@ export function orbitLabels(system: RootSystem, dominant: ArrayLike<number>): In
         }
       }
       if (!kept) continue;
+      if (end === rows.length) throw new Error(`Orbit enumeration gave more than ${size} weights.`);
       rows.copyWithin(end, row, row + rank);
       reflect(system, rows, i, end);
       end += rank;

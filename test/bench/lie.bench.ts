@@ -2,6 +2,7 @@ import { execFileSync } from 'node:child_process';
 import { freudenthal } from '../../engine/lie/character';
 import { rootSystem } from '../../engine/lie/root-system';
 import { type SimpleType, typeName } from '../../engine/lie/simple-type';
+import { median } from './timing';
 
 /** One irreducible representation, timed here and, where it is installed, by GAP 4 in the same run. */
 export interface LieMeasurement {
@@ -89,11 +90,6 @@ function ours({ type, labels }: (typeof CASES)[number]): { milliseconds: number;
     ...character.labels.subarray(k * type.rank, (k + 1) * type.rank),
   ]);
   return { milliseconds, character: canonical(rows, [...character.multiplicities]) };
-}
-
-function median(values: readonly number[]): number {
-  const sorted = [...values].sort((a, b) => a - b);
-  return sorted[Math.floor(sorted.length / 2)] as number;
 }
 
 /** Times every case in alternating rounds; takes some ten seconds where GAP is installed. */
