@@ -54,31 +54,33 @@ describe.each(all.map((declared) => [declared.name, declared] as const))('%s', (
     expect(declared.reflections.length + declared.shifts.length).toBeGreaterThan(0);
   });
 
-  test.runIf(!isDiscrete(declared))('zeros and poles, with their orders', () => {
-    const counts = fc.array(fc.integer({ min: 0, max: 2 }), { minLength: 3, maxLength: 3 });
-    const lattice = fc.nat().map((k) => declared.zeros[k % Math.max(1, declared.zeros.length)]);
-    fc.assert(
-      fc.property(lattice, counts, parameters, (one, at, periods) => {
-        const point = one ? latticePoint(one, periods, at) : Form.zero;
-        const order = exactOrder(declared.name, point, periods);
-        if (one) expect(Math.sign(order)).toBe(one.kind === 'zero' ? 1 : -1);
-        checkOrder(declared, point, periods, order);
-      }),
-      { numRuns: 12 },
-    );
-  });
+  if (!isDiscrete(declared)) {
+    test('zeros and poles, with their orders', () => {
+      const counts = fc.array(fc.integer({ min: 0, max: 2 }), { minLength: 3, maxLength: 3 });
+      const lattice = fc.nat().map((k) => declared.zeros[k % Math.max(1, declared.zeros.length)]);
+      fc.assert(
+        fc.property(lattice, counts, parameters, (one, at, periods) => {
+          const point = one ? latticePoint(one, periods, at) : Form.zero;
+          const order = exactOrder(declared.name, point, periods);
+          if (one) expect(Math.sign(order)).toBe(one.kind === 'zero' ? 1 : -1);
+          checkOrder(declared, point, periods, order);
+        }),
+        { numRuns: 12 },
+      );
+    });
 
-  test.runIf(!isDiscrete(declared))('no zeros or poles besides the declared ones', () => {
-    // Halves of the steps: the points beside which a zero would be forgotten first.
-    const halves = fc.tuple(fc.integer({ min: -8, max: 8 }), fc.integer({ min: -8, max: 8 }));
-    fc.assert(
-      fc.property(halves, parameters, ([re, im], periods) => {
-        const point = Form.ratio(re, 4).add(Form.i.mul(Form.ratio(im, 4)));
-        checkOrder(declared, point, periods, exactOrder(declared.name, point, periods));
-      }),
-      { numRuns: 12 },
-    );
-  });
+    test('no zeros or poles besides the declared ones', () => {
+      // Halves of the steps: the points beside which a zero would be forgotten first.
+      const halves = fc.tuple(fc.integer({ min: -8, max: 8 }), fc.integer({ min: -8, max: 8 }));
+      fc.assert(
+        fc.property(halves, parameters, ([re, im], periods) => {
+          const point = Form.ratio(re, 4).add(Form.i.mul(Form.ratio(im, 4)));
+          checkOrder(declared, point, periods, exactOrder(declared.name, point, periods));
+        }),
+        { numRuns: 12 },
+      );
+    });
+  }
 
   test('a logarithm of twice the digits lies within the error', () => {
     fc.assert(
