@@ -46,12 +46,11 @@ describe.each(all.map((declared) => [declared.name, declared] as const))('%s', (
   test('reflections and shifts', () => {
     fc.assert(
       fc.property(anyPoint, parameters, (x, periods) => {
-        checkReflections(declared, x, periods);
-        checkShifts(declared, x, periods);
+        expect(() => checkReflections(declared, x, periods)).not.toThrow();
+        expect(() => checkShifts(declared, x, periods)).not.toThrow();
       }),
       { numRuns: 25 },
     );
-    expect(declared.reflections.length + declared.shifts.length).toBeGreaterThan(0);
   });
 
   if (!isDiscrete(declared)) {
