@@ -31,7 +31,7 @@ const GUARD = 40;
  * used for Re x <= 0, the other side by s_b(x) s_b(-x) = 1. The logarithm is the sum of the principal logarithms of the factors: the
  * analytic branch where e^(2 pi b x) and e^(2 pi x/b) do not exceed 1 in size, elsewhere a logarithm of the right number.
  * Error, argument and refusals as in logDoubleSine, but zeros and poles are not named: 'indistinct' there. Null where more than 20 000
- * factors are needed. Checked against mpmath by the functional equation and for real b by the other routes' limit (see the test).
+ * factors are needed. Checked against mpmath's quadrature of the defining integral at four complex b (see the test).
  * Source: Faddeev, Kashaev and Volkov 2001 (hep-th/0006156).
  */
 export function logDoubleSineByProduct(x: FixedComplex, b: ComplexPeriod, bits: number): PreciseLog | null {

@@ -135,6 +135,17 @@ describe('errors stay small', () => {
   });
 });
 
+test('balls as wide as their values: the product of the errors counts', () => {
+  const wide = (re: bigint, error: bigint): Ball => ({ re, im: 0n, bits: 0, error });
+  expect(multiplyBalls(wide(0n, 5n), wide(0n, 7n), 60).error).toBeGreaterThanOrEqual(35n);
+  // (10 + 4)(20 + 15) = 490.
+  const product = multiplyBalls(wide(10n, 4n), wide(20n, 15n), 60);
+  expect(product.re + product.error).toBeGreaterThanOrEqual(490n);
+  // (10 + 4)/(20 - 15) = 2.8.
+  const quotient = divideBalls(wide(10n, 4n), wide(20n, 15n), 60);
+  expect(holds(quotient, divideBalls(exactBall(14n), exactBall(5n), PRECISE))).toBe(true);
+});
+
 test('refusals: 0 in the divisor or the logarithm, a ball across the cut, an unknown exponent', () => {
   const aroundZero: Ball = { re: 3n, im: 4n, bits: 10, error: 5n };
   expect(ballHoldsZero(aroundZero)).toBe(true);

@@ -127,6 +127,24 @@ describe('laws of log s_b', () => {
     );
   });
 
+  test('an argument off by an ulp in both parts stays within the error', () => {
+    const far = fc.record({ re: coordinate(400), im: coordinate(4) });
+    fc.assert(
+      fc.property(anyPeriod, fc.oneof(anyPoint, far), fc.constantFrom(-1n, 1n), (b, point, step) => {
+        fc.pre(point.re !== 0);
+        const x = fixed(point);
+        const value = valueAt(x, b);
+        const moved = valueAt({ re: x.re + step, im: x.im + 1n }, b);
+        // The error covers the method as well; one ulp each is the rounding of the two values.
+        expectClose(value, moved, value.error + 1n);
+        // And it is not idle: at most some ten times the change, or a few Q.
+        const change = Math.hypot(Number(value.re - moved.re), Number(value.im - moved.im));
+        expect(Number(value.error)).toBeLessThan(50 * (change + 2 + b.approx + 1 / b.approx));
+      }),
+      { numRuns: 80 },
+    );
+  });
+
   test('a wrong law is caught', () => {
     const b = Object.values(periods)[1] as ExactPeriod;
     const x = fixed({ re: 0.3, im: 0.2 });
