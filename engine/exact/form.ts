@@ -332,6 +332,7 @@ function reduceCall(name: CallName, args: readonly Form[]): Form {
   const q = x.toRational();
   if (name === 'inverse') return x.inverse();
   if (name === 'abs' && q) return Form.number(q.abs());
+  if (name === 'abs' && x.terms[0]?.coefficient.re.sign() === -1) return Form.call('abs', x.neg());
   if (name === 'log' && q?.equals(Rational.one)) return Form.zero;
   if (name === 'sqrt' && q) return rootOfRational(q);
   if (name === 'exp' && q?.equals(Rational.one)) return Form.atom({ kind: 'constant', name: 'e', key: 'e' });

@@ -8,7 +8,8 @@ export const exponential: SpecialFunction = {
   name: 'exponential',
   spelling: '',
   parameters: [],
-  reflections: [{ center: () => Form.zero, power: -1, sign: 1 }],
+  reflections: [],
+  additive: (sum) => sum,
   shifts: [],
   zeros: [],
   growth: [

@@ -40,7 +40,7 @@ export function hyperbolicArgument(form: Form, print: Printer): string {
 export function plus(lead: string, form: Form, print: Printer): string {
   if (form.isZero()) return lead;
   const text = realFirst(form, print);
-  return text.startsWith('-') ? `${lead}${text}` : `${lead}+${text}`;
+  return /^(-|\\pm|\\mp)/.test(text) ? `${lead}${text}` : `${lead}+${text}`;
 }
 
 /** A form with its real terms before the imaginary ones: `1-r+i\sigma`. */
@@ -49,7 +49,7 @@ export function realFirst(form: Form, print: Printer): string {
   const rest = form.sub(Form.sum(real));
   if (real.length === 0 || rest.isZero()) return print.form(form);
   const tail = print.form(rest);
-  return `${print.form(Form.sum(real))}${tail.startsWith('-') ? '' : '+'}${tail}`;
+  return `${print.form(Form.sum(real))}${/^(-|\\pm|\\mp)/.test(tail) ? '' : '+'}${tail}`;
 }
 
 /** `mb+nb^{-1}` or `m+n`: indices times periods; a period 1 is not written, rational ones stand in front. */

@@ -10,6 +10,8 @@ export type FunctionName =
   | 'gamma'
   | 'upsilon'
   | 'tripleSine'
+  | 'fluxGamma'
+  | 'sign'
   | 'linear'
   | 'exponential';
 
@@ -122,6 +124,11 @@ export interface SpecialFunction {
   readonly parameters: readonly string[];
   readonly reflections: readonly Reflection[];
   readonly shifts: readonly Shift[];
+  /**
+   * Where f(x) f(y) = f(x + y) and f(0) = 1: brings a sum of arguments to its shortest form with the same value.
+   * Factors of such a function are collected into one.
+   */
+  readonly additive?: (sum: Form) => Form;
   /** The exact value at special arguments; null where there is none to give. */
   readonly exactValue?: (argument: Form, parameters: readonly Form[]) => Form | null;
   readonly zeros: readonly Lattice[];

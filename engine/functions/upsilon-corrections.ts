@@ -1,6 +1,6 @@
 import { divideFixed, multiplyFixed } from '../arithmetic/fixed';
 import { piFixed } from '../arithmetic/fixed-constants';
-import { evenBernoulliNumbers } from './bernoulli';
+import { twiceEvenZeta } from './even-zeta';
 
 /**
  * The end point corrections of the midpoint rule for log Upsilon as numbers C_1, ..., C_{J+1} with
@@ -71,22 +71,8 @@ function multiplySeries(a: readonly bigint[], b: readonly bigint[], count: numbe
   });
 }
 
-/** 2 eta(2k) = 2 (1 - 2^{1-2k}) zeta(2k), k = 0, 1, ...; zeta(2k) = |B_{2k}| (2 pi)^{2k}/(2 (2k)!) (DLMF 25.6.2). */
+/** 2 eta(2k) = 2 (1 - 2^{1-2k}) zeta(2k), k = 0, ..., count - 1. */
 function twiceEta(count: number, bits: number): readonly bigint[] {
-  const working = bits + 32;
-  const square = (4n * piFixed(working) * piFixed(working)) >> BigInt(working);
-  const bernoulli = evenBernoulliNumbers(count);
-  const list = [1n << BigInt(bits)];
-  let power = 1n << BigInt(working);
-  let factorial = 1n;
-  for (let k = 1; k < count; k++) {
-    const twice = BigInt(2 * k);
-    power = (power * square) >> BigInt(working);
-    factorial *= twice * (twice - 1n);
-    const number = bernoulli[k - 1] as { readonly numerator: bigint; readonly denominator: bigint };
-    const size = number.numerator < 0n ? -number.numerator : number.numerator;
-    const value = (power * size) / (number.denominator * factorial);
-    list.push((value - (value >> (twice - 1n))) >> 32n);
-  }
-  return list;
+  const zeta = twiceEvenZeta(Math.max(1, count - 1), bits);
+  return [1n << BigInt(bits), ...zeta.map((value, index) => value - (value >> BigInt(2 * index + 1)))];
 }

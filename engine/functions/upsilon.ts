@@ -21,6 +21,7 @@ export const upsilon: SpecialFunction = {
   spelling: 'upsilon',
   parameters: ['b'],
   reflections: [{ center: ([b]) => sum(b as Form).mul(HALF), power: 1, sign: 1 }],
+  exactValue: (x, [b]) => (x.equals(half(b as Form)) ? Form.one : null),
   shifts: [
     { step: ([b]) => b as Form, quotient: (x, [b]) => quotient(x, b as Form, Form.call('log', b as Form)) },
     {

@@ -4,13 +4,12 @@ import type { ModeFactor, ModeTower } from '../spheres/sphere';
 import type { TheoryGroup } from '../theory/theory';
 import { formInParentheses, formLatex } from './form';
 import type { Piece } from './product';
-import { printWeights } from './weights';
+import { NO_WEIGHT, printWeights } from './weights';
 
 /** Towers of modes in LaTeX: for each weight a product over the level n, fermions above bosons. */
 export function modesLatex(groups: readonly TheoryGroup[], towers: readonly ModeTower[]): Piece[] {
   return towers.flatMap((tower) => {
-    const printed =
-      tower.weights === null ? [{ sign: '', weight: Form.zero }] : printWeights(groups, tower.weights, tower.half);
+    const printed = tower.weights === null ? [NO_WEIGHT] : printWeights(groups, tower.weights, tower.half);
     return printed.map(({ sign, weight }) => ({
       latex: sign + towerLatex(tower, weight),
       from: tower.from,

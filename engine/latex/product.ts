@@ -1,11 +1,11 @@
-import { Form } from '../exact/form';
-import type { Notation, Printer } from '../functions/special-function';
+import type { Form } from '../exact/form';
+import type { FunctionAt, Notation, Printer } from '../functions/special-function';
 import { functions } from '../functions/table';
-import { atWeight, type Factor, WEIGHT } from '../product/factor';
+import { atWeight, type Factor, FLUX, WEIGHT } from '../product/factor';
 import type { TheoryGroup } from '../theory/theory';
 import type { TheoryWeights } from '../theory/weights';
 import { formLatex } from './form';
-import { printWeights } from './weights';
+import { NO_WEIGHT, type PrintedWeights, printWeights } from './weights';
 
 /** A stretch of a formula and the multiplets it stems from. */
 export interface Piece {
@@ -48,25 +48,27 @@ function gatherPieces(product: readonly Factor<TheoryWeights>[]): Factor<TheoryW
 
 function pieceLatex(groups: readonly TheoryGroup[], factors: readonly Factor<TheoryWeights>[], style: Style): Piece[] {
   const first = factors[0] as Factor<TheoryWeights>;
-  const printed =
-    first.weights === null ? [{ sign: '', weight: Form.zero }] : printWeights(groups, first.weights, first.half);
+  const printed = first.weights === null ? [NO_WEIGHT] : printWeights(groups, first.weights, first.half);
   const expanded = style.kind === 'modes' ? null : expandedLatex(factors, style);
-  return printed.map(({ sign, weight }) => ({
-    latex: sign + factorsLatex(factors, (argument) => atPrinted(argument, weight), style),
+  return printed.map((weight) => ({
+    latex: weight.sign + factorsLatex(factors, (form) => atPrinted(form, weight), style),
     from: first.from,
     expanded,
   }));
 }
 
-function atPrinted(argument: Form, weight: Form): Form {
-  return argument.substitute((name) => (name === WEIGHT ? weight : null));
+function atPrinted(form: Form, { weight, flux }: PrintedWeights): Form {
+  return form.substitute((name) => (name === WEIGHT ? weight : name === FLUX ? flux : null));
 }
 
 function factorsLatex(factors: readonly Factor[], at: (argument: Form) => Form, style: Style): string {
   const above: Single[] = [];
   const below: Single[] = [];
   for (const factor of factors) {
-    const latex = functionLatex(factor, at(factor.argument), style);
+    const latex = functionLatex(
+      { ...factor, argument: at(factor.argument), parameters: factor.parameters.map(at) },
+      style,
+    );
     (factor.power < 0 ? below : above).push({ latex, power: Math.abs(factor.power) });
   }
   return quotient(above, below);
@@ -87,7 +89,8 @@ interface Single {
   readonly power: number;
 }
 
-function functionLatex(factor: Factor, argument: Form, style: Style): string {
+function functionLatex(factor: FunctionAt, style: Style): string {
+  const { argument } = factor;
   const declared = functions[factor.name];
   if (style.kind === 'modes' && declared.modes !== null) return declared.modes(argument, factor.parameters, printer);
   const index = style.kind === 'function' && !declared.elementary ? style.notation : 0;

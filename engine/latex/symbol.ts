@@ -13,6 +13,7 @@ const OWN: Readonly<Record<string, string>> = {
   '@w1': '\\omega_1',
   '@w2': '\\omega_2',
   '@w3': '\\omega_3',
+  '@W': '|\\omega|',
 };
 
 /**

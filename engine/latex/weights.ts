@@ -11,7 +11,12 @@ export interface PrintedWeights {
   readonly sign: string;
   /** w.sigma + w.m with indexed coordinates, as a form in symbols made for printing. */
   readonly weight: Form;
+  /** w.n with indexed fluxes. */
+  readonly flux: Form;
 }
+
+/** The weight where there is none: one factor without product sign. */
+export const NO_WEIGHT: PrintedWeights = { sign: '', weight: Form.zero, flux: Form.zero };
 
 /**
  * Index letters, a different run for each group: i is left to the imaginary unit, and letters that name masses and
@@ -25,13 +30,17 @@ export function printWeights(
   weights: TheoryWeights,
   half: boolean,
 ): readonly PrintedWeights[] {
-  let printed: PrintedWeights[] = [{ sign: '', weight: Form.zero }];
+  let printed: PrintedWeights[] = [NO_WEIGHT];
   weights.parts.forEach(({ group, orbit }, k) => {
     const patterns = half && k === 0 ? orbit.halfPatterns() : orbit.patterns();
     printed = printed.flatMap((before) =>
       patterns.map((pattern) => {
         const part = printPattern(groups[group] as TheoryGroup, group, pattern);
-        return { sign: joinSigns(before.sign, part.sign), weight: before.weight.add(part.weight) };
+        return {
+          sign: joinSigns(before.sign, part.sign),
+          weight: before.weight.add(part.weight),
+          flux: before.flux.add(part.flux),
+        };
       }),
     );
   });
@@ -47,28 +56,46 @@ const PLUS_MINUS = '\\prod_{\\pm}';
 function printPattern(group: TheoryGroup, place: number, pattern: IndexPattern): PrintedWeights {
   const letters = LETTERS[place % LETTERS.length] as string;
   const letter = new Map(pattern.indices.map(({ name }, k) => [name, letters.charAt(k)]));
-  const terms = pattern.terms.map((term) => {
-    const symbol = termSymbol(group, place, term, letter);
-    const signed = term.sign === 'either' ? symbol.mul(Form.symbol(EITHER_SIGN)) : symbol;
-    return signed.scale(term.coefficient);
-  });
-  return { sign: indexSigns(group, pattern, letter) + signChoices(pattern), weight: Form.sum(terms) };
+  const sum = (stem: string): Form =>
+    Form.sum(
+      pattern.terms.map((term) => {
+        const symbol = termSymbol(group, place, term, letter, stem);
+        const signed = term.sign === 'either' ? symbol.mul(Form.symbol(EITHER_SIGN)) : symbol;
+        return signed.scale(term.coefficient);
+      }),
+    );
+  return {
+    sign: indexSigns(group, pattern, letter) + signChoices(pattern),
+    weight: sum(stemOf(group)),
+    flux: group.role === 'gauge' ? sum(fluxStem(group)) : Form.zero,
+  };
 }
 
 /** sigma_a for an index, sigma_3 for a coordinate, tr sigma for the sum of all. */
-function termSymbol(group: TheoryGroup, place: number, term: PatternTerm, letter: ReadonlyMap<string, string>): Form {
-  const stem = stemOf(group);
+function termSymbol(
+  group: TheoryGroup,
+  place: number,
+  term: PatternTerm,
+  letter: ReadonlyMap<string, string>,
+  stem: string,
+): Form {
   const symbol = (name: string): Form => Form.symbol(placedName(place, name));
   if (term.kind === 'index') return symbol(`${stem}_${letter.get(term.index) ?? term.index}`);
-  if (term.kind === 'coordinate') return symbol(group.coordinates[term.coordinate] as string);
+  const numbered = (k: number): string => (group.coordinates.length === 1 ? stem : `${stem}${k + 1}`);
+  if (term.kind === 'coordinate') return symbol(numbered(term.coordinate));
   if (term.range === group.coordinates.length) return symbol(`${TRACE}${stem}`);
-  return Form.sum(group.coordinates.slice(term.offset, term.offset + term.range).map(symbol));
+  return Form.sum(Array.from({ length: term.range }, (_, k) => symbol(numbered(term.offset + k))));
 }
 
 /** The name that all coordinates of a group share. */
 export function stemOf(group: TheoryGroup): string {
   const first = group.coordinates[0] as string;
   return group.coordinates.length === 1 ? first : first.replace(/\d+$/, '');
+}
+
+/** Fluxes are printed as n, n', ..., with the primes of the group. */
+export function fluxStem(group: TheoryGroup): string {
+  return (group.fluxes[0] ?? 'flux').replace(/^flux('*)\d*$/, 'n$1');
 }
 
 /** Product signs for the indices: ranges where an index is free, relations where they are related. */

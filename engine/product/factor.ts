@@ -40,7 +40,8 @@ export interface Weight {
 
 /**
  * One factor of a product: a special function of an exactly known argument, to an integer power, taken over a set of
- * weights. The argument is affine in the placeholder `@w` (and `@f`), which stands for each weight in turn.
+ * weights. The argument is affine in the placeholder `@w` (and `@f`), which stands for each weight in turn. A parameter
+ * may hold the flux of the weight if the function is even in it.
  */
 export interface Factor<W extends WeightSet = WeightSet> extends FunctionAt {
   readonly name: FunctionName;
@@ -93,6 +94,7 @@ export function expandFactor<W extends WeightSet>(factor: Factor<W>): Product<ne
   return (half ? weights.half() : weights.weights()).map((weight) => ({
     ...rest,
     argument: atWeight(factor.argument, weight),
+    parameters: factor.parameters.map((form) => atWeight(form, weight)),
     weights: null,
     half: false,
   }));

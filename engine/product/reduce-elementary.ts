@@ -17,15 +17,13 @@ export function reduceElementary<W extends WeightSet>(product: Product<W>): Prod
 function reduceFactor<W extends WeightSet>(factor: Factor<W>): Factor<W>[] {
   const declared = functions[factor.name];
   if (!declared.elementary || (declared.shifts.length === 0 && declared.reflections.length === 0)) return [factor];
-  const oriented = orient(factor);
+  const oriented = turned(factor).flatMap((f) => (isNumber(f) ? [f] : orient(f)));
   const shifted = oriented.flatMap((f) => reduceByShift(f));
-  return shifted
-    .flatMap((f) => (f.argument.key === factor.argument.key ? [f] : orient(f)))
-    .flatMap((f) => exactFactors(f));
+  return shifted.flatMap((f) => (f.argument.key === factor.argument.key ? [f] : orient(f)));
 }
 
 /** Replaces a function at a special argument by its exact value. */
-function exactFactors<W extends WeightSet>(factor: Factor<W>): Factor<W>[] {
+export function exactFactors<W extends WeightSet>(factor: Factor<W>): Factor<W>[] {
   const value =
     factor.name === 'linear' ? null : (functions[factor.name].exactValue?.(factor.argument, factor.parameters) ?? null);
   if (value === null) return [factor];
@@ -39,6 +37,19 @@ function splitUnit(value: Form): Form[] {
   const imaginary = turned.terms.every(({ coefficient }) => coefficient.isReal()) && !turned.isZero();
   const real = value.terms.every(({ coefficient }) => coefficient.isReal());
   return !real && imaginary ? [Form.i, turned] : [value];
+}
+
+function isNumber({ argument }: Factor): boolean {
+  return argument.toGaussian() !== null;
+}
+
+/** i x as the two factors i and x, where a function is the factor x itself. */
+function turned<W extends WeightSet>(factor: Factor<W>): Factor<W>[] {
+  if (factor.name !== 'linear' || isNumber(factor) || !leading(factor.argument)?.re.isZero()) return [factor];
+  return [
+    { ...factor, argument: Form.i },
+    { ...factor, argument: factor.argument.mul(Form.i.neg()) },
+  ];
 }
 
 /** Makes the leading coefficient positive where f is even or odd. */

@@ -3,7 +3,7 @@ import type { FunctionAt } from '../functions/special-function';
 import { functions } from '../functions/table';
 import { expandChain, type Geometry, StepLattice } from './chain';
 import { constantFactor, type Factor, flipped, overOpposite, type Product, type WeightSet } from './factor';
-import { reduceElementary } from './reduce-elementary';
+import { exactFactors, reduceElementary } from './reduce-elementary';
 
 /**
  * How far to simplify. `functions`: equal factors are collected and what the reflection laws cancel is dropped, so
@@ -91,10 +91,15 @@ function gather<W extends WeightSet>(product: Product<W>): Product<W> {
   const result: Factor<W>[] = [];
   let sign = 1;
   const constants: Factor<W>[] = [];
-  for (const bucket of buckets(product)) {
+  const others: Factor<W>[] = [];
+  for (const factor of product.flatMap((f) => exactFactors(f))) (isConstant(factor) ? constants : others).push(factor);
+  for (const bucket of buckets(others)) {
     const first = bucket[0] as Factor<W>;
-    if (first.name === 'linear' && first.argument.toGaussian() !== null) {
-      constants.push(...bucket);
+    const { additive } = functions[first.name];
+    if (additive) {
+      const sum = additive(Form.sum(bucket.map(({ argument, power }) => argument.scale(power))));
+      const from = [...new Set(bucket.flatMap((factor) => factor.from))];
+      if (!sum.isZero()) result.push({ ...first, argument: sum, power: 1, from });
       continue;
     }
     const collected = new Map<string, Factor<W>>();
@@ -106,6 +111,11 @@ function gather<W extends WeightSet>(product: Product<W>): Product<W> {
     }
   }
   return [...collectConstants(constants, sign), ...result];
+}
+
+/** True for a factor that is a number. */
+function isConstant({ name, argument }: Factor): boolean {
+  return name === 'linear' && argument.symbols().length === 0;
 }
 
 /** Adds a factor to those of its bucket; returns the sign that reflections have produced. */
@@ -149,7 +159,6 @@ export function countOf(factor: Factor): number {
  * opposite an even or odd function needs one of each pair only.
  */
 function settle<W extends WeightSet>(factor: Factor<W>): { factor: Factor<W> | null; sign: number } {
-  if (factor.name === 'exponential' && factor.argument.isZero()) return { factor: null, sign: 1 };
   for (const reflection of functions[factor.name].reflections) {
     const mirrored = reflection.center(factor.parameters).scale(2).sub(factor.argument);
     if (reflection.power === -1) {
@@ -195,7 +204,7 @@ function pairByShifts<W extends WeightSet>(
   geometry: Geometry,
   lattices: Map<string, StepLattice>,
 ): Product<W> {
-  return buckets(product).flatMap((bucket) => {
+  return buckets(product.map((factor) => unfolded(factor))).flatMap((bucket) => {
     const first = bucket[0] as Factor<W>;
     if (functions[first.name].elementary || functions[first.name].shifts.length === 0) return bucket;
     const key = `${first.name}|${first.parameters.map((form) => form.key).join('|')}`;
@@ -211,6 +220,19 @@ function pairByShifts<W extends WeightSet>(
     const elementary = made.map((f) => ({ ...f, argument: f.argument.substitute(define) }));
     return [...open.filter(({ power }) => power !== 0), ...elementary];
   });
+}
+
+/** An even function over one of each pair, to an even power, written over both again; the converse of `settle`. */
+function unfolded<W extends WeightSet>(factor: Factor<W>): Factor<W> {
+  const { weights, half, power, parameters, argument } = factor;
+  if (!half || weights === null || weights.key !== weights.oppositeKey || power % 2 !== 0) return factor;
+  const even = functions[factor.name].reflections.some(
+    (reflection) =>
+      reflection.power === 1 &&
+      reflection.sign === 1 &&
+      reflection.center(parameters).scale(2).sub(flipped(argument)).equals(argument),
+  );
+  return even ? { ...factor, half: false, power: power / 2 } : factor;
 }
 
 /** The ways to write f(y)^q as f(x)^power: as it stands, flipped, reflected. */

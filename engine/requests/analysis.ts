@@ -17,7 +17,7 @@ export interface ParameterEntry {
 
 export interface TheoryEntry {
   readonly block: TheoryBlock;
-  /** Null when the sphere is missing or not offered. */
+  /** Null when the `sphere` line is missing. */
   readonly sphere: Sphere | null;
   readonly built: BuiltTheory | null;
 }
@@ -50,14 +50,10 @@ export function analyse(text: string, overrides: Overrides = new Map()): Analysi
   for (const block of notebook.blocks) {
     if (block.kind === 'spectrum' && !spectra.has(block.name.name)) spectra.set(block.name.name, block);
     if (block.kind !== 'theory' || theories.has(block.name.name)) continue;
-    const sphere = block.sphere === null ? null : (spheres[block.sphere.sphere.name] ?? null);
-    if (block.sphere !== null && sphere === null) {
-      const offered = Object.keys(spheres).join(', ');
-      diagnostics.push(
-        problem('sphere-not-offered', block.sphere.sphere.span, { sphere: block.sphere.sphere.name, offered }),
-      );
-    }
-    const built = sphere === null ? null : buildTheory(block, values, sphere);
+    const sphere = block.sphere === null ? null : spheres[block.sphere.sphere.name];
+    const read = sphere === null ? null : buildTheory(block, values, sphere);
+    // A block that lost a line would be a different theory without it.
+    const built = read && !block.sound ? { ...read, theory: null } : read;
     if (built) diagnostics.push(...built.diagnostics);
     theories.set(block.name.name, { block, sphere, built });
   }

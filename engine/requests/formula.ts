@@ -5,7 +5,7 @@ import { formLatex } from '../latex/form';
 import { modesLatex } from '../latex/modes';
 import { displayLatex, type Piece, productLatex } from '../latex/product';
 import { symbolLatex } from '../latex/symbol';
-import { stemOf } from '../latex/weights';
+import { fluxStem, stemOf } from '../latex/weights';
 import { collectEqual, simplify } from '../product/simplify';
 import { type ElementaryProduct, isSpecial } from '../spheres/quantity';
 import type { Sphere, TheoryProduct } from '../spheres/sphere';
@@ -57,10 +57,10 @@ function definedView(printable: Printable, form: FormulaForm): FormulaView {
   if (made === null) {
     const modes = sphere.modes(theory);
     if (modes.kind === 'refused') return { kind: 'refused', message: modes.message };
-    return view(theory, modesLatex(theory.groups, modes.towers), notes);
+    return view(printable, modesLatex(theory.groups, modes.towers), notes);
   }
   const style = form === 'unpaired' ? ({ kind: 'modes' } as const) : ({ kind: 'function', notation } as const);
-  return view(theory, productLatex(theory.groups, made.product, style), [...remarks(form, made), ...notes]);
+  return view(printable, productLatex(theory.groups, made.product, style), [...remarks(form, made), ...notes]);
 }
 
 /** What the reader of an elementary formula has to know: where it holds, and what could not be reduced. */
@@ -74,15 +74,18 @@ function remarks(form: FormulaForm, { product, at }: ElementaryProduct): string[
   ];
 }
 
-function view(theory: Theory, pieces: readonly Piece[], notes: readonly string[]): FormulaView {
-  const lead = `${leadLatex(theory)}=`;
+function view({ sphere, theory }: Printable, pieces: readonly Piece[], notes: readonly string[]): FormulaView {
+  const lead = `${leadLatex(sphere, theory)}=`;
   const shown: readonly Piece[] = pieces.length === 0 ? [{ latex: '1', from: [], expanded: null }] : pieces;
   return { kind: 'formula', lead, pieces: shown, latex: displayLatex(lead, shown), notes };
 }
 
 /** Z_{1-loop}(sigma), with all Coulomb stems. */
-function leadLatex(theory: Theory): string {
-  const stems = gaugeGroups(theory).map(({ group }) => symbolLatex(stemOf(group)));
+function leadLatex(sphere: Sphere, theory: Theory): string {
+  const stems = gaugeGroups(theory).flatMap(({ group }) => [
+    symbolLatex(stemOf(group)),
+    ...(sphere.fluxes ? [symbolLatex(fluxStem(group))] : []),
+  ]);
   return `Z_{\\text{1-loop}}${stems.length === 0 ? '' : `(${stems.join(',')})`}`;
 }
 

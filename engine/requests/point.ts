@@ -2,7 +2,6 @@ import { Form } from '../exact/form';
 import type { Assignment, Name } from '../language/tree';
 import type { Sphere } from '../spheres/sphere';
 import type { Theory } from '../theory/theory';
-import { fluxName } from '../theory/weights';
 import type { Analysis } from './analysis';
 
 /** Values of all symbols of a theory at a point, as closed forms. */
@@ -30,7 +29,7 @@ export function resolvePoint(
   unsetCoulomb: 'error' | 'zero',
   used: ReadonlySet<string>,
 ): PointResult {
-  const settable = settableNames(analysis, theory);
+  const settable = settableNames(analysis, sphere, theory);
   const dependent = new Map(theory.groups.flatMap(({ dependent: relations }) => [...relations]));
   const set = new Map<string, Form>();
   for (const name of [...free, ...at.map((a) => a.name)]) {
@@ -46,11 +45,18 @@ export function resolvePoint(
         message: `\`${name.name}\` is set to \`${value.text}\`, but \`${open[0]}\` has no value.`,
       };
     if (set.has(name.name)) return { kind: 'failure', message: `\`${name.name}\` is set twice.` };
+    if (settable.fluxes.includes(name.name) && !closed.toRational()?.isInteger()) {
+      return { kind: 'failure', message: `The flux \`${name.name}\` has to be an integer; \`${value.text}\` is none.` };
+    }
     set.set(name.name, closed);
+  }
+  const fluxAxis = free.find(({ name }) => settable.fluxes.includes(name));
+  if (fluxAxis) {
+    return { kind: 'failure', message: `The flux \`${fluxAxis.name}\` takes integers only and is no axis of a plot.` };
   }
   const axes = new Set(free.map(({ name }) => name));
   const notes: string[] = [];
-  const failure = fillUnset(theory, axes, set, unsetCoulomb, notes, used);
+  const failure = fillUnset(settable, axes, set, unsetCoulomb, notes, used);
   if (failure !== null) return { kind: 'failure', message: failure };
   const geometry = sphere.geometry(theory);
   const values = (name: string): Form | null => {
@@ -65,29 +71,34 @@ export function resolvePoint(
 
 interface Settable {
   readonly coulomb: readonly string[];
+  /** Empty on spheres without a sum over fluxes. */
+  readonly fluxes: readonly string[];
   readonly masses: readonly string[];
   readonly backgrounds: readonly string[];
+  readonly couplings: readonly string[];
   readonly parameters: readonly string[];
 }
 
-function independent(theory: Theory, role: 'gauge' | 'flavor'): string[] {
+function independent(theory: Theory, role: 'gauge' | 'flavor', names: 'coordinates' | 'fluxes'): string[] {
   return theory.groups
     .filter((group) => group.role === role)
-    .flatMap(({ coordinates, dependent }) => coordinates.filter((name) => !dependent.has(name)));
+    .flatMap((group) => group.group.independent.map((k) => group[names][k] as string));
 }
 
-function settableNames(analysis: Analysis, theory: Theory): Settable {
+function settableNames(analysis: Analysis, sphere: Sphere, theory: Theory): Settable {
   return {
-    coulomb: independent(theory, 'gauge'),
-    masses: independent(theory, 'flavor'),
+    coulomb: independent(theory, 'gauge', 'coordinates'),
+    fluxes: sphere.fluxes ? independent(theory, 'gauge', 'fluxes') : [],
+    masses: independent(theory, 'flavor', 'coordinates'),
     backgrounds: theory.backgrounds,
+    couplings: theory.couplings,
     parameters: [...analysis.values.keys()],
   };
 }
 
 function unsettable(name: string, settable: Settable, dependent: ReadonlyMap<string, Form>): string | null {
-  const all = [...settable.coulomb, ...settable.masses, ...settable.backgrounds, ...settable.parameters];
-  if (all.includes(name) || settable.coulomb.some((coordinate) => fluxName(coordinate) === name)) return null;
+  const all = Object.values(settable).flat();
+  if (all.includes(name)) return null;
   if (dependent.has(name)) {
     return `\`${name}\` follows from the other coordinates of its group (their sum is zero) and is not set by itself.`;
   }
@@ -96,7 +107,7 @@ function unsettable(name: string, settable: Settable, dependent: ReadonlyMap<str
 }
 
 function fillUnset(
-  theory: Theory,
+  settable: Settable,
   axes: ReadonlySet<string>,
   set: Map<string, Form>,
   unsetCoulomb: 'error' | 'zero',
@@ -105,14 +116,18 @@ function fillUnset(
 ): string | null {
   const open = (names: readonly string[]): string[] =>
     names.filter((name) => used.has(name) && !set.has(name) && !axes.has(name));
-  const coulomb = open(independent(theory, 'gauge'));
-  if (coulomb.length > 0 && unsetCoulomb === 'error') {
-    return `Coulomb parameters without a value: ${coulomb.join(', ')}. Add \`at ${coulomb.map((name) => `${name} = 0.3`).join(', ')}\`.`;
+  const needed = open([...settable.coulomb, ...settable.fluxes]);
+  if (needed.length > 0 && unsetCoulomb === 'error') {
+    const example = needed.map((name) => `${name} = ${settable.fluxes.includes(name) ? '1' : '0.3'}`).join(', ');
+    return `Without a value: ${needed.join(', ')}. Add \`at ${example}\`.`;
   }
-  const masses = open(independent(theory, 'flavor'));
-  const backgrounds = open(theory.backgrounds);
-  for (const name of [...coulomb, ...masses, ...backgrounds]) set.set(name, Form.zero);
-  if (coulomb.length > 0) notes.push(`Not set, taken as zero: ${coulomb.join(', ')}.`);
+  const couplings = open(settable.couplings);
+  if (couplings.length > 0)
+    return `The coupling has no value: add \`at ${couplings.map((name) => `${name} = 1`).join(', ')}\`.`;
+  const masses = open(settable.masses);
+  const backgrounds = open(settable.backgrounds);
+  for (const name of [...needed, ...masses, ...backgrounds]) set.set(name, Form.zero);
+  if (needed.length > 0) notes.push(`Not set, taken as zero: ${needed.join(', ')}.`);
   if (masses.length > 0) notes.push(`Masses not set, taken as zero: ${masses.join(', ')}.`);
   if (backgrounds.length > 0) notes.push(`Parameters not set, taken as zero: ${backgrounds.join(', ')}.`);
   return null;

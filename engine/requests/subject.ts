@@ -5,7 +5,7 @@ import type { TheoryEntry } from './analysis';
 /** Why a theory cannot be asked anything, in words; null when it can. */
 export function unreadable(entry: TheoryEntry | undefined, name: string): string | null {
   if (!entry) return `There is no theory \`${name}\` in this notebook.`;
-  if (entry.sphere === null) return `The theory \`${name}\` is on no sphere that is offered; see its \`sphere\` line.`;
+  if (entry.sphere === null) return `The theory \`${name}\` has no sphere; add a line such as \`sphere S3\`.`;
   if (!entry.built?.theory) return `The theory \`${name}\` has errors; mend them first.`;
   return null;
 }

@@ -1,6 +1,6 @@
 import { Form } from '../exact/form';
 import { functions } from '../functions/table';
-import { type Factor, substitute } from '../product/factor';
+import { type Factor, FLUX, substitute, WEIGHT } from '../product/factor';
 import { simplify } from '../product/simplify';
 import type { Theory } from '../theory/theory';
 import type { TheoryWeights } from '../theory/weights';
@@ -70,11 +70,15 @@ export function isSpecial(factor: Factor<TheoryWeights>): boolean {
 /** Names of all coordinates and parameters that a product depends on, geometry symbols left out. */
 export function namesIn(theory: Theory, product: TheoryProduct): ReadonlySet<string> {
   const names = new Set<string>();
-  for (const { argument, weights } of product) {
-    for (const name of argument.symbols()) if (!name.startsWith('@')) names.add(name);
+  for (const { argument, parameters, weights } of product) {
+    const symbols = [argument, ...parameters].flatMap((form) => form.symbols());
+    for (const name of symbols) if (!name.startsWith('@')) names.add(name);
     for (const { group } of weights?.parts ?? []) {
-      const { coordinates, dependent } = theory.groups[group] as Theory['groups'][number];
-      for (const name of coordinates) if (!dependent.has(name)) names.add(name);
+      const { group: acting, coordinates, fluxes, role } = theory.groups[group] as Theory['groups'][number];
+      for (const k of acting.independent) {
+        if (symbols.includes(WEIGHT)) names.add(coordinates[k] as string);
+        if (symbols.includes(FLUX) && role === 'gauge') names.add(fluxes[k] as string);
+      }
     }
   }
   return names;

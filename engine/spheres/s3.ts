@@ -3,6 +3,7 @@ import { type Factor, WEIGHT } from '../product/factor';
 import { threeSphereConditions } from '../theory/checks/three-sphere';
 import { gaugeGroups, type Multiplet, type Theory, type TheoryGroup } from '../theory/theory';
 import { matterWeights, rootWeights, type TheoryWeights, type WeightedSet } from '../theory/weights';
+import { exponential, quadratic, trace } from './classical';
 import { s3Modes } from './s3-modes';
 import type { Sphere, TheoryProduct } from './sphere';
 
@@ -31,6 +32,7 @@ export const s3: Sphere = {
     theta: 'there is no theta angle in three dimensions; a level takes its place',
     coupling: 'the Yang-Mills coupling drops out of the localised integral on the three-sphere',
   },
+  halvesWeights: false,
   supersymmetries: [2, 4],
   minimalSupersymmetry: 2,
   rCharge: (kind) => ({ value: half, fixed: kind !== 'chiral' }),
@@ -59,6 +61,7 @@ export const s3: Sphere = {
     'The Coulomb parameters are real and dimensionless; $1/|W|$ and the measure are not included.',
   ],
   conditions: threeSphereConditions,
+  fluxes: false,
   specialFunction: 'doubleSine',
   sources: [
     { key: 'KWY-2009', text: 'A. Kapustin, B. Willett, I. Yaakov, arXiv:0909.4559 (2009)' },
@@ -140,22 +143,4 @@ function levelForm(group: TheoryGroup): Form {
   const sum = trace(group);
   const n = group.coordinates.length;
   return level.mul(squares).add(group.abelianLevel.sub(level).div(Form.number(n)).mul(sum).mul(sum));
-}
-
-/** (sigma, sigma) in the independent coordinates. */
-function quadratic(group: TheoryGroup): Form {
-  const squares = group.coordinates.map((name) => coordinate(group, name).pow(2));
-  return Form.sum(squares).scale(group.group.levelScale);
-}
-
-function trace(group: TheoryGroup | undefined): Form {
-  return group === undefined ? Form.zero : Form.sum(group.coordinates.map((name) => coordinate(group, name)));
-}
-
-function coordinate(group: TheoryGroup, name: string): Form {
-  return group.dependent.get(name) ?? Form.symbol(name);
-}
-
-function exponential(argument: Form): Factor<TheoryWeights> {
-  return { name: 'exponential', argument, parameters: [], power: 1, weights: null, half: false, from: ['classical'] };
 }

@@ -31,6 +31,8 @@ export interface Sphere extends SphereRules {
   readonly conventions: (theory: Theory) => readonly string[];
   /** What a referee checks of a theory on this sphere. */
   readonly conditions: readonly Condition[];
+  /** Whether the partition function is a sum over gauge fluxes. */
+  readonly fluxes: boolean;
   /** The function that multiplets of this sphere give, whose notations can be chosen. */
   readonly specialFunction: FunctionName;
   readonly sources: readonly Source[];

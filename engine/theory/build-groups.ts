@@ -11,9 +11,10 @@ export function buildGroups(
   parameters: ReadonlyMap<string, Form>,
   rules: SphereRules,
   report: Report,
-): { groups: TheoryGroup[]; backgrounds: string[] } {
+): { groups: TheoryGroup[]; backgrounds: string[]; couplings: string[] } {
   const groups: TheoryGroup[] = [];
   const backgrounds = new Set<string>();
+  const couplings = new Set<string>();
   const taken = new Set<string>(parameters.keys());
   const count = { gauge: 0, flavor: 0 };
   for (const line of lines) {
@@ -24,7 +25,7 @@ export function buildGroups(
       continue;
     }
     const { group } = read;
-    const values = readOptions(line, group, parameters, rules, backgrounds, report);
+    const values = readOptions(line, group, parameters, rules, { backgrounds, couplings }, report);
     const stem = values.symbol ?? (line.role === 'gauge' ? 'sigma' : 'm') + "'".repeat(place);
     const coordinates = coordinateNames(stem, group);
     const clash = coordinates.find((name) => taken.has(name));
@@ -38,6 +39,7 @@ export function buildGroups(
       name: line.name.name,
       group,
       coordinates,
+      fluxes: coordinateNames(`flux${"'".repeat(place)}`, group),
       dependent: dependentForms(group, coordinates),
       level: values.level ?? null,
       abelianLevel: values.abelian ?? null,
@@ -47,7 +49,14 @@ export function buildGroups(
       span: line.span,
     });
   }
-  return { groups, backgrounds: [...backgrounds].filter((name) => !taken.has(name)) };
+  const free = (names: ReadonlySet<string>): string[] => [...names].filter((name) => !taken.has(name));
+  return { groups, backgrounds: free(backgrounds), couplings: free(couplings) };
+}
+
+/** Names that options bring and no `let` gives a value. */
+interface FreeNames {
+  readonly backgrounds: Set<string>;
+  readonly couplings: Set<string>;
 }
 
 interface OptionValues {
@@ -64,7 +73,7 @@ function readOptions(
   group: Group,
   parameters: ReadonlyMap<string, Form>,
   rules: SphereRules,
-  backgrounds: Set<string>,
+  names: FreeNames,
   report: Report,
 ): OptionValues {
   const values: OptionValues = {};
@@ -82,7 +91,7 @@ function readOptions(
       report(problem(reason, option.span, { group: group.name }));
       continue;
     }
-    const value = readValue(option.kind, option.value, parameters, backgrounds, report);
+    const value = readValue(option.kind, option.value, parameters, names, report);
     if (value !== null) values[option.kind] = value;
   }
   if (values.abelian !== undefined && values.level === undefined) values.level = Form.zero;
@@ -101,17 +110,17 @@ function unfitting(kind: GroupOption['kind'], group: Group): string | null {
   return null;
 }
 
-/** Levels are exact numbers; FI, theta and coupling may bring names of their own, which count as zero until set. */
+/** Levels are exact numbers; FI, theta and coupling may bring names of their own. */
 function readValue(
   kind: 'level' | 'abelian' | 'fi' | 'theta' | 'coupling',
   expression: Expression,
   parameters: ReadonlyMap<string, Form>,
-  backgrounds: Set<string>,
+  names: FreeNames,
   report: Report,
 ): Form | null {
   const unknown = unknownNames(expression, parameters);
   if (kind !== 'level' && kind !== 'abelian') {
-    for (const { name } of unknown) backgrounds.add(name);
+    for (const { name } of unknown) (kind === 'coupling' ? names.couplings : names.backgrounds).add(name);
     return expression.form;
   }
   const value = valueAt(expression, parameters, report);

@@ -4,6 +4,7 @@ import { parseRepresentation, type Representation } from '../lie/representation'
 import { problem, type Report, refused, valueAt } from './report';
 import type { SphereRules } from './rules';
 import type { Multiplet, TheoryGroup } from './theory';
+import { matterWeights } from './weights';
 
 /** A row of the charge table: what each cell means, null where it could not be read, and the multiplet if all could. */
 export interface ReadRow {
@@ -77,7 +78,18 @@ function readRow(
     rCharge,
     row,
   };
+  if (row.kind === 'halfhyper' && rules.halvesWeights && !comesInPairs(groups, multiplet)) {
+    report(problem('half-hyper', row.span, { name: row.name.name }));
+    return { row, cells, multiplet: null };
+  }
   return { row, cells, multiplet };
+}
+
+/** Whether the weights are w, -w in pairs, zero taken an even number of times. */
+function comesInPairs(groups: readonly TheoryGroup[], { representations }: Multiplet): boolean {
+  return matterWeights(groups, representations).every(({ weights, multiplicity }) =>
+    weights === null ? multiplicity % 2 === 0 : weights.key === weights.oppositeKey,
+  );
 }
 
 function kindData(row: MultipletRow, rules: SphereRules): Record<string, string> {

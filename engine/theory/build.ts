@@ -33,7 +33,7 @@ export function buildTheory(
   const diagnostics: Diagnostic[] = [];
   const report: Report = (diagnostic) => diagnostics.push(diagnostic);
   const geometry = buildGeometry(block.sphere, rules, parameters, report);
-  const { groups, backgrounds } = buildGroups(block.groups, parameters, rules, report);
+  const { groups, backgrounds, couplings } = buildGroups(block.groups, parameters, rules, report);
   const mixed = buildMixed(block.mixed, groups, parameters, report);
   const supersymmetry = buildSupersymmetry(block, rules, report);
   const rows = buildMatter(block, groups, parameters, rules, report);
@@ -52,6 +52,7 @@ export function buildTheory(
     superpotential,
     parameters,
     backgrounds,
+    couplings,
   };
   return { theory: failed ? null : theory, rules, groups, rows, diagnostics };
 }

@@ -16,6 +16,8 @@ export interface SphereRules {
   };
   /** Why an option is not in the list, by its word; for the message. */
   readonly refusals: Readonly<Record<string, string>>;
+  /** True where a half-hyper takes one of each pair of weights, so that its weights have to come in such pairs. */
+  readonly halvesWeights: boolean;
   readonly supersymmetries: readonly number[];
   /** R-charge where the column R is absent, and the only one allowed for multiplets that fix it. */
   readonly rCharge: (kind: MultipletKind) => { readonly value: Form; readonly fixed: boolean };

@@ -21,6 +21,8 @@ export interface Theory {
   readonly parameters: ReadonlyMap<string, Form>;
   /** Names that stand for FI and similar background values without a `let`: they count as zero until set. */
   readonly backgrounds: readonly string[];
+  /** Names in couplings without a `let`: they have to be set before a classical factor has a value. */
+  readonly couplings: readonly string[];
 }
 
 export interface TheoryGroup {
@@ -29,6 +31,8 @@ export interface TheoryGroup {
   readonly group: Group;
   /** Names of all printed coordinates (sigma1, sigma2, ...), dependent ones included. */
   readonly coordinates: readonly string[];
+  /** Names of the fluxes through the sphere that go with the coordinates (flux1, flux2, ...). */
+  readonly fluxes: readonly string[];
   /** What the dependent coordinates are, by name. */
   readonly dependent: ReadonlyMap<string, Form>;
   readonly level: Form | null;

@@ -60,7 +60,7 @@ export class TheoryWeights implements WeightSet {
       rows = rows.flatMap((row) => own.map((more) => [...row, ...more]));
     });
     const fluxes = groups.flatMap((group) =>
-      independentNames(group).map((name) => (group.role === 'gauge' ? fluxName(name) : null)),
+      independentNames(group).map((name) => (group.role === 'gauge' ? fluxOf(group, name) : null)),
     );
     return { names, fluxes, rows: Float64Array.from(rows.flat()) };
   }
@@ -78,9 +78,9 @@ export class TheoryWeights implements WeightSet {
   }
 }
 
-/** Name of the flux that goes with a Coulomb parameter: `flux2` for `sigma2`, `flux` for `sigma`. */
-export function fluxName(coordinate: string): string {
-  return coordinate.replace(/^[A-Za-z_]+/, 'flux');
+/** The flux that goes with a coordinate. */
+function fluxOf({ coordinates, fluxes }: TheoryGroup, coordinate: string): string {
+  return fluxes[coordinates.indexOf(coordinate)] ?? coordinate;
 }
 
 function independentNames({ coordinates, dependent }: TheoryGroup): string[] {
@@ -105,7 +105,7 @@ function independentRows(group: TheoryGroup, orbit: WeightOrbit, half: boolean):
 function orbitForms(group: TheoryGroup, orbit: WeightOrbit, half: boolean): readonly Weight[] {
   const { denominator, vectors, width } = half ? orbit.halfVectors() : orbit.vectors();
   const positions = group.coordinates.map((name) => group.dependent.get(name) ?? Form.symbol(name));
-  const fluxes = positions.map((form) => form.substitute((name) => Form.symbol(fluxName(name))));
+  const fluxes = positions.map((form) => form.substitute((name) => Form.symbol(fluxOf(group, name))));
   return Array.from({ length: vectors.length / width }, (_, row) => {
     const entries = Array.from(vectors.subarray(row * width, (row + 1) * width));
     const combine = (forms: readonly Form[]): Form =>

@@ -20,5 +20,5 @@ test('sine and cosine of large arguments of either sign', () => {
 test('sin(-10^20) against mpmath', () => {
   const bits = 100;
   const { sin } = sinCosFixed(-(10n ** 20n) << BigInt(bits), bits);
-  expect(Number(sin) / 2 ** bits).toBeCloseTo(0.64525128526578084421, 14);
+  expect(Number(sin) / 2 ** bits).toBeCloseTo(0.6452512852657808, 14);
 });

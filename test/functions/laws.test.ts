@@ -27,6 +27,9 @@ const PARAMETERS: Record<FunctionName, readonly (readonly Form[])[]> = {
   gamma: [[]],
   doubleSine: [[Form.one], [Form.ratio(5, 4)], [root(2)], [Form.ratio(3, 10)]],
   upsilon: [[Form.one], [Form.ratio(4, 5)], [root(2)]],
+  fluxGamma: [[Form.zero], [Form.number(3)], [Form.number(-2)]],
+  // Of integers only: test/functions/sign.test.ts.
+  sign: [],
   tripleSine: [
     [Form.one, Form.one, Form.one],
     [Form.one, root(2), root(3)],

@@ -1,0 +1,69 @@
+import { piFixed } from '../arithmetic/fixed-constants';
+import { Form } from '../exact/form';
+import type { SpecialFunction } from './special-function';
+
+/**
+ * f(x) = (-1)^x for integers x, as products over fluxes have it. Its logarithm is i pi for odd and 0 for even x; an
+ * argument that is no integer has no value here.
+ */
+export const sign: SpecialFunction = {
+  name: 'sign',
+  spelling: '',
+  parameters: [],
+  reflections: [],
+  additive: parity,
+  shifts: [],
+  zeros: [],
+  growth: [],
+  notations: [
+    {
+      label: '(-1)^x',
+      latex: (argument, _parameters, print) => `(-1)^{${print.form(argument)}}`,
+      definition: () => '(-1)^x,\\quad x\\in\\mathbb{Z}',
+    },
+  ],
+  modes: null,
+  elementary: true,
+  double: () => ({
+    addLog: (xRe, xIm, power, outRe, outIm) => {
+      for (let k = 0; k < xRe.length; k++) {
+        const x = xRe[k] as number;
+        if (!Number.isInteger(x) || (xIm !== null && xIm[k] !== 0)) outRe[k] = Number.NaN;
+        else if ((x * power) % 2 !== 0) outIm[k] = (outIm[k] as number) + Math.PI;
+      }
+    },
+  }),
+  precise: (argument, _parameters, bits) => {
+    const whole = argument.re >> BigInt(bits);
+    if (argument.im !== 0n || whole << BigInt(bits) !== argument.re) return { kind: 'indistinct' };
+    return { kind: 'value', re: 0n, im: whole % 2n === 0n ? 0n : piFixed(bits), error: 1n };
+  },
+  crossCheck: null,
+  sources: [],
+};
+
+/**
+ * An integer argument up to even numbers: |n| and n have the same parity, and so have x and -x. Names stand for integers;
+ * where a coefficient is no integer nothing is known of the single terms, and the sum stays as it is.
+ */
+function parity(sum: Form): Form {
+  const terms = sum.split().map((term) => {
+    const [only] = term.terms;
+    const factor = only?.factors.length === 1 ? only.factors[0] : undefined;
+    const size = factor?.atom.kind === 'call' && factor.atom.name === 'abs' && factor.power === 1 ? factor.atom : null;
+    const rest = size === null ? term : (size.arguments[0] as Form).scale(only?.coefficient ?? 1);
+    return only?.coefficient.isReal() && only.coefficient.re.isInteger() ? rest : null;
+  });
+  if (terms.includes(null)) return sum;
+  const whole = Form.sum(terms.flatMap((term) => term ?? []));
+  return Form.sum(
+    whole.split().map((term) => {
+      const coefficient = term.terms[0]?.coefficient.re;
+      return coefficient?.isInteger() && coefficient.numerator % 2n === 0n ? Form.zero : positive(term);
+    }),
+  );
+}
+
+function positive(term: Form): Form {
+  return term.terms[0]?.coefficient.re.sign() === -1 ? term.neg() : term;
+}

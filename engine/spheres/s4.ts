@@ -1,0 +1,114 @@
+import { Form } from '../exact/form';
+import { type Factor, substitute, WEIGHT } from '../product/factor';
+import { gaugeGroups, type Multiplet, type Theory } from '../theory/theory';
+import { matterWeights, rootWeights, type TheoryWeights, type WeightedSet } from '../theory/weights';
+import { exponential, quadratic } from './classical';
+import type { Sphere, TheoryProduct } from './sphere';
+
+const w = Form.symbol(WEIGHT);
+const b = Form.symbol('@b');
+const Q = Form.symbol('@Q');
+const half = Form.ratio(1, 2);
+
+/**
+ * The four-sphere, round or the ellipsoid with b > 0, four-dimensional N = 2 theories, without instantons.
+ *
+ * Conventions: the vector multiplet gives Upsilon_b(i a.sigma) for every root, a hyper in R gives
+ * 1/Upsilon_b(Q/2 + i w.(sigma, m)) for every weight of R, a half-hyper for one of each pair of weights; classical factor
+ * exp(-(8 pi^2/g^2) Tr sigma^2); Upsilon_b(Q/2) = 1, and the constant Upsilon_b'(0) for each Cartan direction is left out.
+ * `supersymmetry 4` adds the adjoint hyper at the mass i(b - 1/b)/2 where all but the Vandermonde cancels.
+ *
+ * Sources: V. Pestun, arXiv:0712.2824; N. Hama, K. Hosomichi, arXiv:1206.6359; T. Okuda, V. Pestun, arXiv:1004.1222.
+ */
+export const s4: Sphere = {
+  name: 'S4',
+  multiplets: ['hyper', 'halfhyper'],
+  squashing: [{ name: 'b', symbol: '@b', round: Form.one }],
+  options: { gauge: ['coulomb', 'coupling'], flavor: ['mass'] },
+  refusals: {
+    fi:
+      'a simple gauge group has no FI term, and the one of a U(1) breaks the R-symmetry that puts an N = 2 theory on ' +
+      'the four-sphere',
+    level: 'there is no Chern-Simons term in four dimensions',
+    abelian: 'there is no Chern-Simons term in four dimensions',
+    theta: 'the theta angle enters through the instantons only, which are not part of this product',
+  },
+  halvesWeights: true,
+  supersymmetries: [2, 4],
+  minimalSupersymmetry: 2,
+  rCharge: () => ({ value: Form.zero, fixed: true }),
+  latex: (theory) => (theory.round ? 'S^4' : 'S^4_b'),
+  geometry: (theory) => [
+    (name) => (name === '@Q' ? b.add(b.inverse()) : null),
+    (name) => theory.geometry.get(name) ?? null,
+  ],
+  vector: (theory) =>
+    gaugeGroups(theory).flatMap(({ group, index }) => {
+      const roots = rootWeights(theory, index).map(({ weights }) => ({ weights, multiplicity: 1 }));
+      const vectors = upsilons(roots, () => Form.i.mul(w), 1, 'vector');
+      if (theory.supersymmetry !== 4) return onRound(theory, vectors);
+      const adjoint = [...roots, { weights: null, multiplicity: group.group.rank }];
+      const hyper = upsilons(adjoint, (position) => b.inverse().add(Form.i.mul(position)), -1, 'vector');
+      return onRound(theory, [...vectors, ...hyper]);
+    }),
+  multiplet: (theory, multiplet) => onRound(theory, hypers(theory, multiplet)),
+  classical: (theory) =>
+    gaugeGroups(theory).flatMap(({ group }) => {
+      if (group.coupling === null) return [];
+      const strength = Form.pi.pow(2).scale(-8).div(group.coupling.pow(2));
+      return [exponential(strength.mul(quadratic(group)))];
+    }),
+  modes: () => ({
+    kind: 'refused',
+    message: 'Modes before pairing are listed on the round three-sphere only; choose the unpaired modes.',
+  }),
+  conventions: (theory) => [
+    ...(theory.round ? [] : ['$Q=b+b^{-1}$']),
+    'The instanton factor $|Z_{\\text{inst}}|^2$ multiplies the integrand and is not included in the one-loop product.',
+    "$1/|W|$, the measure, and the constants $\\Upsilon(Q/2)$ and $\\Upsilon'(0)$ are not included.",
+  ],
+  conditions: [],
+  fluxes: false,
+  specialFunction: 'upsilon',
+  sources: [
+    { key: 'Pestun-2007', text: 'V. Pestun, arXiv:0712.2824 (2007)' },
+    { key: 'Hama-Hosomichi-2012', text: 'N. Hama, K. Hosomichi, arXiv:1206.6359 (2012)' },
+  ],
+};
+
+/** Upsilon_b(argument(w))^(+-1) over sets of weights; the zero weight has position 0. */
+function upsilons(
+  sets: readonly WeightedSet[],
+  argument: (position: Form) => Form,
+  power: 1 | -1,
+  from: string,
+): TheoryProduct {
+  return sets.map(
+    ({ weights, multiplicity }): Factor<TheoryWeights> => ({
+      name: 'upsilon',
+      argument: argument(weights === null ? Form.zero : w),
+      parameters: [b],
+      power: power * multiplicity,
+      weights,
+      half: false,
+      from: [from],
+    }),
+  );
+}
+
+/** A half-hyper takes one of each pair of weights: its factor is even in the weight, so that any choice will do. */
+function hypers(theory: Theory, { kind, name, representations }: Multiplet): TheoryProduct {
+  const sets = matterWeights(theory.groups, representations);
+  const full = upsilons(sets, (position) => Q.mul(half).add(Form.i.mul(position)), -1, name);
+  if (kind === 'hyper') return full;
+  return full.map((factor) =>
+    factor.weights === null ? { ...factor, power: factor.power / 2 } : { ...factor, half: true },
+  );
+}
+
+/** On the round sphere b = 1 and Q = 2 from the start. */
+function onRound(theory: Theory, product: TheoryProduct): TheoryProduct {
+  if (!theory.round) return product;
+  const values = (name: string): Form | null => (name === '@b' ? Form.one : name === '@Q' ? Form.number(2) : null);
+  return substitute(product, values);
+}

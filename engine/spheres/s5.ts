@@ -1,0 +1,124 @@
+import { Form } from '../exact/form';
+import { type Factor, substitute, WEIGHT } from '../product/factor';
+import { gaugeGroups, type Multiplet, type Theory, type TheoryGroup } from '../theory/theory';
+import { matterWeights, rootWeights, type TheoryWeights, type WeightedSet } from '../theory/weights';
+import { exponential, powerSum, quadratic } from './classical';
+import type { Sphere, TheoryProduct } from './sphere';
+
+const w = Form.symbol(WEIGHT);
+/** Sum of the periods, |omega|. */
+const total = Form.symbol('@W');
+const periods = ['@w1', '@w2', '@w3'].map((name) => Form.symbol(name));
+const half = Form.ratio(1, 2);
+
+/**
+ * The five-sphere, round or squashed with periods w1, w2, w3, five-dimensional N = 1 theories, perturbative part.
+ *
+ * Conventions: the vector multiplet gives S_3(i a.sigma) for every root, a hyper in R gives
+ * 1/S_3(|w|/2 + i w.(sigma, m)) for every weight of R, a half-hyper for one of each pair of weights; classical factor
+ * exp(-[(4 pi^3/g^2) Tr sigma^2 + (pi k/3) Tr sigma^3]/(w1 w2 w3)); S_3 zeta-regularised, the constant S_3'(0)/2 pi for each
+ * Cartan direction left out.
+ *
+ * Sources: K. Hosomichi, R.-K. Seong, S. Terashima, arXiv:1203.0371; J. Källén, J. Qiu, M. Zabzine, arXiv:1206.6008;
+ * Y. Imamura, arXiv:1210.6308; G. Lockhart, C. Vafa, arXiv:1210.5909.
+ */
+export const s5: Sphere = {
+  name: 'S5',
+  multiplets: ['hyper', 'halfhyper'],
+  squashing: [1, 2, 3].map((k) => ({ name: `w${k}`, symbol: `@w${k}`, round: Form.one })),
+  options: { gauge: ['coulomb', 'level', 'coupling'], flavor: ['mass'] },
+  refusals: {
+    fi: 'there is no FI term for vector multiplets on the five-sphere that the localised integral keeps',
+    theta: 'the theta angle of USp(2n) is invisible in the perturbative part',
+    abelian: 'the cubic level of U(n) is one number; write `level`',
+  },
+  halvesWeights: true,
+  supersymmetries: [1],
+  minimalSupersymmetry: 1,
+  rCharge: () => ({ value: Form.zero, fixed: true }),
+  latex: (theory) => (theory.round ? 'S^5' : 'S^5_\\omega'),
+  geometry: (theory) => [
+    (name) => (name === '@W' ? Form.sum(periods) : null),
+    (name) => theory.geometry.get(name) ?? null,
+  ],
+  vector: (theory) =>
+    gaugeGroups(theory).flatMap(({ index }) => {
+      const roots = rootWeights(theory, index).map(({ weights }) => ({ weights, multiplicity: 1 }));
+      return onRound(
+        theory,
+        tripleSines(roots, () => Form.i.mul(w), 1, 'vector'),
+      );
+    }),
+  multiplet: (theory, multiplet) => onRound(theory, hypers(theory, multiplet)),
+  classical: (theory) =>
+    gaugeGroups(theory).flatMap(({ group }) => {
+      const exponent = classicalExponent(group);
+      if (exponent.isZero()) return [];
+      const volume = periods.reduce((product, period) => product.mul(period));
+      return onRound(theory, [exponential(exponent.neg().div(volume))]);
+    }),
+  modes: () => ({
+    kind: 'refused',
+    message: 'Modes before pairing are listed on the round three-sphere only; choose the unpaired modes.',
+  }),
+  conventions: (theory) => [
+    ...(theory.round ? [] : ['$|\\omega|=\\omega_1+\\omega_2+\\omega_3$']),
+    'Perturbative part: instantons at the three fixed circles are not included.',
+    "$1/|W|$, the measure, and the constant $S_3'(0)/2\\pi$ for each Cartan direction are not included.",
+  ],
+  conditions: [],
+  fluxes: false,
+  specialFunction: 'tripleSine',
+  sources: [
+    { key: 'HST-2012', text: 'K. Hosomichi, R.-K. Seong, S. Terashima, arXiv:1203.0371 (2012)' },
+    { key: 'KQZ-2012', text: 'J. Kallen, J. Qiu, M. Zabzine, arXiv:1206.6008 (2012)' },
+    { key: 'Imamura-2012', text: 'Y. Imamura, arXiv:1210.6308 (2012)' },
+    { key: 'Lockhart-Vafa-2012', text: 'G. Lockhart, C. Vafa, arXiv:1210.5909 (2012)' },
+  ],
+};
+
+/** (4 pi^3/g^2) Tr sigma^2 + (pi k/3) Tr sigma^3. */
+function classicalExponent(group: TheoryGroup): Form {
+  const terms: Form[] = [];
+  if (group.coupling !== null) terms.push(Form.pi.pow(3).scale(4).div(group.coupling.pow(2)).mul(quadratic(group)));
+  if (group.level !== null) terms.push(Form.pi.mul(Form.ratio(1, 3)).mul(group.level).mul(powerSum(group, 3)));
+  return Form.sum(terms);
+}
+
+function tripleSines(
+  sets: readonly WeightedSet[],
+  argument: (position: Form) => Form,
+  power: 1 | -1,
+  from: string,
+): TheoryProduct {
+  return sets.map(
+    ({ weights, multiplicity }): Factor<TheoryWeights> => ({
+      name: 'tripleSine',
+      argument: argument(weights === null ? Form.zero : w),
+      parameters: periods,
+      power: power * multiplicity,
+      weights,
+      half: false,
+      from: [from],
+    }),
+  );
+}
+
+/** A half-hyper takes one of each pair of weights: its factor is even in the weight, so that any choice will do. */
+function hypers(theory: Theory, { kind, name, representations }: Multiplet): TheoryProduct {
+  const sets = matterWeights(theory.groups, representations);
+  const full = tripleSines(sets, (position) => total.mul(half).add(Form.i.mul(position)), -1, name);
+  if (kind === 'hyper') return full;
+  return full.map((factor) =>
+    factor.weights === null ? { ...factor, power: factor.power / 2 } : { ...factor, half: true },
+  );
+}
+
+/** On the round sphere all periods are 1 from the start. */
+function onRound(theory: Theory, product: TheoryProduct): TheoryProduct {
+  if (!theory.round) return product;
+  return substitute(product, (name) => {
+    if (name === '@W') return Form.number(3);
+    return name.startsWith('@w') && name !== WEIGHT ? Form.one : null;
+  });
+}
