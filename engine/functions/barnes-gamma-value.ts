@@ -52,8 +52,8 @@ export const barnesGamma: ValueFunction = {
       return { route: "Spouge's approximation", value: simple(point, values[0] as FixedComplex, working) };
     }
     // Gamma_N(z) = Gamma_{N-1}(z | without w) Gamma_N(z + w) along the smallest period; the main route takes the largest.
-    const sizes = values.map(absoluteComplex);
-    const index = sizes.indexOf(sizes.reduce((least, size) => (size < least ? size : least)));
+    const sizes = periods.map(({ approx }) => Math.hypot(approx.re, approx.im));
+    const index = sizes.indexOf(Math.min(...sizes));
     const others = values.filter((_, k) => k !== index);
     const lower = logBarnesGamma(point, others, working);
     const moved = logBarnesGamma(addComplex(point, values[index] as FixedComplex), values, working);

@@ -34,7 +34,7 @@ describe.each([60, 180, 380])('%i bits', (bits) => {
     const exact = { re: fixedFromText(wanted[0], bits), im: fixedFromText(wanted[1], bits) };
     const bound = value.kind === 'value' ? Number(value.error) : -1;
     // The fixture has 120 significant digits.
-    const printed = Math.abs(Number(wanted[0])) * 10 ** -fixture.digits * 2 ** bits;
+    const printed = Math.abs(Number(wanted[0])) * 10 ** (1 - fixture.digits) * 2 ** bits;
     expect(units(value, exact, bits)).toBeLessThanOrEqual(bound + 1 + printed);
     expect(bound).toBeLessThan(1000);
   });
