@@ -55,6 +55,21 @@ describe('lists of representations', () => {
     }
   });
 
+  // Which determinant power is offered is a decision of this project: there is no outside source.
+  test('U(n) is offered with the shortest highest weights', () => {
+    expect(choices(groupNamed('U(3)'), 8)?.map((choice) => choice.cell)).toEqual([
+      '1',
+      ...['anti', 'fund'],
+      ...['(0,0,-2)', 'sym2'],
+      '(1,0,-1)',
+    ]);
+    expect(
+      choices(groupNamed('U(4)'), 6)
+        ?.map((choice) => choice.cell)
+        .sort(),
+    ).toEqual(['1', 'alt2', 'anti', 'fund']);
+  });
+
   test('a list that would be too long is refused', () => {
     expect(choices(groupNamed('SU(4)'), 10_000_000)).toBeNull();
   });
