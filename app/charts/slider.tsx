@@ -1,4 +1,4 @@
-import { useEffect, useId, useRef } from 'react';
+import { useEffect, useRef } from 'react';
 import type { ParameterCard } from '../../engine/requests/result';
 import { Tex } from '../page/tex';
 import { useSession } from '../state/session';
@@ -19,7 +19,6 @@ export function Slider({ card }: { readonly card: ParameterCard }) {
   const { text, outline, live } = useSession();
   const moved = useSelected(live.state, (values) => values[card.name]?.value);
   const field = useRef<HTMLInputElement>(null);
-  const label = useId();
   const { range } = card;
 
   const commit = useRef<() => void>(() => undefined);
@@ -46,13 +45,13 @@ export function Slider({ card }: { readonly card: ParameterCard }) {
   const shown = moved === undefined ? card.valueText : sliderText(moved, range);
   return (
     <div className={styles.slider}>
-      <span id={label}>
+      <span aria-hidden="true">
         <Tex tex={symbolLatex(card)} />
       </span>
       <input
         ref={field}
         type="range"
-        aria-labelledby={label}
+        aria-label={card.name}
         aria-valuetext={shown}
         data-parameter={card.name}
         min={range.from}

@@ -2,7 +2,7 @@ import { type CSSProperties, lazy, Suspense, useEffect, useRef, useState } from 
 import { PlainText } from '../editor/plain-text';
 import { Page } from '../page/page';
 import { useSession } from '../state/session';
-import { useStore } from '../state/store';
+import { useSelected, useStore } from '../state/store';
 import { copyText } from '../storage/files';
 import { fragmentOf } from '../storage/share-link';
 import { type Command, commandFor } from './commands';
@@ -39,6 +39,11 @@ export function Desk() {
     if (theme === 'system') delete root.dataset.theme;
     else root.dataset.theme = theme;
   }, [theme]);
+
+  const title = useSelected(session.outline.state, ({ outline }) => outline?.title ?? '');
+  useEffect(() => {
+    document.title = title ? `${title} – Spherelathe` : 'Spherelathe';
+  }, [title]);
 
   const style: CSSProperties & { readonly '--split': string } = { '--split': `${split}%` };
   const close = () => setOpened(null);

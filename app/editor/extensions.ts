@@ -40,10 +40,10 @@ export function extensions(session: Session): Extension {
     litLine,
     theme,
     EditorView.lineWrapping,
-    EditorView.contentAttributes.of({ 'aria-label': 'Text of the notebook', spellcheck: 'false' }),
+    EditorView.contentAttributes.of({ 'aria-label': 'Text of the notebook', spellcheck: 'false', tabindex: '0' }),
     EditorView.updateListener.of((update) => {
       const cursor = update.state.selection.main.head;
-      const reported = update.transactions.filter(({ docChanged, annotation }) => docChanged && !annotation(known));
+      const reported = update.transactions.filter((step) => step.docChanged && !step.annotation(known));
       if (reported.length > 0) {
         session.text.typed(changesOf(update.changes), update.state.doc.toString(), cursor);
       } else if (update.selectionSet) session.text.moveCursor(cursor);

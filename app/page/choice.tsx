@@ -1,11 +1,20 @@
 import { type ReactNode, useId } from 'react';
 import styles from './choice.module.css';
 
+interface ChoiceOption<Value> {
+  readonly value: Value;
+  readonly content: ReactNode;
+  /** What it means, shown on pointing. */
+  readonly title?: string;
+  /** How a formula is called in words; without it the content names the option. */
+  readonly name?: string;
+}
+
 interface ChoiceProps<Value extends string | number> {
   readonly label: string;
   /** Whether the label is shown or only heard. */
   readonly shown?: boolean;
-  readonly options: readonly { readonly value: Value; readonly content: ReactNode; readonly title?: string }[];
+  readonly options: readonly ChoiceOption<Value>[];
   readonly value: Value;
   readonly onChange: (value: Value) => void;
 }
@@ -19,7 +28,13 @@ export function Choice<Value extends string | number>({ label, shown, options, v
       <div className={styles.row}>
         {options.map((option) => (
           <label key={option.value} className={styles.option} title={option.title}>
-            <input type="radio" name={name} checked={option.value === value} onChange={() => onChange(option.value)} />
+            <input
+              type="radio"
+              name={name}
+              aria-label={option.name}
+              checked={option.value === value}
+              onChange={() => onChange(option.value)}
+            />
             <span>{option.content}</span>
           </label>
         ))}

@@ -87,16 +87,15 @@ const Piece = memo(function Piece({ piece, theory, opened, expandedId, onToggle 
   const { lit } = useSession();
   const isLit = useSelected(lit.state, (on) => on !== null && on.theory === theory && piece.from.includes(on.row));
   const [row] = piece.from;
-  const point = () => lit.point(theory !== null && row !== undefined ? { theory, row } : null);
-  const leave = () => lit.point(null);
+  const here = theory !== null && row !== undefined ? { theory, row } : null;
   const tex = <Tex tex={`\\displaystyle ${piece.latex}`} />;
   return (
     <span
       className={styles.piece}
       data-lit={isLit || undefined}
       data-piece=""
-      onPointerEnter={point}
-      onPointerLeave={leave}
+      onPointerEnter={() => lit.point(here)}
+      onPointerLeave={() => lit.point(null)}
     >
       {piece.expanded === null ? (
         tex
@@ -107,8 +106,8 @@ const Piece = memo(function Piece({ piece, theory, opened, expandedId, onToggle 
           aria-expanded={opened}
           aria-controls={expandedId}
           title={opened ? 'Hide the weights' : 'Show all weights of this factor'}
-          onFocus={point}
-          onBlur={leave}
+          onFocus={() => lit.focus(here)}
+          onBlur={() => lit.focus(null)}
           onClick={onToggle}
         >
           {tex}

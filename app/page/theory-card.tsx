@@ -19,6 +19,9 @@ const forms: readonly { readonly value: FormulaForm; readonly content: string; r
   { value: 'elementary', content: 'elementary', title: 'In elementary functions, where there is such a form' },
 ];
 
+/** A notation's symbol as it is spelt: `\\Gamma_h` is Gamma_h. */
+const inWords = (latex: string) => latex.replace(/[\\{}]/g, '');
+
 /** The formula to show: while the text is broken, the last one that was whole, marked as such. */
 function useFormula(card: TheoryCardData, form: FormulaForm): { formula: FormulaView; stale: boolean } {
   const { outline } = useSession();
@@ -67,7 +70,11 @@ export function TheoryCard({ card }: { readonly card: TheoryCardData }) {
           <Choice
             label="notation"
             shown
-            options={card.notations.map((latex, at) => ({ value: at, content: <Tex tex={latex} /> }))}
+            options={card.notations.map((latex, at) => ({
+              value: at,
+              content: <Tex tex={latex} />,
+              name: inWords(latex),
+            }))}
             value={notation}
             onChange={(next) => choose({ notation: next })}
           />

@@ -10,8 +10,10 @@ export interface Multiplet {
 
 export interface Lit {
   readonly state: Readable<Multiplet | null>;
-  /** What the pointer or the focus is on; null when it leaves. */
+  /** What the pointer is on; null when it leaves. */
   point(multiplet: Multiplet | null): void;
+  /** What has the focus; the pointer comes before it. */
+  focus(multiplet: Multiplet | null): void;
 }
 
 function rowAtCursor({ outline, revision }: OutlineState, text: TextState): Multiplet | null {
@@ -24,13 +26,14 @@ function rowAtCursor({ outline, revision }: OutlineState, text: TextState): Mult
   return null;
 }
 
-/** The multiplet pointed at, or else the one on the cursor's line. */
+/** The multiplet pointed at, or else the one in focus, or else the one on the cursor's line. */
 export function createLit(outline: Readable<OutlineState>, text: Readable<TextState>): Lit {
   const state = createStore<Multiplet | null>(null);
   let pointed: Multiplet | null = null;
+  let focused: Multiplet | null = null;
 
   function settle(): void {
-    const next = pointed ?? rowAtCursor(outline.get(), text.get());
+    const next = pointed ?? focused ?? rowAtCursor(outline.get(), text.get());
     const before = state.get();
     if (next?.theory !== before?.theory || next?.row !== before?.row) state.set(next);
   }
@@ -41,6 +44,10 @@ export function createLit(outline: Readable<OutlineState>, text: Readable<TextSt
     state,
     point(multiplet) {
       pointed = multiplet;
+      settle();
+    },
+    focus(multiplet) {
+      focused = multiplet;
       settle();
     },
   };

@@ -117,17 +117,16 @@ function Row({ card, row, at, showKind, onCell, onChoose }: RowProps) {
   const edit = useEdit();
   const { lit } = useSession();
   const isLit = useSelected(lit.state, (on) => on !== null && on.theory === card.name && on.row === row.name);
-  const point = () => lit.point({ theory: card.name, row: row.name });
-  const leave = () => lit.point(null);
+  const here = { theory: card.name, row: row.name };
   return (
     <tr
       className={styles.row}
       data-lit={isLit || undefined}
       data-multiplet={row.name}
-      onPointerEnter={point}
-      onPointerLeave={leave}
-      onFocus={point}
-      onBlur={leave}
+      onPointerEnter={() => lit.point(here)}
+      onPointerLeave={() => lit.point(null)}
+      onFocus={() => lit.focus(here)}
+      onBlur={() => lit.focus(null)}
     >
       <th scope="row">
         <Cell
