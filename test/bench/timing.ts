@@ -68,17 +68,23 @@ export function calibration(): number {
   return timeInTurns([loop], 5)[0] as number;
 }
 
+/** Debian's own Python comes second: its modules are there where another Python is first in the search path. */
+const PYTHONS = ['python3', '/usr/bin/python3'];
+
 /** Standard output of a Python program, or null where Python or a module it needs is missing, or the time is up. */
 export function runPython(program: string, milliseconds: number): string | null {
-  try {
-    return execFileSync('python3', ['-c', program], {
-      encoding: 'utf8',
-      timeout: milliseconds,
-      stdio: ['ignore', 'pipe', 'ignore'],
-    });
-  } catch {
-    return null;
+  for (const python of PYTHONS) {
+    try {
+      return execFileSync(python, ['-c', program], {
+        encoding: 'utf8',
+        timeout: milliseconds,
+        stdio: ['ignore', 'pipe', 'ignore'],
+      });
+    } catch {
+      // The next one may have what this one lacks.
+    }
   }
+  return null;
 }
 
 /** log10 of |a - b| / max(1, |b|) for fixed point numbers. */
