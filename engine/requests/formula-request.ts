@@ -50,5 +50,5 @@ export function printableTheory(analysis: Analysis, name: string, notation: numb
     known ??= elementary(sphere, theory, oneLoop, fixed);
     return known;
   };
-  return { sphere, theory, notation, oneLoop, elementary: reduced };
+  return { sphere, theory, notation, oneLoop, elementary: reduced, printed: new Map() };
 }

@@ -21,6 +21,8 @@ export interface Printable {
   readonly oneLoop: TheoryProduct;
   /** The same in elementary functions as far as they go, at the values of parameters without a range; worked out once. */
   readonly elementary: () => ElementaryProduct;
+  /** Pieces of products already printed, by the product: where nothing reduces, two forms are one. */
+  readonly printed: Map<string, readonly Piece[]>;
 }
 
 export const FORMS: readonly FormulaForm[] = ['modes', 'unpaired', 'functions', 'elementary'];
@@ -60,7 +62,14 @@ function definedView(printable: Printable, form: FormulaForm): FormulaView {
     return view(printable, modesLatex(theory.groups, modes.towers), notes);
   }
   const style = form === 'unpaired' ? ({ kind: 'modes' } as const) : ({ kind: 'function', notation } as const);
-  return view(printable, productLatex(theory.groups, made.product, style), [...remarks(form, made), ...notes]);
+  const key = `${style.kind}|${made.product.map(factorKey).join('|')}`;
+  const pieces = printable.printed.get(key) ?? productLatex(theory.groups, made.product, style);
+  printable.printed.set(key, pieces);
+  return view(printable, pieces, [...remarks(form, made), ...notes]);
+}
+
+function factorKey({ name, argument, parameters, power, weights, half, from }: TheoryProduct[number]): string {
+  return [name, argument.key, parameters.map((p) => p.key), power, weights?.key, half, from].join(';');
 }
 
 /** What the reader of an elementary formula has to know: where it holds, and what could not be reduced. */
