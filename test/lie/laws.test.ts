@@ -11,6 +11,9 @@ import { type Term, term } from '../../engine/lie/terms';
 import { conjugateLabels } from '../../engine/lie/weyl';
 import { groupNamed, representationNamed, simplyConnected } from './named';
 
+/** Random tests take a second on an idle machine; a busy one gets this many milliseconds. */
+const PATIENCE = 60_000;
+
 const smallTypes = allSimpleTypes().filter(({ rank }) => rank <= 4);
 
 /** A simple type and labels of small sum, so that products stay small. */
@@ -39,83 +42,99 @@ function total(terms: readonly Term[], value: (labels: readonly number[]) => big
 describe('sum rules of tensor products', () => {
   // Dynkin, Amer. Math. Soc. Transl. (2) 6 (1957) 111: dimensions multiply, the second index obeys the product rule;
   // Okubo, Phys. Rev. D16 (1977) 3528 for the third. 1000 random products of rank at most 4.
-  test('dimensions, indices, cubic anomalies, centre classes', () => {
-    fc.assert(
-      fc.property(pair, ([type, a, b]) => {
-        const system = rootSystem(type);
-        const terms = product(type, a, b);
-        const [da, db] = [dimension(system, a), dimension(system, b)];
-        expect(total(terms, (labels) => dimension(system, labels))).toBe(da * db);
-        const index = (labels: readonly number[]): bigint => dynkinIndices(system, labels)[0] as bigint;
-        expect(total(terms, index)).toBe(da * index(b) + index(a) * db);
-        const cubic = (labels: readonly number[]): bigint => cubicAnomaly(system, labels) ?? 0n;
-        expect(total(terms, cubic)).toBe(da * cubic(b) + cubic(a) * db);
-        const sum = centreClass(
-          system,
-          a.map((label, i) => label + (b[i] as number)),
-        );
-        for (const { labels, multiplicity } of terms) {
-          expect(multiplicity).toBeGreaterThan(0);
-          expect(centreClass(system, labels)).toEqual(sum);
-        }
-      }),
-      { numRuns: 1000 },
-    );
-  });
+  test(
+    'dimensions, indices, cubic anomalies, centre classes',
+    () => {
+      fc.assert(
+        fc.property(pair, ([type, a, b]) => {
+          const system = rootSystem(type);
+          const terms = product(type, a, b);
+          const [da, db] = [dimension(system, a), dimension(system, b)];
+          expect(total(terms, (labels) => dimension(system, labels))).toBe(da * db);
+          const index = (labels: readonly number[]): bigint => dynkinIndices(system, labels)[0] as bigint;
+          expect(total(terms, index)).toBe(da * index(b) + index(a) * db);
+          const cubic = (labels: readonly number[]): bigint => cubicAnomaly(system, labels) ?? 0n;
+          expect(total(terms, cubic)).toBe(da * cubic(b) + cubic(a) * db);
+          const sum = centreClass(
+            system,
+            a.map((label, i) => label + (b[i] as number)),
+          );
+          for (const { labels, multiplicity } of terms) {
+            expect(multiplicity).toBeGreaterThan(0);
+            expect(centreClass(system, labels)).toEqual(sum);
+          }
+        }),
+        { numRuns: 1000 },
+      );
+    },
+    PATIENCE,
+  );
 
   // Schur's lemma: the trivial representation occurs in a x b once if b is dual to a, else never.
-  test('the trivial representation occurs exactly in products with the dual', () => {
-    fc.assert(
-      fc.property(pair, ([type, a, b]) => {
-        const system = rootSystem(type);
-        const dual = conjugateLabels(system, a);
-        const trivial = (terms: readonly Term[]): number =>
-          terms.find(({ labels }) => labels.every((label) => label === 0))?.multiplicity ?? 0;
-        expect(trivial(product(type, a, dual))).toBe(1);
-        expect(trivial(product(type, a, b))).toBe(b.join() === dual.join() ? 1 : 0);
-      }),
-      { numRuns: 100 },
-    );
-  });
+  test(
+    'the trivial representation occurs exactly in products with the dual',
+    () => {
+      fc.assert(
+        fc.property(pair, ([type, a, b]) => {
+          const system = rootSystem(type);
+          const dual = conjugateLabels(system, a);
+          const trivial = (terms: readonly Term[]): number =>
+            terms.find(({ labels }) => labels.every((label) => label === 0))?.multiplicity ?? 0;
+          expect(trivial(product(type, a, dual))).toBe(1);
+          expect(trivial(product(type, a, b))).toBe(b.join() === dual.join() ? 1 : 0);
+        }),
+        { numRuns: 100 },
+      );
+    },
+    PATIENCE,
+  );
 
-  test('symmetric and antisymmetric square add up to the square', () => {
-    fc.assert(
-      fc.property(pair, ([type, a]) => {
-        const group = groupNamed(simplyConnected(type));
-        const both = (['sym', 'alt'] as const).flatMap((kind) => {
-          const terms = tensorPower(group, kind, 2, [term(a)], newBudget());
-          if ('kind' in terms) throw new Error(terms.what);
-          return terms;
-        });
-        const counts = new Map<string, number>();
-        for (const { labels, multiplicity } of both) {
-          counts.set(labels.join(), (counts.get(labels.join()) ?? 0) + multiplicity);
-        }
-        const square = product(type, a, a).map(({ labels, multiplicity }) => [labels.join(), multiplicity] as const);
-        expect(new Map([...counts].sort())).toEqual(new Map([...square].sort()));
-      }),
-      { numRuns: 100 },
-    );
-  });
+  test(
+    'symmetric and antisymmetric square add up to the square',
+    () => {
+      fc.assert(
+        fc.property(pair, ([type, a]) => {
+          const group = groupNamed(simplyConnected(type));
+          const both = (['sym', 'alt'] as const).flatMap((kind) => {
+            const terms = tensorPower(group, kind, 2, [term(a)], newBudget());
+            if ('kind' in terms) throw new Error(terms.what);
+            return terms;
+          });
+          const counts = new Map<string, number>();
+          for (const { labels, multiplicity } of both) {
+            counts.set(labels.join(), (counts.get(labels.join()) ?? 0) + multiplicity);
+          }
+          const square = product(type, a, a).map(({ labels, multiplicity }) => [labels.join(), multiplicity] as const);
+          expect(new Map([...counts].sort())).toEqual(new Map([...square].sort()));
+        }),
+        { numRuns: 100 },
+      );
+    },
+    PATIENCE,
+  );
 });
 
 // Weyl's dimension formula against the multiplicities of Freudenthal's recursion: two independent routes.
-test('multiplicities times orbit sizes add up to the dimension', () => {
-  const any = fc.constantFrom(...allSimpleTypes()).chain((type) => fc.tuple(fc.constant(type), irrep(type)));
-  fc.assert(
-    fc.property(any, ([type, labels]) => {
-      const system = rootSystem(type);
-      const character = dominantCharacter(system, labels, 200_000);
-      if (!character) return;
-      let sum = 0n;
-      for (let k = 0; k < character.count; k++) {
-        sum += BigInt(character.multiplicities[k] as number) * BigInt(character.orbitSizes[k] as number);
-      }
-      expect(sum).toBe(dimension(system, labels));
-    }),
-    { numRuns: 150 },
-  );
-});
+test(
+  'multiplicities times orbit sizes add up to the dimension',
+  () => {
+    const any = fc.constantFrom(...allSimpleTypes()).chain((type) => fc.tuple(fc.constant(type), irrep(type)));
+    fc.assert(
+      fc.property(any, ([type, labels]) => {
+        const system = rootSystem(type);
+        const character = dominantCharacter(system, labels, 200_000);
+        if (!character) return;
+        let sum = 0n;
+        for (let k = 0; k < character.count; k++) {
+          sum += BigInt(character.multiplicities[k] as number) * BigInt(character.orbitSizes[k] as number);
+        }
+        expect(sum).toBe(dimension(system, labels));
+      }),
+      { numRuns: 150 },
+    );
+  },
+  PATIENCE,
+);
 
 /** All labels with sum of comark times label at most the level: the integrable weights of the affine algebra. */
 function integrable(system: RootSystem & { marks: readonly number[] }, level: number): number[][] {
