@@ -1,242 +1,41 @@
-import { fixedFromNumber, fixedFromRatio, integerSqrt } from '../../engine/arithmetic/fixed';
+import { fixedFromNumber } from '../../engine/arithmetic/fixed';
 import type { FixedComplex } from '../../engine/arithmetic/fixed-complex';
-import { Rational } from '../../engine/exact/rational';
-import type { DoubleKernel, ExactParameter } from '../../engine/functions/special-function';
-import { functions } from '../../engine/functions/table';
-import { valueFunctions } from '../../engine/functions/values';
+import { ARRAY, ARRAYS, PRECISE, PRELUDE } from './functions-cases';
 import type { ComparisonRow } from './timing';
 import { calibration, log10Difference, runPython, timeInTurns } from './timing';
 
 const DIGITS = [50, 200] as const;
 const ROUNDS = 3;
 const PYTHON_PATIENCE = 180_000;
-/** Values in one call of a kernel in doubles. */
-const ARRAY = 10_000;
 /** Bits by which references are finer. */
 const EXTRA = 40;
-
-function rational(numerator: number, denominator = 1): ExactParameter {
-  const value = Rational.of(numerator, denominator);
-  return {
-    square: value.mul(value),
-    value: (bits) => ({ re: fixedFromRatio(value.numerator, value.denominator, bits), im: 0n }),
-    approx: { re: value.toNumber(), im: 0 },
-  };
-}
-
-/** re + i im as an argument known to any number of bits. */
-function complexArgument(re: ExactParameter, im: ExactParameter): ExactParameter {
-  return {
-    square: null,
-    value: (bits) => ({ re: re.value(bits).re, im: im.value(bits).re }),
-    approx: { re: re.approx.re, im: im.approx.re },
-  };
-}
-
-/** b = 2^(1/4): irrational, no double poles. */
-const GENERIC: ExactParameter = {
-  square: null,
-  value: (bits) => ({ re: integerSqrt(integerSqrt(2n << BigInt(4 * bits))), im: 0n }),
-  approx: { re: 2 ** 0.25, im: 0 },
-};
-
-/** sqrt(2) as a period. */
-const ROOT: ExactParameter = {
-  square: Rational.of(2),
-  value: (bits) => ({ re: integerSqrt(2n << BigInt(2 * bits)), im: 0n }),
-  approx: { re: Math.SQRT2, im: 0 },
-};
-
-/** A function to any number of digits, and the same in mpmath: an expression in the names of `PRELUDE`. */
-interface PreciseCase {
-  readonly name: string;
-  readonly python: string;
-  readonly peer: string;
-  /** Digits up to which the peer is run live; it needs many seconds beyond. */
-  readonly live: number;
-  readonly compute: (bits: number) => FixedComplex & { readonly kind: string };
-}
-
-const PRECISE: readonly PreciseCase[] = [
-  {
-    name: 'log Gamma',
-    python: 'mp.loggamma(mp.mpc(mp.mpf(13)/10, mp.mpf(21)/10))',
-    peer: 'mpmath loggamma',
-    live: 200,
-    compute: (bits) => log('gamma', [complexArgument(rational(13, 10), rational(21, 10))], bits),
-  },
-  {
-    name: 'log s_b, real x',
-    python: 'double_sine(mp.mpf(3)/10, mp.root(2, 4))',
-    peer: 'mpmath quad',
-    live: 50,
-    compute: (bits) => log('doubleSine', [rational(3, 10), GENERIC], bits),
-  },
-  {
-    name: 'log Upsilon_b, on the axis',
-    python: 'upsilon(mp.mpc(0, 1), mp.mpf(4)/5)',
-    peer: 'mpmath quad',
-    live: 50,
-    compute: (bits) => log('upsilon', [complexArgument(rational(41, 40), rational(1)), rational(4, 5)], bits),
-  },
-  {
-    name: 'log S_3, round, on the axis',
-    python: 'triple_sine(mp.mpc(0, 1), [mp.mpf(1)] * 3)',
-    peer: 'mpmath quad',
-    live: 50,
-    compute: (bits) =>
-      log('tripleSine', [complexArgument(rational(3, 2), rational(1)), rational(1), rational(1), rational(1)], bits),
-  },
-  {
-    name: 'log S_3, periods 1, sqrt 2, 2',
-    python: 'triple_sine(mp.mpc(0, 1), [mp.mpf(1), mp.sqrt(2), mp.mpf(2)])',
-    peer: 'mpmath quad',
-    live: 50,
-    compute: (bits) => log('tripleSine', [halfTotal(), rational(1), ROOT, rational(2)], bits),
-  },
-  {
-    name: 'dilogarithm',
-    python: 'mp.polylog(2, mp.mpc(mp.mpf(2)/5, mp.mpf(7)/10))',
-    peer: 'mpmath polylog',
-    live: 200,
-    compute: (bits) => value('dilog', [complexArgument(rational(2, 5), rational(7, 10))], bits),
-  },
-  {
-    name: 'zeta(s, a), complex s',
-    python: 'mp.zeta(mp.mpc(mp.mpf(1)/2, 3), mp.mpf(7)/10)',
-    peer: 'mpmath zeta',
-    live: 200,
-    compute: (bits) => value('hurwitz', [complexArgument(rational(1, 2), rational(3)), rational(7, 10)], bits),
-  },
-  {
-    name: 'log Gamma_2(z | 1, 1)',
-    python: 'mp.zeta(-1, 1, 1) + (mp.mpf(7)/3 - 1)/2*mp.log(2*mp.pi) - mp.log(mp.barnesg(mp.mpf(7)/3))',
-    peer: 'mpmath barnesg',
-    live: 200,
-    compute: (bits) => value('barnesgamma', [rational(7, 3), rational(1), rational(1)], bits),
-  },
-];
-
-/** (1 + sqrt 2 + 2)/2 + i. */
-function halfTotal(): ExactParameter {
-  return {
-    square: null,
-    value: (bits) => ({ re: ((3n << BigInt(bits + 1)) + 2n * ROOT.value(bits).re) >> 2n, im: 1n << BigInt(bits) }),
-    approx: { re: (3 + Math.SQRT2) / 2, im: 1 },
-  };
-}
-
-function log(name: keyof typeof functions, args: readonly ExactParameter[], bits: number) {
-  const [x, ...parameters] = args as readonly [ExactParameter, ...ExactParameter[]];
-  const result = functions[name].precise(x.value(bits), parameters, bits);
-  if (result.kind !== 'value') throw new Error(`${name}: ${result.kind}`);
-  return result;
-}
-
-function value(word: keyof typeof valueFunctions, args: readonly ExactParameter[], bits: number) {
-  const result = valueFunctions[word].evaluate(args, bits);
-  if (result.kind !== 'value') throw new Error(`${word}: ${result.kind}`);
-  return result;
-}
-
-/** A kernel in doubles on an array, and one value in mpmath at 15 digits. */
-interface ArrayCase {
-  readonly name: string;
-  readonly python: string;
-  readonly kernel: () => DoubleKernel;
-  /** Argument k of the array; the last is the one that mpmath computes. */
-  readonly re: (k: number) => number;
-  readonly im: ((k: number) => number) | null;
-}
-
-const ARRAYS: readonly ArrayCase[] = [
-  {
-    name: 'log s_b, 10,000 real x, b = 2^(1/4)',
-    python: 'double_sine(mp.mpf(3), mp.root(2, 4))',
-    kernel: () => functions.doubleSine.double([{ re: 2 ** 0.25, im: 0 }]),
-    re: (k) => -3 + (6 * (k + 1)) / ARRAY,
-    im: null,
-  },
-  {
-    name: 'log s_b, 10,000 real x, b = 1',
-    python: 'double_sine(mp.mpf(3), mp.mpf(1))',
-    kernel: () => functions.doubleSine.double([{ re: 1, im: 0 }]),
-    re: (k) => -3 + (6 * (k + 1)) / ARRAY,
-    im: null,
-  },
-  {
-    name: 'log s_b, 10,000 complex x, b = 2^(1/4)',
-    python: 'double_sine(mp.mpc(0.25, 0.25), mp.root(2, 4))',
-    kernel: () => functions.doubleSine.double([{ re: 2 ** 0.25, im: 0 }]),
-    re: (k) => -3 + (3.25 * (k + 1)) / ARRAY,
-    im: () => 0.25,
-  },
-  {
-    name: 'log Gamma, 10,000 complex z',
-    python: 'mp.loggamma(mp.mpc(0.75, 3))',
-    kernel: () => functions.gamma.double([]),
-    re: () => 0.75,
-    im: (k) => -3 + (6 * (k + 1)) / ARRAY,
-  },
-  {
-    name: 'log Upsilon_b, 10,000 x on the axis, b = 1',
-    python: 'upsilon(mp.mpc(0, 3), mp.mpf(1))',
-    kernel: () => functions.upsilon.double([{ re: 1, im: 0 }]),
-    re: () => 1,
-    im: (k) => -3 + (6 * (k + 1)) / ARRAY,
-  },
-  {
-    name: 'log S_3, 10,000 x on the axis, round',
-    python: 'triple_sine(mp.mpc(0, 3), [mp.mpf(1)] * 3)',
-    kernel: () => functions.tripleSine.double([1, 1, 1].map((re) => ({ re, im: 0 }))),
-    re: () => 1.5,
-    im: (k) => -3 + (6 * (k + 1)) / ARRAY,
-  },
-];
-
-/**
- * mpmath's side: defining integrals by quad, moved off the poles at 0 so that nothing cancels; Upsilon from its own integral.
- * log s_b(x) = -log s_b(-x) brings Re x below 0.
- */
-const PRELUDE = `
-import time, mpmath as mp
-def double_sine(x, b):
-    i, a = mp.mpc(0, 1), mp.pi * min(b, 1 / b) / 2
-    def integrand(u):
-        w = mp.mpc(u, a)
-        return mp.exp(2 * i * x * w) / (4 * w * mp.sinh(b * w) * mp.sinh(w / b))
-    return i * mp.pi * x ** 2 / 2 + i * mp.pi * (b ** 2 + b ** -2) / 24 - mp.quad(integrand, [-mp.inf, 0, mp.inf])
-def upsilon(z, b):
-    mp.mp.prec += 60
-    f = lambda t: (z ** 2 * mp.exp(-2 * t) - mp.sinh(z * t) ** 2 / (mp.sinh(b * t) * mp.sinh(t / b))) / t
-    v = mp.quad(f, [0, 1, 4, 16, mp.inf])
-    mp.mp.prec -= 60
-    return v
-def triple_sine(z, w):
-    a = mp.pi / max(w) / 2
-    def integrand(u):
-        t = mp.mpc(u, a)
-        return mp.exp(2 * z * t) / (8 * t * mp.sinh(w[0] * t) * mp.sinh(w[1] * t) * mp.sinh(w[2] * t))
-    cubic = (z ** 3 - sum(v * v for v in w) * z / 4) / (w[0] * w[1] * w[2])
-    return -mp.mpc(0, 1) * mp.pi * cubic / 6 - mp.quad(integrand, [-mp.inf, -4, 0, 4, mp.inf])
-def clock(f):
-    f()
-    count = 1
-    while True:
-        start = time.process_time()
-        for _ in range(count): f()
-        passed = time.process_time() - start
-        if passed > 0.01: return passed / count * 1e6
-        count *= 2
-`;
 
 /**
  * Microseconds a call with mpmath 1.2.1 on gmpy beside the calibration loop of timing.ts, measured by the same program on a
  * two-core machine; used (scaled) where Python is missing.
  */
 const RECORDED: { readonly calibration: number; readonly times: Readonly<Record<string, number>> } = {
-  calibration: 0,
-  times: {},
+  calibration: 300,
+  times: {
+    'log s_b, 10,000 real x, b = 2^(1/4)|15': 6.1e4,
+    'log s_b, 10,000 real x, b = 1|15': 7.0e4,
+    'log s_b, 10,000 complex x, b = 2^(1/4)|15': 2.6e4,
+    'log Gamma, 10,000 complex z|15': 57,
+    'log Upsilon_b, 10,000 x on the axis, b = 1|15': 8.7e4,
+    'log S_3, 10,000 x on the axis, round|15': 5.7e4,
+    'log Gamma|50': 104,
+    'log Gamma|200': 840,
+    'log s_b, real x|50': 2.65e5,
+    'log Upsilon_b, on the axis|50': 1.9e5,
+    'log S_3, round, on the axis|50': 4.6e5,
+    'log S_3, periods 1, sqrt 2, 2|50': 4.3e5,
+    'dilogarithm|50': 1.5e3,
+    'dilogarithm|200': 8.7e3,
+    'zeta(s, a), complex s|50': 2.5e3,
+    'zeta(s, a), complex s|200': 2.3e4,
+    'log Gamma_2(z | 1, 1)|50': 2.9e3,
+    'log Gamma_2(z | 1, 1)|200': 2.0e4,
+  },
 };
 
 interface PeerResult {
@@ -290,7 +89,7 @@ function worst(a: FixedComplex, b: FixedComplex, bits: number): number {
 
 /** Every function in doubles on arrays of 10,000 (microseconds a value) and to 50 and 200 digits, against mpmath. */
 export function run(): ComparisonRow[] {
-  const speed = RECORDED.calibration === 0 ? 1 : calibration() / RECORDED.calibration;
+  const speed = calibration() / RECORDED.calibration;
   const live = askMpmath();
   const row = (
     name: string,
