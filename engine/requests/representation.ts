@@ -8,13 +8,22 @@ import { parseRepresentation, type Representation } from '../lie/representation'
 import { type Answer, failure } from './answer';
 import type { RepresentationResult } from './result';
 
+/** Distinct weights are counted orbit by orbit, not listed; beyond this the dominant ones alone are too many to show. */
+const MAXIMAL_WEIGHTS = 50_000_000;
+
 /** `representation SU(3): fund x sym2`. */
 export function runRepresentation(request: RepresentationRequest): Answer {
   const group = parseGroup(request.group.text);
   if (group.kind === 'refusal') return failure(request.group.text, refusalText(group));
-  const read = parseRepresentation(group.group, request.representation.text);
+  const read = parseRepresentation(group.group, request.representation.text, Number.POSITIVE_INFINITY);
   if (read.kind === 'refusal') return failure(group.group.name, refusalText(read));
   const { representation } = read;
+  if (!representation.hasWeightsWithin(MAXIMAL_WEIGHTS)) {
+    return failure(
+      group.group.name,
+      `This representation has more than ${MAXIMAL_WEIGHTS} distinct weights, the limit here.`,
+    );
+  }
   return {
     kind: 'representation',
     of: group.group.name,
