@@ -1,6 +1,6 @@
-import type { Rational } from '../../exact/rational';
 import type { Representation } from '../../lie/representation';
 import type { SuperpotentialTerm, Theory } from '../theory';
+import type { RValue } from './r-values';
 
 /** A chiral field of the matter content, seen by the gauge groups. A hyper is two of them. */
 export interface Field {
@@ -10,7 +10,7 @@ export interface Field {
   readonly representations: readonly Representation[];
   /** Dimension under the flavour groups. */
   readonly copies: number;
-  readonly rCharge: Rational | number;
+  readonly rCharge: RValue;
 }
 
 /**

@@ -16,6 +16,7 @@ export interface CocharacterLattice {
   readonly simple: number;
   /** The primitive vectors dual to the walls. */
   readonly edges: readonly (readonly number[])[];
+  readonly positiveRoots: readonly (readonly number[])[];
   /** Sum of the positive roots. */
   readonly rootSum: readonly number[];
   /** The form that multiplies the level, and the trace, on the basis. */
@@ -38,18 +39,16 @@ export function cocharacterLattice(group: Group): CocharacterLattice {
   ]);
   // U(n) and U(1): the last coordinate splits the chamber, which otherwise contains a line.
   if (group.abelianRank > 0) walls.push(Array.from({ length: rank }, (_, k) => (k === rank - 1 ? 1 : 0)));
-  const rootSum = new Array<number>(rank).fill(0);
-  for (const { coordinates } of group.system.positiveRoots) {
-    coordinates.forEach((c, i) => {
-      for (let k = 0; k < rank; k++) rootSum[k] = (rootSum[k] as number) + c * ((walls[i] as number[])[k] as number);
-    });
-  }
+  const positiveRoots = group.system.positiveRoots.map(({ coordinates }) =>
+    Array.from({ length: rank }, (_, k) => coordinates.reduce((sum, c, i) => sum + c * (walls[i]?.[k] as number), 0)),
+  );
   const lattice: CocharacterLattice = {
     rank,
     walls,
     simple: group.simpleRoots.length,
     edges: dualVectors(walls),
-    rootSum,
+    positiveRoots,
+    rootSum: Array.from({ length: rank }, (_, k) => positiveRoots.reduce((sum, root) => sum + (root[k] as number), 0)),
     form: cocharacters.map((x) => cocharacters.map((y) => pairing(x, y).mul(levelScale))),
     trace: cocharacters.map((x) => x.reduce((sum, entry) => sum.add(entry), Rational.zero)),
   };

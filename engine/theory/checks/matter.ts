@@ -4,6 +4,7 @@ import { Rational } from '../../exact/rational';
 import { dimension } from '../../lie/invariants';
 import type { Representation } from '../../lie/representation';
 import type { Multiplet, Theory } from '../theory';
+import type { RValue } from './r-values';
 
 /**
  * A multiplet counted in chirals: a hyper stands for one in its representation and one in the dual, a half-hyper for
@@ -88,7 +89,7 @@ export function levelValue(theory: Theory, level: Form | null): Rational {
 }
 
 /** An R-charge at the parameters' values: exact where it is rational, else in doubles; its real part where it is complex. */
-export function rChargeValue(theory: Theory, form: Form): Rational | number {
+export function rChargeValue(theory: Theory, form: Form): RValue {
   const value = form.substitute((name) => theory.parameters.get(name) ?? null);
   return value.toGaussian()?.re ?? formDouble(value, () => null)?.re ?? Number.NaN;
 }

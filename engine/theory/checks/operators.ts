@@ -4,6 +4,7 @@ import type { Representation } from '../../lie/representation';
 import { gaugeGroups, type Theory } from '../theory';
 import { type Field, type FTerm, fTermOf } from './f-terms';
 import { dimensionWithout, matterOf, rChargeValue } from './matter';
+import { addR, compareR, plainR, type RValue } from './r-values';
 import { containsSinglet } from './singlet';
 import { nameLatex } from './words';
 
@@ -11,7 +12,7 @@ import { nameLatex } from './words';
 export interface Operator {
   readonly latex: string;
   readonly fields: readonly Field[];
-  readonly rCharge: Rational | number;
+  readonly rCharge: RValue;
   readonly fTerm: FTerm;
 }
 
@@ -63,23 +64,8 @@ function combinations(fields: readonly Field[], count: number, from = 0): Field[
     .flatMap((field, k) => combinations(fields, count - 1, from + k).map((rest) => [field, ...rest]));
 }
 
-export function addR(a: Rational | number, b: Rational | number): Rational | number {
-  return typeof a === 'number' || typeof b === 'number' ? plain(a) + plain(b) : a.add(b);
-}
-
-/** -1, 0 or 1 as the R-charge is below, at or above a bound; doubles within 1e-9 count as equal. */
-export function compareR(value: Rational | number, bound: Rational): number {
-  if (typeof value !== 'number') return value.compare(bound);
-  const difference = value - bound.toNumber();
-  return Math.abs(difference) < 1e-9 ? 0 : Math.sign(difference);
-}
-
-function plain(value: Rational | number): number {
-  return typeof value === 'number' ? value : value.toNumber();
-}
-
-function totalR(product: readonly Field[]): Rational | number {
-  return product.reduce<Rational | number>((sum, { rCharge }) => addR(sum, rCharge), Rational.zero);
+function totalR(product: readonly Field[]): RValue {
+  return product.reduce<RValue>((sum, { rCharge }) => addR(sum, rCharge), Rational.zero);
 }
 
 function isLight(product: readonly Field[]): boolean {
@@ -145,7 +131,7 @@ function baryons(theory: Theory, fields: readonly Field[]): Field[][] {
     }
     return [...kinds.values()].flatMap((copies) => {
       if (copies.length < size) return [];
-      return [copies.sort((a, b) => plain(a.rCharge) - plain(b.rCharge)).slice(0, size)];
+      return [copies.sort((a, b) => plainR(a.rCharge) - plainR(b.rCharge)).slice(0, size)];
     });
   });
 }

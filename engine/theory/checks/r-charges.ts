@@ -5,8 +5,9 @@ import type { Condition, Finding } from './condition';
 import { coulombBranch } from './coulomb-branch';
 import { fluxLatex } from './direction';
 import { growthOf } from './growth';
-import { compareR, fieldsOf, HALF, type Operator, operatorsOf } from './operators';
-import { decimal, listWords, rationalLatex } from './words';
+import { fieldsOf, HALF, type Operator, operatorsOf } from './operators';
+import { compareR, plainR, rLatex } from './r-values';
+import { listWords } from './words';
 
 /** Charged chirals with 0 < R < 2: no pole of the integrand crosses the real Coulomb parameters. */
 export const contour: Condition = {
@@ -49,7 +50,7 @@ export const unitarity: Condition = {
     if (low.length > 0) return low.map(lowFinding);
     const [first, ...others] = operators;
     if (first === undefined) return [];
-    const least = others.reduce((best, one) => (number(one.rCharge) < number(best.rCharge) ? one : best), first);
+    const least = others.reduce((best, one) => (plainR(one.rCharge) < plainR(best.rCharge) ? one : best), first);
     return [
       {
         verdict: 'holds',
@@ -72,7 +73,7 @@ const GROUNDS = {
 function lowFinding({ latex, rCharge, fTerm }: Operator): Finding {
   const below = compareR(rCharge, HALF) < 0;
   const lead = `The chiral operator $${latex}$ has $R=${rLatex(rCharge)}$`;
-  if (!below && Number.isFinite(number(rCharge))) {
+  if (!below && Number.isFinite(plainR(rCharge))) {
     return { detail: latex, verdict: 'holds', says: `${lead}, the bound itself: it is free.`, ...GROUNDS };
   }
   const words =
@@ -101,12 +102,4 @@ function bareMonopole(
   const latex = `V_{${fluxLatex(theory, branch, lightest.point, print)}}`;
   const rCharge = growth.exactMonopoles ? Rational.of(lightest.value, growth.scale) : lightest.value / growth.scale;
   return { bare: [{ latex, fields: [], rCharge, fTerm: 'none' }], searched };
-}
-
-function rLatex(value: Rational | number): string {
-  return typeof value === 'number' ? decimal(value) : rationalLatex(value);
-}
-
-function number(value: Rational | number): number {
-  return typeof value === 'number' ? value : value.toNumber();
 }

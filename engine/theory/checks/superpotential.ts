@@ -7,7 +7,8 @@ import type { Condition, Finding } from './condition';
 import { containsSinglet } from './singlet';
 import { decimal, groupLatex, listWords, nameLatex, rationalLatex } from './words';
 
-const SOURCE = 'O. Aharony, A. Hanany, K. Intriligator, N. Seiberg, M. J. Strassler, hep-th/9703110 (1997), section 2';
+const SOURCE =
+  'E. Witten, hep-th/9301042 (1993); O. Aharony, A. Hanany, K. Intriligator, N. Seiberg, M. J. Strassler, hep-th/9703110 (1997)';
 
 /** Two numbers closer than this are taken as equal as far as doubles can tell. */
 const RESOLUTION = 1e-11;
