@@ -77,7 +77,7 @@ export function spectrumChecks({ numbers, closed }: SpectrumView): SpectrumCheck
       verdict: scale.isZero() ? 'holds' : 'fails',
       says: scale.isZero()
         ? 'The determinant does not depend on the unit of the eigenvalues.'
-        : `Multiplying every linear factor by $c$ multiplies the determinant by $c^{${sumLatex(scale)}}$.`,
+        : `Multiplying every linear factor by $c$ multiplies the determinant by $c${scale.equals(Form.one) ? '' : `^{${sumLatex(scale)}}`}$.`,
       formula: '\\sum_j\\zeta_j(0)=0',
       source: 'DLMF 25.11.14 for each linear factor',
     });
