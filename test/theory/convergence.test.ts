@@ -115,6 +115,13 @@ describe('FI parameters', () => {
   });
 });
 
+// The limits on weights and denominators are this project's own.
+test('what would take too long is left open', () => {
+  const large = theoryOf(['gauge G = SU(9)', ...rows('[2,1,0,0,0,0,0,1] 1/2')]);
+  const fine = theoryOf(['gauge G = U(1)', ...rows('1/1009 1/2')]);
+  expect([verdict(convergence, large), verdict(convergence, fine)]).toEqual(['unknown', 'unknown']);
+});
+
 test('irrational R-charges are left open at the border only', () => {
   const at = (r: string) => verdict(convergence, theoryOf(['gauge G = U(1)', ...rows('1 2-r', '-1 r')], { r }));
   // (1/2)(1 - (2 - r)) + (1/2)(1 - r) = 0, which doubles cannot tell.

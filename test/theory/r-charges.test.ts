@@ -11,7 +11,9 @@ test('charged chirals outside 0 < R < 2 are named', () => {
     'holds: All charged chirals have $0<R<2$: no pole lies on the wrong side of the real contour.',
   ]);
   for (const r of ['0', '2', '5/2', '-1/3']) expect(at(r)[0]).toMatch(/^fails: \$R\(q\)=/);
-  expect(says(contour, theoryOf(['gauge G = U(1)', ...rows('chiral s 0 5/2')]))).toEqual([]);
+  for (const row of ['chiral s 0 5/2', 'hyper h 1 1/2']) {
+    expect(says(contour, theoryOf(['gauge G = U(1)', ...rows(row)]))).toEqual([]);
+  }
 });
 
 // The bound R >= 1/2 and what happens below it: S. Safdi, I. Klebanov, J. Lee, arXiv:1212.4502.

@@ -15,7 +15,8 @@ export const contour: Condition = {
   title: 'R-charges and the contour',
   examine: (theory, print) => {
     const charged = fieldsOf(theory, print).filter((field) => !field.representations.every((one) => one.isTrivial));
-    if (charged.length === 0) return [];
+    // Hypers have R = 1/2 by definition.
+    if (charged.length === 0 || !theory.multiplets.some(({ kind }) => kind === 'chiral')) return [];
     const outside = charged.filter(
       ({ rCharge }) => !(compareR(rCharge, Rational.zero) > 0 && compareR(rCharge, Rational.of(2)) < 0),
     );
