@@ -88,7 +88,7 @@ function faddeev(label: string, letter: string): Notation {
       const [b, inverse] = bothPeriods(parameters);
       const sinh = (period: Form): string => `\\sinh${parenthesised(print.form(period.mul(Form.symbol('t'))))}`;
       return (
-        `${letter}_{${subscript(parameters, print)}}(x)=\\exp\\int_{\\mathbb{R}+i0}` +
+        `${letter}_{${subscript(parameters, print)}}(x)=\\exp\\int_{-\\infty+i0}^{+\\infty+i0}` +
         `\\frac{e^{-2ixt}}{4\\,${sinh(b)}${sinh(inverse)}}\\frac{dt}{t}`
       );
     },

@@ -19,7 +19,7 @@ export const sign: SpecialFunction = {
     {
       label: '(-1)^x',
       latex: (argument, _parameters, print) => `(-1)^{${print.form(argument)}}`,
-      definition: () => '(-1)^x,\\quad x\\in\\mathbb{Z}',
+      definition: () => '(-1)^x,\\quad x=0,\\pm1,\\ldots',
     },
   ],
   modes: null,

@@ -122,10 +122,14 @@ function raised(latex: string, power: number): string {
   return /^[A-Za-z0-9]$/.test(latex) ? `${latex}^{${power}}` : `\\left[${latex}\\right]^{${power}}`;
 }
 
+/** Two pieces stay on one line up to so many characters of LaTeX, which is about a line of print. */
+const LINE_LENGTH = 150;
+
 /** The whole formula as one display: short ones on a line, long ones aligned with a piece a line. */
 export function displayLatex(lead: string, pieces: readonly Piece[]): string {
   if (pieces.length === 0) return `${lead}1`;
-  if (pieces.length <= 2) return lead + pieces.map(({ latex }) => latex).join('\\;');
+  const line = lead + pieces.map(({ latex }) => latex).join('\\;');
+  if (pieces.length === 1 || (pieces.length === 2 && line.length <= LINE_LENGTH)) return line;
   const [first, ...rest] = pieces.map(({ latex }) => latex);
   const lines = [`${lead.replace(/=$/, '={}&')}${first}`, ...rest.map((latex) => `&\\times ${latex}`)];
   return `\\begin{aligned}\n${lines.join(' \\\\\n')}\n\\end{aligned}`;
