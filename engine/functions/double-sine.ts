@@ -1,6 +1,7 @@
 import type { FixedComplex } from '../arithmetic/fixed-complex';
 import { Form } from '../exact/form';
 import { logDoubleSineClosed } from './double-sine-closed';
+import { complexDoubleSineKernel } from './double-sine-complex-double';
 import { doubleSineKernel } from './double-sine-double';
 import { logDoubleSineByMidpoint } from './double-sine-midpoint';
 import { doubleSineModes, doubleSineNotations } from './double-sine-notations';
@@ -8,7 +9,14 @@ import { periodOfParameter } from './double-sine-period';
 import { logDoubleSine, logDoubleSineByOtherStep } from './double-sine-precise';
 import { logDoubleSineByProduct } from './double-sine-product';
 import { outsideDomain } from './outside-domain';
-import type { ExactParameter, FunctionAt, PreciseLog, SpecialFunction } from './special-function';
+import type {
+  Complex,
+  DoubleKernel,
+  ExactParameter,
+  FunctionAt,
+  PreciseLog,
+  SpecialFunction,
+} from './special-function';
 
 const HALF = Form.ratio(1, 2);
 
@@ -17,7 +25,7 @@ const HALF = Form.ratio(1, 2);
  *   log s_b(x) = -i int_0^oo dt/t [ sin(2xt)/(2 sinh(bt) sinh(t/b)) - x/t ],  |Im x| < Q/2.
  * Poles i (Q/2 + m b + n/b), zeros at the opposite points; s_b(x) s_b(-x) = 1, s_b = s_{1/b},
  * s_b(x - i b/2) = 2 cosh(pi b x) s_b(x + i b/2), s_b(i Q/2 + e) = 1/(2 pi i e) + O(1).
- * Parameter: b > 0; in the precise tier also complex b with Re b > 0.
+ * Parameter: b > 0, or complex b with Re b > 0.
  */
 export const doubleSine: SpecialFunction = {
   name: 'doubleSine',
@@ -47,7 +55,7 @@ export const doubleSine: SpecialFunction = {
   notations: doubleSineNotations,
   modes: doubleSineModes,
   elementary: false,
-  double: ([b]) => (b?.im === 0 && b.re > 0 && Number.isFinite(b.re) ? doubleSineKernel(b.re) : outsideDomain),
+  double: ([b]) => doubleKernel(b as Complex),
   precise: (x, [b], bits) => preciseLog(x, b as ExactParameter, bits),
   crossCheck: (x, [b], bits) => secondRoute(x, b as ExactParameter, bits),
   sources: [
@@ -59,6 +67,11 @@ export const doubleSine: SpecialFunction = {
     { key: 'HHL-2011', text: 'N. Hama, K. Hosomichi, S. Lee, arXiv:1102.4716 (2011)' },
   ],
 };
+
+function doubleKernel(b: Complex): DoubleKernel {
+  if (!(b.re > 0) || !Number.isFinite(b.re) || !Number.isFinite(b.im)) return outsideDomain;
+  return b.im === 0 ? doubleSineKernel(b.re) : complexDoubleSineKernel(b);
+}
 
 /** Real b > 0 by the midpoint rule with residues, complex b by the q-products. */
 function preciseLog(x: FixedComplex, b: ExactParameter, bits: number): PreciseLog {
