@@ -3,6 +3,8 @@ import type { Form } from '../exact/form';
 import { LineIndex } from '../language/lines';
 import { parseNotebook } from '../language/parse';
 import type { Block, Diagnostic, Notebook, Parameter, Request, SpectrumBlock, TheoryBlock } from '../language/tree';
+import { readSpectrum } from '../spectrum/read';
+import type { Spectrum } from '../spectrum/tower';
 import type { Sphere } from '../spheres/sphere';
 import { spheres } from '../spheres/table';
 import { type BuiltTheory, buildTheory } from '../theory/build';
@@ -22,6 +24,12 @@ export interface TheoryEntry {
   readonly built: BuiltTheory | null;
 }
 
+export interface SpectrumEntry {
+  readonly block: SpectrumBlock;
+  /** Null when anything in the block is in error. */
+  readonly spectrum: Spectrum | null;
+}
+
 /** A notebook read as far as it goes: everything that requests and the page ask about. */
 export interface Analysis {
   readonly text: string;
@@ -31,7 +39,7 @@ export interface Analysis {
   /** Closed values of all parameters that have one. */
   readonly values: ReadonlyMap<string, Form>;
   readonly theories: ReadonlyMap<string, TheoryEntry>;
-  readonly spectra: ReadonlyMap<string, SpectrumBlock>;
+  readonly spectra: ReadonlyMap<string, SpectrumEntry>;
   readonly diagnostics: readonly Diagnostic[];
 }
 
@@ -46,9 +54,11 @@ export function analyse(text: string, overrides: Overrides = new Map()): Analysi
   const values = new Map<string, Form>();
   for (const [name, { value }] of parameters) if (value !== null) values.set(name, value);
   const theories = new Map<string, TheoryEntry>();
-  const spectra = new Map<string, SpectrumBlock>();
+  const spectra = new Map<string, SpectrumEntry>();
   for (const block of notebook.blocks) {
-    if (block.kind === 'spectrum' && !spectra.has(block.name.name)) spectra.set(block.name.name, block);
+    if (block.kind === 'spectrum' && !spectra.has(block.name.name)) {
+      spectra.set(block.name.name, readSpectrumBlock(block, values, diagnostics));
+    }
     if (block.kind !== 'theory' || theories.has(block.name.name)) continue;
     const sphere = block.sphere === null ? null : spheres[block.sphere.sphere.name];
     const read = sphere === null ? null : buildTheory(block, values, sphere);
@@ -59,6 +69,17 @@ export function analyse(text: string, overrides: Overrides = new Map()): Analysi
   }
   for (const block of notebook.blocks) if (isRequest(block)) checkSubject(block, theories, spectra, diagnostics);
   return { text, notebook, lines: new LineIndex(text), parameters, values, theories, spectra, diagnostics };
+}
+
+function readSpectrumBlock(
+  block: SpectrumBlock,
+  values: ReadonlyMap<string, Form>,
+  diagnostics: Diagnostic[],
+): SpectrumEntry {
+  const read = readSpectrum(block, values);
+  diagnostics.push(...read.diagnostics);
+  const failed = !block.sound || read.diagnostics.some(({ severity }) => severity === 'error');
+  return { block, spectrum: failed ? null : read.spectrum };
 }
 
 export function isRequest(block: Block): block is Request {
@@ -117,7 +138,7 @@ export function realNumber(form: Form | null): number | null {
 function checkSubject(
   request: Request,
   theories: ReadonlyMap<string, TheoryEntry>,
-  spectra: ReadonlyMap<string, SpectrumBlock>,
+  spectra: ReadonlyMap<string, SpectrumEntry>,
   diagnostics: Diagnostic[],
 ): void {
   for (const { name, span, kind } of subjects(request)) {

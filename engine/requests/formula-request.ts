@@ -5,13 +5,17 @@ import type { Analysis } from './analysis';
 import { type Answer, failure } from './answer';
 import { formulaView, type Printable } from './formula';
 import type { FormulaResult } from './result';
+import { spectrumFormula } from './spectrum-card';
 import { unreadable } from './subject';
 
 /** `formula ...`: one form of a formula, as a card of its own. */
 export function runFormula(analysis: Analysis, request: FormulaRequest): Answer {
   const name = request.subject.name;
   const entry = analysis.theories.get(name);
-  if (!entry && analysis.spectra.has(name)) return failure(name, 'Formulas of spectra are not offered yet.');
+  if (!entry && analysis.spectra.has(name)) {
+    const formula = spectrumFormula(analysis, name, request.form);
+    return { kind: 'formula', of: name, notes: [], formula } satisfies Answer<FormulaResult>;
+  }
   const printable = printableTheory(analysis, name, 0);
   if (printable === null) return failure(name, unreadable(entry, name) ?? '');
   const form = request.form ?? preferredForm(printable);

@@ -9,6 +9,7 @@ import { agreedDigits } from './agreement';
 import type { Analysis } from './analysis';
 import { type Answer, failure } from './answer';
 import type { ValueResult } from './result';
+import { isValueFunction, valueFunctionAnswer } from './value-function';
 
 type FunctionQuantity = Extract<Quantity, { kind: 'function' }>;
 
@@ -44,6 +45,7 @@ function positive(form: Form): boolean {
 export function functionValue(analysis: Analysis, quantity: FunctionQuantity, digits: number): Answer {
   const of = quantity.function.name;
   const values = (name: string) => analysis.values.get(name) ?? null;
+  if (isValueFunction(of)) return valueFunctionAnswer(of, quantity, values, digits);
   const product = functionProduct(quantity, values);
   if (typeof product === 'string') return failure(of, product);
   const value = evaluatePrecise(product, values, digits);

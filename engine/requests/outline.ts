@@ -159,7 +159,7 @@ function usedNames(analysis: Analysis, request: Request): ReadonlySet<string> {
     }
   };
   for (const { name } of subjects(request)) {
-    const block = analysis.theories.get(name)?.block ?? analysis.spectra.get(name);
+    const block = analysis.theories.get(name)?.block ?? analysis.spectra.get(name)?.block;
     if (block) add(wordsOf(requestText(analysis.text, block.span)));
   }
   add(wordsOf(requestText(analysis.text, request.span)));

@@ -52,7 +52,7 @@ export function report(analysis: Analysis, surroundings: Surroundings): { output
       const { line } = analysis.lines.place(entry.block.span.from);
       return { name, line, ...latexOf(views), checks: theoryChecks(entry) };
     }),
-    spectra: [...analysis.spectra.values()].map((block) => {
+    spectra: [...analysis.spectra.values()].map(({ block }) => {
       const card = spectrumCard(analysis, block);
       const views = Object.entries(card.formulas);
       const { line } = analysis.lines.place(block.span.from);

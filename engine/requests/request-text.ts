@@ -14,7 +14,7 @@ export function requestText(text: string, span: Span): string {
 export function requestKey(analysis: Analysis, request: Request): string {
   const parts = [requestText(analysis.text, request.span)];
   for (const { name } of subjects(request)) {
-    const block = analysis.theories.get(name)?.block ?? analysis.spectra.get(name);
+    const block = analysis.theories.get(name)?.block ?? analysis.spectra.get(name)?.block;
     if (block) parts.push(requestText(analysis.text, block.span));
   }
   for (const { block } of analysis.parameters.values()) parts.push(requestText(analysis.text, block.span));

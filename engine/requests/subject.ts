@@ -1,3 +1,4 @@
+import type { Quantity } from '../language/tree';
 import { QUANTITIES, quantity } from '../spheres/quantity';
 import type { TheoryProduct } from '../spheres/sphere';
 import type { TheoryEntry } from './analysis';
@@ -18,4 +19,10 @@ export function theoryQuantity(entry: TheoryEntry, what: string): TheoryProduct 
 export function unknownQuantity(entry: TheoryEntry, what: string): string {
   const names = [...QUANTITIES, ...(entry.built?.theory?.multiplets ?? []).map(({ name }) => name)];
   return `\`${what}\` is no quantity of \`${entry.block.name.name}\`; there are ${names.map((n) => `\`${n}\``).join(', ')}.`;
+}
+
+/** Name of the theory, spectrum or function that a quantity is of. */
+export function subjectName(quantity: Quantity): string {
+  if (quantity.kind === 'theory') return quantity.theory.name;
+  return quantity.kind === 'determinant' ? quantity.spectrum.name : quantity.function.name;
 }

@@ -1,16 +1,17 @@
 import type { Ball } from '../arithmetic/ball';
 import { formatBall } from '../arithmetic/decimal-text';
-import type { Quantity, ValueRequest } from '../language/tree';
+import type { ValueRequest } from '../language/tree';
 import { evaluatePrecise, MAXIMAL_DIGITS, type PreciseValue } from '../numeric/precise';
 import { elementary, namesIn } from '../spheres/quantity';
 import type { TheoryProduct } from '../spheres/sphere';
 import { agreedDigits } from './agreement';
 import type { Analysis } from './analysis';
 import { type Answer, failure, type Surroundings } from './answer';
+import { runDeterminant } from './determinant';
 import { functionValue } from './function-value';
 import { type Point, resolvePoint } from './point';
 import type { ValueResult } from './result';
-import { theoryQuantity, unknownQuantity, unreadable } from './subject';
+import { subjectName, theoryQuantity, unknownQuantity, unreadable } from './subject';
 
 /** `value ...`: a number with its error, confirmed by a second route. */
 export function runValue(analysis: Analysis, request: ValueRequest, surroundings: Surroundings): Answer {
@@ -21,9 +22,7 @@ export function runValue(analysis: Analysis, request: ValueRequest, surroundings
   }
   const { quantity } = request;
   if (quantity.kind === 'function') return functionValue(analysis, quantity, digits);
-  if (quantity.kind === 'determinant') {
-    return failure(of, 'Determinants of spectra are not offered yet.');
-  }
+  if (quantity.kind === 'determinant') return runDeterminant(analysis, quantity, request, digits);
   const entry = analysis.theories.get(quantity.theory.name);
   const problem = unreadable(entry, quantity.theory.name);
   if (problem !== null || !entry?.built?.theory || !entry.sphere) return failure(of, problem ?? '');
@@ -44,11 +43,6 @@ export function runValue(analysis: Analysis, request: ValueRequest, surroundings
     digits,
     crossCheck: confirm(raw, simple, resolved.point, value.value, digits),
   } satisfies Answer<ValueResult>;
-}
-
-function subjectName(quantity: Quantity): string {
-  if (quantity.kind === 'theory') return quantity.theory.name;
-  return quantity.kind === 'determinant' ? quantity.spectrum.name : quantity.function.name;
 }
 
 /** Zeros are values; everything else that is no number is said in words. */

@@ -1,0 +1,68 @@
+import { expBall } from '../arithmetic/ball';
+import { formatBall } from '../arithmetic/decimal-text';
+import type { Form } from '../exact/form';
+import type { Assignment, Quantity, ValueRequest } from '../language/tree';
+import { determinant } from '../spectrum/regularised';
+import type { Analysis } from './analysis';
+import { type Answer, failure } from './answer';
+import type { ValueResult } from './result';
+import { sayRemark, unreadableSpectrum } from './spectrum-card';
+
+type DeterminantQuantity = Extract<Quantity, { kind: 'determinant' }>;
+
+/** Second routes of a determinant, in words. */
+const ROUTES = {
+  rootless: 'the zeta function of each whole eigenvalue, without its roots',
+  roots: 'each eigenvalue by its roots',
+  further: 'the same sums from further steps',
+} as const;
+
+/** `value log determinant of dirac by operator, 40 digits`. */
+export function runDeterminant(
+  analysis: Analysis,
+  quantity: DeterminantQuantity,
+  request: ValueRequest,
+  digits: number,
+): Answer {
+  const of = quantity.spectrum.name;
+  const entry = analysis.spectra.get(of);
+  if (!entry) return failure(of, `There is no spectrum \`${of}\` in this notebook.`);
+  if (entry.spectrum === null) return failure(of, unreadableSpectrum(of));
+  const values = assigned(analysis, request.at);
+  if (typeof values === 'string') return failure(of, values);
+  const found = determinant(entry.spectrum, quantity.prescription, values, digits);
+  if (found.kind === 'refusal') return failure(of, sayRemark(found.remark));
+  const value = quantity.log ? found.log : expBall(found.log, Math.ceil(digits * Math.log2(10)) + 32);
+  if (value === null)
+    return failure(of, 'The determinant is too large or too small to be written down; ask for its `log`.');
+  const { crossCheck } = found;
+  return {
+    kind: 'value',
+    of,
+    notes: found.remarks.map(sayRemark),
+    value: formatBall(value, digits),
+    digits,
+    crossCheck:
+      crossCheck === null
+        ? null
+        : { route: ROUTES[crossCheck.route], agrees: `${Math.min(digits, crossCheck.agreedDigits)} digits` },
+    zeta0: formatBall(found.zeta0, digits),
+    scale: formatBall(found.scale, digits),
+    anomaly: formatBall(found.anomaly, digits),
+  } satisfies Answer<ValueResult>;
+}
+
+/** Values set with `at`, closed by the notebook's parameters; a string says what is wrong. */
+export function assigned(analysis: Analysis, at: readonly Assignment[]): ReadonlyMap<string, Form> | string {
+  const values = new Map<string, Form>(analysis.values);
+  const set = new Set<string>();
+  for (const { name, value } of at) {
+    const closed = value.form.substitute((symbol) => analysis.values.get(symbol) ?? null);
+    const [open] = closed.symbols();
+    if (open !== undefined) return `\`${name.name}\` is set to \`${value.text}\`, but \`${open}\` has no value.`;
+    if (set.has(name.name)) return `\`${name.name}\` is set twice.`;
+    set.add(name.name);
+    values.set(name.name, closed);
+  }
+  return values;
+}
