@@ -20,7 +20,12 @@ export interface TripleSineTables {
   /** (w1^2 + w2^2 + w3^2)/4. */
   readonly linear: number;
   /** For each period the double sine of the other two: S_2(x) = s_b(i (x/scale - q/2)). */
-  readonly doubles: readonly { readonly scale: number; readonly tables: DoubleSineTables }[];
+  readonly doubles: readonly {
+    readonly larger: number;
+    readonly smaller: number;
+    readonly scale: number;
+    readonly tables: DoubleSineTables;
+  }[];
 }
 
 /** log(1/eps) with a margin of 3. */
@@ -62,7 +67,7 @@ export function tripleSineTables(w1: number, w2: number, w3: number): TripleSine
     linear: (w1 * w1 + w2 * w2 + w3 * w3) / 4,
     doubles: [0, 1, 2].map((omitted) => {
       const [u, v] = periods.filter((_, k) => k !== omitted) as [number, number];
-      return { scale: Math.sqrt(u * v), tables: doubleSineTables(Math.sqrt(u / v)) };
+      return { larger: u, smaller: v, scale: Math.sqrt(u * v), tables: doubleSineTables(Math.sqrt(u / v)) };
     }),
   };
 }
