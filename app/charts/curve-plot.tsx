@@ -1,4 +1,4 @@
-import { type RefObject, useId, useMemo, useRef } from 'react';
+import { memo, type RefObject, useId, useMemo, useRef } from 'react';
 import type { PlotMark, PlotResult, PlotSeries } from '../../engine/requests/result';
 import { numbered } from '../state/numbered';
 import { type Frame, HorizontalAxis, VerticalAxis } from './axes';
@@ -24,7 +24,7 @@ function frameOf(width: number): Frame {
 }
 
 /** Curves drawn by the page itself, at once and at the speed of a slider. */
-export function CurvePlot({ result, held, svg }: CurvePlotProps) {
+export const CurvePlot = memo(function CurvePlot({ result, held, svg }: CurvePlotProps) {
   const box = useRef<HTMLDivElement>(null);
   const width = useWidth(box, 620);
   const clip = useId();
@@ -98,7 +98,7 @@ export function CurvePlot({ result, held, svg }: CurvePlotProps) {
       <Legend result={result} />
     </div>
   );
-}
+});
 
 const nameOf = ({ name }: PlotSeries) => name;
 

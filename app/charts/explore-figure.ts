@@ -92,7 +92,7 @@ export function exploreFigure(
     layout: {
       paper_bgcolor: colour('var(--paper)'),
       plot_bgcolor: colour('var(--paper)'),
-      font: { color: colour('var(--ink)'), size: 13 },
+      font: { color: colour('var(--ink)'), size: 13, family: 'system-ui, sans-serif' },
       margin: { l: 60, r: 20, t: 20, b: 50 },
       showlegend: result.series.length + result.asymptotes.length > 1 && !up,
       dragmode: 'zoom',

@@ -1,4 +1,4 @@
-import { type RefObject, useEffect, useMemo, useRef } from 'react';
+import { memo, type RefObject, useEffect, useMemo, useRef } from 'react';
 import type { PlotResult } from '../../engine/requests/result';
 import { type Frame, HorizontalAxis, VerticalAxis } from './axes';
 import { rampColour, rampSteps } from './colour-ramp';
@@ -16,7 +16,7 @@ interface MapPlotProps {
 }
 
 /** A quantity over two ranges, drawn by the page itself; the picture lies inside the drawing, so both export as one. */
-export function MapPlot({ result, svg }: MapPlotProps) {
+export const MapPlot = memo(function MapPlot({ result, svg }: MapPlotProps) {
   const box = useRef<HTMLDivElement>(null);
   const width = useWidth(box, 620);
   const side = Math.max(160, Math.min(width - 74, 420));
@@ -57,7 +57,7 @@ export function MapPlot({ result, svg }: MapPlotProps) {
       <ColourScale scale={scale} />
     </div>
   );
-}
+});
 
 /** Paints the values into a picture, one point a value, when they change. */
 function useImage(values: MapValues | undefined, scale: MapScale | null): RefObject<SVGImageElement | null> {

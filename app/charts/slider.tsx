@@ -1,6 +1,7 @@
 import { useEffect, useRef } from 'react';
 import type { ParameterCard } from '../../engine/requests/result';
 import { Tex } from '../page/tex';
+import { cardNow } from '../state/outline';
 import { useSession } from '../state/session';
 import { useSelected } from '../state/store';
 import styles from './slider.module.css';
@@ -27,9 +28,12 @@ export function Slider({ card }: { readonly card: ParameterCard }) {
       const value = live.state.get()[card.name]?.value;
       if (value === undefined || !range) return;
       const insert = sliderText(value, range);
-      if (insert === card.valueText || !text.editSince(outline.state.get().revision, [{ ...card.valueSpan, insert }])) {
-        live.cancel(card.name);
-      } else live.release(card.name, text.state.get().revision);
+      const now = outline.state.get();
+      const place = cardNow(now, card)?.valueSpan;
+      const changes = place && insert !== card.valueText ? [{ ...place, insert }] : [];
+      if (changes.length > 0 && text.editSince(now.revision, changes)) {
+        live.release(card.name, text.state.get().revision);
+      } else live.cancel(card.name);
     };
   }, [card, range, text, outline, live]);
 

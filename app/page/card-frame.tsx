@@ -1,5 +1,6 @@
 import type { MouseEvent, ReactNode } from 'react';
 import type { Card } from '../../engine/requests/result';
+import { cardNow } from '../state/outline';
 import { useSession } from '../state/session';
 import { useSelected } from '../state/store';
 import styles from './card-frame.module.css';
@@ -26,7 +27,8 @@ export function CardFrame({ card, label, caption, tools, children }: CardFramePr
   function follow(event: MouseEvent): void {
     if (event.target instanceof Element && event.target.closest(interactive)) return;
     if (getSelection()?.isCollapsed === false) return;
-    text.goTo(outline.state.get().revision, card.span.from, false);
+    const now = outline.state.get();
+    text.goTo(now.revision, (cardNow(now, card) ?? card).span.from, false);
   }
 
   return (
@@ -58,10 +60,11 @@ export function CardName({ card, children }: { readonly card: Card; readonly chi
     <button
       type="button"
       className={styles.name}
-      title={`Go to line ${card.line}`}
+      title="Go to its text"
       onClick={() => {
         settings.change({ pane: 'text' });
-        text.goTo(outline.state.get().revision, card.span.from, true);
+        const now = outline.state.get();
+        text.goTo(now.revision, (cardNow(now, card) ?? card).span.from, true);
       }}
     >
       {children}

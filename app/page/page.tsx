@@ -14,7 +14,7 @@ import { TheoryCard } from './theory-card';
 /** The sheet: one card a block or request, in the order of the text. */
 export function Page() {
   const { outline } = useSession();
-  const { outline: shown, trouble } = useStore(outline.state);
+  const { outline: shown, cards, trouble } = useStore(outline.state);
   return (
     <div className={styles.sheet}>
       {trouble ? (
@@ -22,7 +22,7 @@ export function Page() {
           The page stands still because of a defect of Spherelathe, and shows the text as it was before: {trouble}
         </p>
       ) : null}
-      {shown ? items(shown).map((item) => <Item key={item.key} item={item} />) : null}
+      {shown ? items(shown, cards).map((item) => <Item key={item.key} item={item} />) : null}
       {shown && shown.cards.length === 0 ? (
         <p className={styles.empty}>An empty notebook: write a heading, a theory, a request beside this page.</p>
       ) : null}
@@ -35,12 +35,12 @@ type PageItem =
   | { readonly key: string; readonly at: number; readonly problem: Problem };
 
 /** Cards, and between them the problems of lines that became no card. */
-function items({ cards, problems }: Outline): readonly PageItem[] {
+function items({ cards, problems }: Outline, drawn: readonly Card[]): readonly PageItem[] {
   const astray = problems.filter(
     ({ span }) => !cards.some((card) => span.from >= card.span.from && span.from <= card.span.to),
   );
   return [
-    ...cards.map((card) => ({ key: card.id, at: card.span.from, card })),
+    ...cards.map((card, index) => ({ key: card.id, at: card.span.from, card: drawn[index] ?? card })),
     ...astray.map((problem) => ({ key: `${problem.span.from} ${problem.message}`, at: problem.span.from, problem })),
   ].sort((left, right) => left.at - right.at);
 }

@@ -1,5 +1,6 @@
 import type { ParameterCard as ParameterCardData } from '../../engine/requests/result';
 import { Slider } from '../charts/slider';
+import { readoutText } from '../charts/ticks';
 import { CardFrame } from './card-frame';
 import styles from './parameter-card.module.css';
 import { Tex } from './tex';
@@ -11,7 +12,7 @@ export function ParameterCard({ card }: { readonly card: ParameterCardData }) {
         <div className={styles.slider}>
           <Slider card={card} />
           <span className={styles.range}>
-            {card.range.from} … {card.range.to}
+            {readoutText(card.range.from)} … {readoutText(card.range.to)}
           </span>
         </div>
       ) : (

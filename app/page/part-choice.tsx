@@ -1,4 +1,5 @@
 import type { RequestCard } from '../../engine/requests/result';
+import { cardNow } from '../state/outline';
 import { useSession } from '../state/session';
 import { Choice } from './choice';
 
@@ -16,12 +17,14 @@ export function PartChoice({ card, curves }: PartChoiceProps) {
   if (curves !== 1) return null;
 
   function choose(part: string): void {
-    const { text: drawnFrom, revision } = outline.state.get();
-    const line = drawnFrom.slice(card.span.from, card.span.to);
+    const now = outline.state.get();
+    const span = cardNow(now, card)?.span;
+    if (!span) return;
+    const line = now.text.slice(span.from, span.to);
     const [, head = '', old = ''] = /^(plot\s+)((?:abs|arg|re|im|log)\s+)?/.exec(line) ?? [];
     if (head === '') return;
-    const from = card.span.from + head.length;
-    text.editSince(revision, [{ from, to: from + old.length, insert: `${part} ` }]);
+    const from = span.from + head.length;
+    text.editSince(now.revision, [{ from, to: from + old.length, insert: `${part} ` }]);
   }
 
   return (

@@ -24,8 +24,8 @@ export function PlotBody({ card, result }: PlotProps) {
   const svg = useRef<SVGSVGElement>(null);
   const [exploring, setExploring] = useState(false);
   const { shown, held } = useLivePlot(card, result);
-  const cards = useSelected(outline.state, (state) => state.outline?.cards);
-  const sliders = (cards ?? []).filter(
+  const cards = useSelected(outline.state, (state) => state.cards);
+  const sliders = cards.filter(
     (other): other is ParameterCard =>
       other.kind === 'let' && other.range !== null && card.parameters.includes(other.name),
   );

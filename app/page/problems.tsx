@@ -1,5 +1,5 @@
 import type { Card, Problem } from '../../engine/requests/result';
-import { errorsIn } from '../state/outline';
+import { cardNow, errorsIn } from '../state/outline';
 import { useSession } from '../state/session';
 import { useSelected } from '../state/store';
 import styles from './problems.module.css';
@@ -30,7 +30,8 @@ export function ProblemLine({ problem }: { readonly problem: Problem }) {
 export function Problems({ card }: { readonly card: Card }) {
   const { outline } = useSession();
   const problems = useSelected(outline.state, (state) => state.outline?.problems);
-  const own = problems ? errorsIn(card, problems) : [];
+  const here = cardNow(outline.state.get(), card);
+  const own = problems && here ? errorsIn(here, problems) : [];
   if (own.length === 0) return null;
   return (
     <ul className={styles.list}>

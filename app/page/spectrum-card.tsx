@@ -1,4 +1,6 @@
 import type { SpectrumCard as SpectrumCardData } from '../../engine/requests/result';
+import { numbered } from '../state/numbered';
+import { cardNow } from '../state/outline';
 import { useSession } from '../state/session';
 import { useSelected } from '../state/store';
 import type { SpectrumForm } from '../state/view';
@@ -30,12 +32,16 @@ export function SpectrumCard({ card }: { readonly card: SpectrumCardData }) {
       }
     >
       <ul className={styles.towers} aria-label="Towers">
-        {card.towers.map((tower) => (
-          <li key={`${tower.span.from} ${tower.latex}`}>
+        {numbered(card.towers, ({ latex }) => latex).map(({ key, item: tower, at }) => (
+          <li key={key}>
             <button
               type="button"
               className={styles.kind}
-              onClick={() => text.goTo(outline.state.get().revision, tower.span.from, true)}
+              onClick={() => {
+                const now = outline.state.get();
+                const span = cardNow(now, card)?.towers[at]?.span;
+                if (span) text.goTo(now.revision, span.from, true);
+              }}
             >
               {tower.kind}
             </button>

@@ -1,11 +1,16 @@
 import type { Card, Outline, Problem } from '../../engine/requests/result';
 import type { EngineClient, OutlineOptions } from '../../workers/types';
 import type { NotebookText } from './notebook-text';
-import { shareStructure } from './share-structure';
+import { sameButForPlace, shareStructure } from './share-structure';
 import { createStore, type Readable } from './store';
 
 export interface OutlineState {
   readonly outline: Outline | null;
+  /**
+   * The outline's cards to draw, in the same order. One that only stands elsewhere than before is the same object as
+   * before, places and all; who needs its place asks `cardNow`.
+   */
+  readonly cards: readonly Card[];
   /** The text the outline was made from. */
   readonly text: string;
   readonly revision: number;
@@ -16,7 +21,32 @@ export interface OutlineState {
   readonly trouble: string | null;
 }
 
-const nothing: OutlineState = { outline: null, text: '', revision: -1, opened: 0, sound: new Map(), trouble: null };
+const nothing: OutlineState = {
+  outline: null,
+  cards: [],
+  text: '',
+  revision: -1,
+  opened: 0,
+  sound: new Map(),
+  trouble: null,
+};
+
+/** A drawn card as it stands in the text now; null when it is gone. */
+export function cardNow<C extends Card>({ outline }: OutlineState, card: C): C | null {
+  const found = outline?.cards.find(({ id }) => id === card.id);
+  // An id begins with the kind of its card.
+  return found?.kind === card.kind ? (found as C) : null;
+}
+
+function drawnCards(outline: Outline, before: readonly Card[]): readonly Card[] {
+  const byId = new Map(before.map((card) => [card.id, card]));
+  const cards = outline.cards.map((card) => {
+    const known = byId.get(card.id);
+    if (known && sameButForPlace(known, card)) return known;
+    return shareStructure(known ?? null, card);
+  });
+  return cards.length === before.length && cards.every((card, at) => card === before[at]) ? before : cards;
+}
 
 export function errorsIn(card: Card, problems: readonly Problem[]): readonly Problem[] {
   return problems.filter(({ span }) => span.from >= card.span.from && span.from <= card.span.to);
@@ -26,12 +56,16 @@ function isSound(card: Card, problems: readonly Problem[]): boolean {
   return errorsIn(card, problems).every(({ severity }) => severity !== 'error');
 }
 
-function soundCards(outline: Outline, before: ReadonlyMap<string, Card>): ReadonlyMap<string, Card> {
+function soundCards(
+  outline: Outline,
+  drawn: readonly Card[],
+  before: ReadonlyMap<string, Card>,
+): ReadonlyMap<string, Card> {
   const sound = new Map<string, Card>();
-  for (const card of outline.cards) {
-    const kept = isSound(card, outline.problems) ? card : before.get(card.id);
+  outline.cards.forEach((card, at) => {
+    const kept = isSound(card, outline.problems) ? drawn[at] : before.get(card.id);
     if (kept) sound.set(card.id, kept);
-  }
+  });
   return sound;
 }
 
@@ -59,9 +93,10 @@ export function followOutline(
   function take(outline: Outline, asked: { text: string; revision: number; opened: number }): void {
     const before = state.get();
     const sameNotebook = before.opened === asked.opened;
-    const whole = shareStructure(sameNotebook ? before.outline : null, outline);
-    const sound = soundCards(whole, sameNotebook ? before.sound : new Map());
-    state.set({ ...asked, outline: whole, sound, trouble: null });
+    const cards = drawnCards(outline, sameNotebook ? before.cards : []);
+    const sound = soundCards(outline, cards, sameNotebook ? before.sound : new Map());
+    const problems = shareStructure(before.outline?.problems ?? null, outline.problems);
+    state.set({ ...asked, outline: { ...outline, problems }, cards, sound, trouble: null });
   }
 
   async function ask(): Promise<void> {

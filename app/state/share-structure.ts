@@ -21,6 +21,23 @@ function shared(before: unknown, after: unknown): unknown {
   return after;
 }
 
+/** Where things stand in the text; it changes with every keystroke above them and draws nothing. */
+const places: ReadonlySet<string> = new Set(['span', 'lineSpan', 'nameSpan', 'valueSpan', 'insertRowAt', 'line']);
+
+/** Whether two values of plain data differ in nothing but their places in the text. */
+export function sameButForPlace(left: unknown, right: unknown): boolean {
+  if (Object.is(left, right)) return true;
+  if (Array.isArray(left) && Array.isArray(right)) {
+    return left.length === right.length && left.every((item, at) => sameButForPlace(item, right[at]));
+  }
+  if (!isPlain(left) || !isPlain(right)) return false;
+  const keys = Object.keys(right);
+  return (
+    keys.length === Object.keys(left).length &&
+    keys.every((key) => key in left && (places.has(key) || sameButForPlace(left[key], right[key])))
+  );
+}
+
 /**
  * The later value, made of the earlier one's parts wherever these are equal: what did not change keeps its identity
  * across the worker's border, and what shows it need not be drawn again. For plain data only.

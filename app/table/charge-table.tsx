@@ -4,6 +4,7 @@ import { Tex } from '../page/tex';
 import { WordButton } from '../page/word-button';
 import type { Change } from '../state/changes';
 import { numbered } from '../state/numbered';
+import { cardNow } from '../state/outline';
 import { useSession } from '../state/session';
 import { useSelected } from '../state/store';
 import { Cell } from './cell';
@@ -17,26 +18,30 @@ interface Choosing {
   readonly group: string;
 }
 
-/** Edits speak of the text the table was drawn from; they are carried to where that text is now. */
-function useEdit() {
+type Edit = (text: string, card: TheoryCard) => readonly Change[] | null;
+
+/** Edits speak of the text the outline was made from; they are carried to where that text is now. */
+function useEdit(card: TheoryCard) {
   const { text, outline, notices } = useSession();
-  return (changes: (drawnFrom: string) => readonly Change[] | null) => {
-    const { text: drawnFrom, revision } = outline.state.get();
-    const found = changes(drawnFrom);
-    if (!found) return;
-    if (!text.editSince(revision, found)) notices.say('The text changed there in the meantime; nothing was done.');
+  return (edit: Edit) => {
+    const now = outline.state.get();
+    const here = cardNow(now, card);
+    const changes = here && edit(now.text, here);
+    if (!changes) return;
+    if (!text.editSince(now.revision, changes))
+      notices.say('The text changed there in the meantime; nothing was done.');
   };
 }
 
 /** The charge table as papers print it; every edit in it is an edit of the text. */
 export function ChargeTable({ card }: { readonly card: TheoryCard }) {
-  const edit = useEdit();
+  const edit = useEdit(card);
   const [choosing, setChoosing] = useState<Choosing | null>(null);
   const kinds = new Set(card.rows.map((row) => row.kind));
 
   function setCell(row: number, column: number, content: string): void {
-    edit((text) => {
-      const cell = card.rows[row]?.cells[column];
+    edit((text, here) => {
+      const cell = here.rows[row]?.cells[column];
       return cell ? [cellChange(text, cell.span, content)] : null;
     });
   }
@@ -82,8 +87,8 @@ export function ChargeTable({ card }: { readonly card: TheoryCard }) {
             <WordButton
               key={kind}
               onClick={() =>
-                edit((text) => {
-                  const change = addedRow(text, card, kind);
+                edit((text, here) => {
+                  const change = addedRow(text, here, kind);
                   return change && [change];
                 })
               }
@@ -114,7 +119,7 @@ interface RowProps {
 }
 
 function Row({ card, row, at, showKind, onCell, onChoose }: RowProps) {
-  const edit = useEdit();
+  const edit = useEdit(card);
   const { lit } = useSession();
   const isLit = useSelected(lit.state, (on) => on !== null && on.theory === card.name && on.row === row.name);
   const here = { theory: card.name, row: row.name };
@@ -133,7 +138,12 @@ function Row({ card, row, at, showKind, onCell, onChoose }: RowProps) {
           label={`Name of ${row.name}`}
           text={row.name}
           latex={row.latex}
-          onChange={(name) => edit((text) => [cellChange(text, row.nameSpan, name)])}
+          onChange={(name) =>
+            edit((text, now) => {
+              const place = now.rows[at]?.nameSpan;
+              return place ? [cellChange(text, place, name)] : null;
+            })
+          }
         />
         {showKind ? <span className={styles.kind}>{row.kind}</span> : null}
       </th>
@@ -154,24 +164,24 @@ function Row({ card, row, at, showKind, onCell, onChoose }: RowProps) {
         );
       })}
       <td className={styles.tools}>
-        <WordButton aria-label={`Copy ${row.name}`} onClick={() => edit((text) => copiedRow(text, card, row))}>
+        <WordButton aria-label={`Copy ${row.name}`} onClick={() => edit((text, now) => copiedRow(text, now, at))}>
           copy
         </WordButton>
         <WordButton
           aria-label={`Move ${row.name} up`}
           disabled={at === 0}
-          onClick={() => edit((text) => movedRow(text, card, at, -1))}
+          onClick={() => edit((text, now) => movedRow(text, now, at, -1))}
         >
           up
         </WordButton>
         <WordButton
           aria-label={`Move ${row.name} down`}
           disabled={at === card.rows.length - 1}
-          onClick={() => edit((text) => movedRow(text, card, at, 1))}
+          onClick={() => edit((text, now) => movedRow(text, now, at, 1))}
         >
           down
         </WordButton>
-        <WordButton aria-label={`Remove ${row.name}`} onClick={() => edit(() => removedRow(row))}>
+        <WordButton aria-label={`Remove ${row.name}`} onClick={() => edit((_text, now) => removedRow(now, at))}>
           remove
         </WordButton>
       </td>

@@ -69,7 +69,9 @@ export function addedRow(text: string, card: TheoryCard, kind: string): Change |
 }
 
 /** The row once more under itself, with a name of its own. */
-export function copiedRow(text: string, card: TheoryCard, row: TheoryRow): readonly Change[] {
+export function copiedRow(text: string, card: TheoryCard, at: number): readonly Change[] | null {
+  const row = card.rows[at];
+  if (!row) return null;
   const { lineSpan, nameSpan } = row;
   const line = text.slice(lineSpan.from, lineSpan.to).replace(/\r?\n$/, '');
   const name = freshName([...card.rows.map((other) => other.name), ...card.parameters]);
@@ -80,8 +82,9 @@ export function copiedRow(text: string, card: TheoryCard, row: TheoryRow): reado
   return [{ from: end, to: end, insert: `\n${copy}` }];
 }
 
-export function removedRow(row: TheoryRow): readonly Change[] {
-  return [{ ...row.lineSpan, insert: '' }];
+export function removedRow(card: TheoryCard, at: number): readonly Change[] | null {
+  const row = card.rows[at];
+  return row ? [{ ...row.lineSpan, insert: '' }] : null;
 }
 
 /** The row changes places with its neighbour; null at the end of the table. */
