@@ -1,8 +1,11 @@
-import { expBall } from '../arithmetic/ball';
+import { addBalls, type Ball, expBall, magnitudeAbove, negateBall } from '../arithmetic/ball';
 import { formatBall } from '../arithmetic/decimal-text';
 import type { Form } from '../exact/form';
 import type { Assignment, Quantity, ValueRequest } from '../language/tree';
+import { isRemark } from '../spectrum/analyse';
+import { partialProducts } from '../spectrum/partial-product';
 import { determinant } from '../spectrum/regularised';
+import type { Spectrum } from '../spectrum/tower';
 import type { Analysis } from './analysis';
 import { type Answer, failure } from './answer';
 import type { ValueResult } from './result';
@@ -49,7 +52,36 @@ export function runDeterminant(
     zeta0: formatBall(found.zeta0, digits),
     scale: formatBall(found.scale, digits),
     anomaly: formatBall(found.anomaly, digits),
+    ...convergence(entry.spectrum, quantity, values, found.log),
   } satisfies Answer<ValueResult>;
+}
+
+/** Cut-offs at which the product is shown, and the digits it is computed to. */
+const CUTOFFS = [10, 30, 100, 300, 1000];
+const CONVERGENCE_DIGITS = 16;
+
+/** Regulated partial products beside their limit; nothing where they are not defined (towers in several indices). */
+function convergence(
+  spectrum: Spectrum,
+  { prescription }: DeterminantQuantity,
+  values: ReadonlyMap<string, Form>,
+  limit: Ball,
+): Pick<ValueResult, 'convergence'> {
+  const products = partialProducts(spectrum, prescription, values, CUTOFFS, CONVERGENCE_DIGITS);
+  if (isRemark(products)) return {};
+  return {
+    convergence: products.map(({ cutoff, sum, counterterms, regulated }) => {
+      const difference = addBalls(regulated, negateBall(limit), 64);
+      const size: Ball = { re: magnitudeAbove(difference), im: 0n, bits: difference.bits, error: 0n };
+      return {
+        cutoff,
+        product: formatBall(sum, CONVERGENCE_DIGITS),
+        counterterms: formatBall(counterterms, CONVERGENCE_DIGITS),
+        regulated: formatBall(regulated, CONVERGENCE_DIGITS),
+        distance: formatBall(size, 2).re,
+      };
+    }),
+  };
 }
 
 /** Values set with `at`, closed by the notebook's parameters; a string says what is wrong. */

@@ -199,6 +199,16 @@ export interface ValueResult extends ResultBase {
   readonly zeta0?: DecimalComplex;
   readonly scale?: DecimalComplex;
   readonly anomaly?: DecimalComplex;
+  /** Products cut off, local counterterms subtracted: what the regularised value is the limit of. */
+  readonly convergence?: readonly {
+    readonly cutoff: number;
+    /** Logarithm of the product up to the cut-off, and the counterterms added to it. */
+    readonly product: DecimalComplex;
+    readonly counterterms: DecimalComplex;
+    readonly regulated: DecimalComplex;
+    /** Distance from the regularised logarithm, to two digits. */
+    readonly distance: string;
+  }[];
 }
 
 export interface PlotResult extends ResultBase {
