@@ -3,6 +3,7 @@ import type { FixedComplex } from '../arithmetic/fixed-complex';
 import { logBarnesGamma } from './barnes-gamma';
 import type { ExactParameter, PreciseLog } from './special-function';
 import { logTripleSineRound } from './triple-sine-closed';
+import { logTripleSine } from './triple-sine-precise';
 
 /** A second value of a logarithm and how it was found. */
 export interface SecondRoute {
@@ -39,11 +40,19 @@ export function upsilonSecondRoute(x: FixedComplex, b: ExactParameter, bits: num
 /** Bits up to which the triple Gamma functions, with tens of thousands of lattice points, are worth their time. */
 const TRIPLE_GAMMA_BITS = 260;
 
-/** log S_3 in closed form for equal periods, else -log Gamma_3(x) - log Gamma_3(|w| - x). */
+/** Above this many bits the closed form for equal periods is the quicker route, below it the quadrature. */
+export const CLOSED_FORM_BITS = 400;
+/** Bits up to which the quadrature is worth its time as a second route. */
+const QUADRATURE_BITS = 1200;
+
+/** For equal periods the one of quadrature and closed form that is not the main route, else -log Gamma_3(x) - log Gamma_3(|w| - x). */
 export function tripleSineSecondRoute(x: FixedComplex, w: readonly ExactParameter[], bits: number): SecondRoute | null {
   if (w.length !== 3 || !w.every(({ approx }) => approx.im === 0 && approx.re > 0)) return null;
   const closed = logTripleSineRound(x, w, bits);
-  if (closed !== null) return { route: 'closed form in polylogarithms', log: closed };
+  if (closed !== null) {
+    if (bits <= CLOSED_FORM_BITS) return { route: 'closed form in polylogarithms', log: closed };
+    return bits > QUADRATURE_BITS ? null : { route: 'midpoint rule', log: logTripleSine(x, w, bits) };
+  }
   if (bits > TRIPLE_GAMMA_BITS) return null;
   const working = bits + 16;
   const periods = w.map((period) => real(period.value(working).re));

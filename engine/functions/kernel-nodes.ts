@@ -25,7 +25,7 @@ export interface KernelPlan {
 }
 
 /** More nodes than this are not attempted. */
-const MAXIMAL_NODES = 120_000;
+const MAXIMAL_NODES = 250_000;
 
 /**
  * A rule for |Im z| <= reach, |Re z| <= half width, at a target of `bits`. `rate` is 2 pi p/h, p = pi/max(w) the height

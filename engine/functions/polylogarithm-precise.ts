@@ -1,4 +1,4 @@
-import { absolute, fixedFromRatio, numberFromFixed } from '../arithmetic/fixed';
+import { divideFixed, fixedFromRatio, numberFromFixed } from '../arithmetic/fixed';
 import {
   absoluteComplex,
   addComplex,
@@ -6,12 +6,16 @@ import {
   logComplex,
   multiplyComplex,
   negateComplex,
+  oneComplex,
+  scaleComplex,
+  squareComplex,
   subtractComplex,
   zeroComplex,
 } from '../arithmetic/fixed-complex';
+import { piFixed } from '../arithmetic/fixed-constants';
 import { Rational } from '../exact/rational';
-import { bernoulliNumber } from './bernoulli';
 import type { Estimate } from './euler-maclaurin';
+import { twiceEvenZeta } from './even-zeta';
 import { zetaInteger } from './riemann-zeta-precise';
 
 /**
@@ -43,45 +47,45 @@ function powerSeries(n: number, z: FixedComplex, size: number, bits: number): Fi
   return sum;
 }
 
+/**
+ * With zeta(0) = -1/2, zeta(-2j) = 0 and zeta(1 - 2j) = (-1)^j 2 zeta(2j) (2j-1)!/(2 pi)^{2j} (DLMF 25.6.3, 25.4.1) the
+ * terms beyond mu^n are mu^{n-1} times (-1)^j 2 zeta(2j) (2j-1)!/(n-1+2j)! (mu/2 pi)^{2j}, which fall from the start.
+ */
 function nearCircle(n: number, z: FixedComplex, bits: number): FixedComplex {
-  const one = 1n << BigInt(bits);
-  if (z.re === one && z.im === 0n) return { re: zetaInteger(n, bits), im: 0n };
+  const one = oneComplex(bits);
+  if (z.re === one.re && z.im === 0n) return { re: zetaInteger(n, bits), im: 0n };
   const mu = logComplex(z, bits);
-  // mu^k/k! while the terms matter; zeta(n - k) stays below (k - n)!/(2 pi)^{k-n}.
-  let power: FixedComplex = { re: one, im: 0n };
+  let power: FixedComplex = one;
   let sum = zeroComplex;
   let harmonic = Rational.zero;
-  const limit = Math.ceil((bits * Math.LN2) / Math.log((2 * Math.PI) / 3.35)) + n + 4;
-  // B_{2j} grows while mu^k/k! falls below one unit: a power is kept with as many more bits as B gains.
-  const extra = BigInt(Math.ceil(Math.max(0, limit * Math.log2(limit / 17))) + 8);
-  power = { re: power.re << extra, im: 0n };
-  for (let k = 0; k <= limit; k++) {
-    if (k > 0) {
-      const product = multiplyComplex(power, mu, bits);
-      power = { re: product.re / BigInt(k), im: product.im / BigInt(k) };
-      if (k <= n - 1) harmonic = harmonic.add(Rational.of(1, k));
-    }
-    if (k === n - 1) {
-      const bracket = subtractComplex({ re: fixed(harmonic, bits), im: 0n }, logComplex(negateComplex(mu), bits));
-      sum = addComplex(sum, multiplyComplex(power, bracket, bits));
-    } else if (n - k >= 2) {
-      const zeta = zetaInteger(n - k, bits);
-      sum = addComplex(sum, { re: (power.re * zeta) >> BigInt(bits), im: (power.im * zeta) >> BigInt(bits) });
-    } else {
-      // zeta(-m) = (-1)^m B_{m+1}/(m+1) with B_1 = -1/2 (DLMF 25.6.3).
-      const m = k - n;
-      const number = bernoulliNumber(m + 1);
-      if (number.isZero()) continue;
-      const below = number.denominator * BigInt(m + 1);
-      const above = m % 2 === 0 ? number.numerator : -number.numerator;
-      const term = { re: (power.re * above) / below, im: (power.im * above) / below };
-      sum = addComplex(sum, term);
-      if (m > 4 && absolute(term.re) + absolute(term.im) < 1n << extra) break;
-    }
+  for (let k = 0; k < n - 1; k++) {
+    sum = addComplex(sum, scaleComplex(power, zetaInteger(n - k, bits), bits));
+    power = overInteger(multiplyComplex(power, mu, bits), k + 1);
+    harmonic = harmonic.add(Rational.of(1, k + 1));
   }
-  return { re: sum.re >> extra, im: sum.im >> extra };
+  const first = fixedFromRatio(harmonic.numerator, harmonic.denominator, bits);
+  const log = logComplex(negateComplex(mu), bits);
+  sum = addComplex(sum, multiplyComplex(power, { re: first - log.re, im: -log.im }, bits));
+  // power is mu^{n-1}/(n-1)!; the next term is -mu^n/(2 n!).
+  sum = subtractComplex(sum, overInteger(multiplyComplex(power, mu, bits), 2 * n));
+  const twoPi = 2n * piFixed(bits);
+  const turn = { re: divideFixed(mu.re, twoPi, bits), im: divideFixed(mu.im, twoPi, bits) };
+  const square = squareComplex(turn, bits);
+  const coefficients = twiceEvenZeta(64 * Math.ceil((0.6 * bits + 16) / 64), bits);
+  // term_j = power (2j-1)! (n-1)!/(n-1+2j)! turn^{2j}.
+  let term = overInteger(multiplyComplex(power, square, bits), n * (n + 1));
+  for (let j = 1; j <= coefficients.length; j++) {
+    const coefficient = coefficients[j - 1] as bigint;
+    const part = scaleComplex(term, j % 2 === 1 ? -coefficient : coefficient, bits);
+    sum = addComplex(sum, part);
+    if (part.re >> 2n === 0n && part.im >> 2n === 0n) break;
+    const factor = BigInt(2 * j * (2 * j + 1));
+    const next = multiplyComplex(term, square, bits);
+    term = overInteger({ re: next.re * factor, im: next.im * factor }, (n + 2 * j) * (n + 2 * j + 1));
+  }
+  return sum;
 }
 
-function fixed(value: Rational, bits: number): bigint {
-  return fixedFromRatio(value.numerator, value.denominator, bits);
+function overInteger(z: FixedComplex, by: number): FixedComplex {
+  return { re: z.re / BigInt(by), im: z.im / BigInt(by) };
 }

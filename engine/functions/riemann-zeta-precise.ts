@@ -1,4 +1,5 @@
 import { memoiseBounded } from '../arithmetic/memo';
+import { memoiseByKey } from './kernel-memo';
 
 /**
  * zeta(s) for an integer s >= 2 by Borwein's alternating sum (P. Borwein 2000, algorithm 2),
@@ -6,17 +7,23 @@ import { memoiseBounded } from '../arithmetic/memo';
  * with error below 3/(3 + sqrt 8)^n. Result with `bits` fraction bits, off by at most 1 unit.
  */
 export function zetaInteger(s: number, bits: number): bigint {
+  return values(`${s}|${bits}`, () => alternatingSum(s, bits));
+}
+
+const values = memoiseByKey<bigint>(32);
+
+function alternatingSum(s: number, bits: number): bigint {
   const guard = 24;
   const d = borwein(64 * Math.ceil((bits + guard) / 64));
   const last = d[d.length - 1] as bigint;
   const shift = BigInt(bits + guard);
-  let sum = 0n;
+  let total = 0n;
   for (let k = 0; k < d.length - 1; k++) {
     const term = ((last - (d[k] as bigint)) << shift) / BigInt(k + 1) ** BigInt(s);
-    sum += k % 2 === 0 ? term : -term;
+    total += k % 2 === 0 ? term : -term;
   }
   const power = 1n << BigInt(s - 1);
-  return ((sum * power) / (last * (power - 1n)) + (1n << BigInt(guard - 1))) >> BigInt(guard);
+  return ((total * power) / (last * (power - 1n)) + (1n << BigInt(guard - 1))) >> BigInt(guard);
 }
 
 /** d_0, ..., d_n for an error below 2^-bits; integers. */

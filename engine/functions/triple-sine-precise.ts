@@ -30,7 +30,7 @@ const INDISTINCT: PreciseLog = { kind: 'indistinct' };
  * after shifts S_3(x + w_i) = S_3(x)/S_2(x | w_j, w_k) into |Re z| <= |w|/4; for |Im z| so large that e^{-2 pi |Im z|/max w}
  * does not count, the limit -(i pi/6) (z^3 - (sum w^2) z/4) c4. Rational ratios of periods are nothing special.
  * Error: the rule's is below 2^-(bits+12) by its rate, rounding and one unit in each part of x are counted. 'indistinct'
- * next to a zero, and where more than 120 000 nodes would be needed.
+ * next to a zero, and where more than 250 000 nodes would be needed.
  * Source: Narukawa 2004, math/0306164 (integral and growth); Kurokawa and Koyama 2003 (shift).
  */
 export function logTripleSine(x: FixedComplex, periods: readonly ExactParameter[], bits: number): PreciseLog {

@@ -1,8 +1,9 @@
 import { Form } from '../exact/form';
-import { tripleSineSecondRoute } from './barnes-routes';
+import { CLOSED_FORM_BITS, tripleSineSecondRoute } from './barnes-routes';
 import { indexSum, parenthesised, periodText, plus, realFirst } from './notation';
 import { outsideDomain } from './outside-domain';
 import type { FunctionAt, Printer, SpecialFunction } from './special-function';
+import { logTripleSineRound } from './triple-sine-closed';
 import { tripleSineKernel } from './triple-sine-double';
 import { logTripleSine } from './triple-sine-precise';
 
@@ -63,7 +64,8 @@ export const tripleSine: SpecialFunction = {
     const [w1, w2, w3] = w.map(({ re, im }) => (im === 0 && re > 0 && Number.isFinite(re) ? re : null));
     return w1 && w2 && w3 ? tripleSineKernel(w1, w2, w3) : outsideDomain;
   },
-  precise: (x, w, bits) => logTripleSine(x, w, bits),
+  precise: (x, w, bits) =>
+    (bits > CLOSED_FORM_BITS ? logTripleSineRound(x, w, bits) : null) ?? logTripleSine(x, w, bits),
   crossCheck: (x, w, bits) => tripleSineSecondRoute(x, w, bits),
   sources: [
     { key: 'Kurokawa-Koyama-2003', text: 'N. Kurokawa, S. Koyama, Forum Math. 15 (2003) 839: multiple sine functions' },

@@ -34,7 +34,7 @@ const INDISTINCT: PreciseLog = { kind: 'indistinct' };
  * into |Re z| <= Q/4. No pole is used, so that rational b^2 is nothing special. The number of nodes grows with the
  * square of the digits and with |Im z|, until the asymptotic series takes over (`farUpsilon`).
  * Error: rule and correction are below 2^-(bits+12) by their rates; rounding and one unit in each part of x are counted.
- * 'indistinct' next to a zero, and where more than 120 000 nodes would be needed.
+ * 'indistinct' next to a zero, and where more than 250 000 nodes would be needed.
  * Source: Zamolodchikov and Zamolodchikov 1996, hep-th/9506136; Nakayama 2004, hep-th/0402009.
  */
 export function logUpsilon(x: FixedComplex, b: ExactParameter, bits: number): PreciseLog {
