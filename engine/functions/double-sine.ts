@@ -9,6 +9,7 @@ import { periodOfParameter } from './double-sine-period';
 import { logDoubleSine, logDoubleSineByOtherStep } from './double-sine-precise';
 import { logDoubleSineByProduct } from './double-sine-product';
 import { outsideDomain } from './outside-domain';
+import { sharedParameter } from './shared-parameter';
 import type {
   Complex,
   DoubleKernel,
@@ -56,8 +57,8 @@ export const doubleSine: SpecialFunction = {
   modes: doubleSineModes,
   elementary: false,
   double: ([b]) => doubleKernel(b as Complex),
-  precise: (x, [b], bits) => preciseLog(x, b as ExactParameter, bits),
-  crossCheck: (x, [b], bits) => secondRoute(x, b as ExactParameter, bits),
+  precise: (x, [b], bits) => preciseLog(x, sharedParameter(b as ExactParameter, bits), bits),
+  crossCheck: (x, [b], bits) => secondRoute(x, sharedParameter(b as ExactParameter, bits), bits),
   sources: [
     {
       key: 'Kurokawa-Koyama-2003',

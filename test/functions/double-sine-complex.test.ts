@@ -1,10 +1,13 @@
 import { describe, expect, test } from 'vitest';
 import { numberFromFixed } from '../../engine/arithmetic/fixed';
+import { Form } from '../../engine/exact/form';
 import { complexDoubleSineKernel } from '../../engine/functions/double-sine-complex-double';
 import { doubleSineKernel } from '../../engine/functions/double-sine-double';
 import { logDoubleSineByProduct } from '../../engine/functions/double-sine-product';
-import type { Complex } from '../../engine/functions/special-function';
-import { fixedComplex } from './fixed-text';
+import { sharedParameter } from '../../engine/functions/shared-parameter';
+import type { Complex, ExactParameter } from '../../engine/functions/special-function';
+import { functions } from '../../engine/functions/table';
+import { exactParameter, fixedComplex, parameterOfDouble } from './fixed-text';
 import { kernelValue } from './kernel-value';
 import { mismatch } from './law-checks';
 
@@ -60,5 +63,18 @@ describe('log s_b in doubles for complex b', () => {
     expect(kernelValue(kernel, pole.re, pole.im).re).toBe(Number.POSITIVE_INFINITY);
     expect(kernelValue(kernel, -pole.re, -pole.im).re).toBe(Number.NEGATIVE_INFINITY);
     expect(kernelValue(kernel, pole.re + 1e-8, pole.im).re).toBeLessThan(25);
+  });
+});
+
+describe('precise tier', () => {
+  test('a fresh parameter object finds the tables of an equal one', () => {
+    const bits = 700;
+    const x = fixedComplex(0.3, 0.2, bits);
+    const parameter = (): ExactParameter => exactParameter(Form.call('sqrt', Form.number(3)));
+    const first = functions.doubleSine.precise(x, [parameter()], bits);
+    const one = sharedParameter(parameter(), bits);
+    expect(sharedParameter(parameter(), bits)).toBe(one);
+    expect(sharedParameter(parameterOfDouble(1.5), bits)).not.toBe(one);
+    expect(functions.doubleSine.precise(x, [parameter()], bits)).toEqual(first);
   });
 });
