@@ -77,11 +77,3 @@ export const spectrumWording = {
     'A closed form was found, but it did not agree with the values of the product, or there was no point to compare at; it is ' +
     'not shown.',
 } satisfies Record<string, Wording>;
-
-/** How the second value of a determinant was found, in words. */
-export const determinantRoutes = {
-  rootless: 'each tower as one polynomial, without its roots and without pairing',
-  roots: 'the roots of each polynomial, without pairing',
-  further: 'each tower by itself, with further steps of the recursion',
-  integral: 'integrals of the multiple gamma functions',
-} as const;

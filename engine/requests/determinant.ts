@@ -17,6 +17,7 @@ type DeterminantQuantity = Extract<Quantity, { kind: 'determinant' }>;
 const ROUTES = {
   rootless: 'the zeta function of each whole eigenvalue, without its roots',
   roots: 'each eigenvalue by its roots',
+  closed: 'the closed form, each function by its own routine',
   further: 'the same sums from further steps',
 } as const;
 

@@ -4,19 +4,23 @@ import type { Estimate } from '../functions/euler-maclaurin';
 import { logarithmOf } from './anomaly';
 import { barnesZetaAtZero } from './barnes-polynomial';
 import { barnesTerms } from './barnes-term';
+import { closedPrecise } from './closed-precise';
 import { exactNumbers } from './exact-numbers';
 import { regularisedCount } from './expansion';
 import { fewerBits, negative } from './factor-value';
 import { isFailure, linearSum, type SumFailure } from './linear-sum';
+import type { Pairing } from './pairing';
 import { multiplyPolynomials, type Polynomial, polynomialIn, scalePolynomial, zeroPolynomial } from './polynomial';
 import { polynomialRoots } from './polynomial-roots';
+import type { Prepared } from './prepare';
+import { recognise } from './recognise';
 import { type Prescription, rootlessSum } from './rootless-sum';
 import { severalSum } from './several-sum';
 import { estimateOf, scaleEstimate, sumOf } from './total';
 import type { Tower, TowerFactor } from './tower';
 
 /** How a second value was found. */
-export type CheckRoute = 'rootless' | 'roots' | 'further';
+export type CheckRoute = 'rootless' | 'roots' | 'closed' | 'further';
 
 export interface CheckValue {
   readonly route: CheckRoute;
@@ -25,27 +29,46 @@ export interface CheckValue {
 
 /**
  * log det by a way of its own, tower by tower and without pairing: towers of linear factors as one polynomial without
- * its roots, towers with other factors by their roots, several indices with further steps.
+ * its roots, towers with other factors by their roots. With several indices the closed form, by the routines of its
+ * functions, where it has one in sines, and further steps of the recursion else.
  */
 export function checkValue(
-  towers: readonly Tower[],
+  { towers, pairing }: Prepared,
   prescription: Prescription,
   bits: number,
 ): CheckValue | SumFailure {
   const working = bits + 16;
+  if (towers.some(({ indices }) => indices.length > 1)) {
+    const closed = closedCheck(pairing, towers, prescription, working);
+    if (closed !== null) return { route: 'closed', estimate: fewerBits(closed, 16) };
+  }
   const parts: Estimate[] = [];
   const routes = new Set<CheckRoute>();
   for (const tower of towers) {
-    const found =
-      tower.indices.length > 1 ? severalCheck(tower, prescription, working) : singleCheck(tower, prescription, working);
+    const several = tower.indices.length > 1;
+    const found = several ? severalCheck(tower, prescription, working) : singleCheck(tower, prescription, working);
     if (isFailed(found)) return found;
     const exponent = estimateOf(Form.number(tower.exponent), working);
     if (exponent === null) return 'spectrum-undefined';
     parts.push(scaleEstimate(found.estimate, exponent, working));
     routes.add(found.route);
   }
-  const route = (['roots', 'rootless', 'further'] as const).find((r) => routes.has(r)) ?? 'further';
+  // The weakest way names the whole.
+  const route = (['further', 'roots', 'rootless'] as const).find((r) => routes.has(r)) ?? 'rootless';
   return { route, estimate: fewerBits(sumOf(parts), 16) };
+}
+
+function closedCheck(
+  pairing: Pairing,
+  towers: readonly Tower[],
+  prescription: Prescription,
+  bits: number,
+): Estimate | null {
+  const form = recognise(pairing);
+  const log = form === null ? null : closedPrecise(form, bits);
+  if (log === null || prescription === 'factors') return log;
+  const anomaly = estimateOf(exactNumbers(towers, 'operator')?.anomaly ?? Form.zero, bits);
+  return anomaly === null ? null : sumOf([log, anomaly]);
 }
 
 function isFailed(found: CheckValue | SumFailure): found is SumFailure {

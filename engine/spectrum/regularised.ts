@@ -14,7 +14,7 @@ import type { ModeClass } from './pairing';
 import { type Prepared, prepare, type Values, withAllValues } from './prepare';
 import { isRefusal } from './read';
 import type { Prescription } from './rootless-sum';
-import { agreedDigits, ballOf, estimateOf, sizeOf, sumOf } from './total';
+import { agreedDigits, ballOf, estimateOf, gapBetween, sizeOf, sumOf } from './total';
 import { type RefusalCode, type Remark, remark, type Spectrum } from './tower';
 import { zeroModes } from './zero-modes';
 
@@ -112,12 +112,13 @@ function evaluate(
   const scale = estimateOf(exact.scale, bits);
   const difference = estimateOf(exact.anomaly, bits);
   if (zeta0 === null || scale === null || difference === null) return failed('spectrum-undefined');
-  const check = checkValue(prepared.towers, prescription, bits);
+  const check = checkValue(prepared, prescription, bits);
+  const gap = typeof check === 'string' ? 0n : gapBetween(log.value, check.estimate.value, bits, turnsOf(prepared));
   const modulus = remarks.some(({ code }) => code === 'square-root-sign');
-  const shown = modulus ? { value: { re: log.value.re, im: 0n }, error: log.error } : log;
+  const shown = modulus ? { re: log.value.re, im: 0n } : log.value;
   return {
     kind: 'value',
-    log: ballOf(shown, bits),
+    log: ballOf({ value: shown, error: log.error + gap }, bits),
     zeta0: ballOf(zeta0, bits),
     scale: ballOf(scale, bits),
     anomaly: ballOf(difference, bits),
@@ -125,10 +126,7 @@ function evaluate(
     crossCheck:
       typeof check === 'string'
         ? null
-        : {
-            route: check.route,
-            agreedDigits: Math.min(digits, agreedDigits(log.value, check.estimate.value, bits, turnsOf(prepared))),
-          },
+        : { route: check.route, agreedDigits: Math.min(digits, agreedDigits(log.value, gap, bits)) },
     remarks,
   };
 }

@@ -1,5 +1,5 @@
 import type { Ball } from '../arithmetic/ball';
-import { absolute, bitLength, numberFromFixed } from '../arithmetic/fixed';
+import { absolute, bitLength } from '../arithmetic/fixed';
 import { addComplex, type FixedComplex, multiplyComplex, zeroComplex } from '../arithmetic/fixed-complex';
 import { piFixed } from '../arithmetic/fixed-constants';
 import { formFixed } from '../arithmetic/form-fixed';
@@ -45,21 +45,16 @@ export function ballOf({ value, error }: Estimate, bits: number): Ball {
   return { re: value.re, im: value.im, bits, error };
 }
 
-/**
- * Number of decimal digits on which two values agree, relative to the larger of 1 and their size; imaginary parts are
- * compared modulo 2 pi / turns. At most what the bits can tell.
- */
-export function agreedDigits(a: FixedComplex, b: FixedComplex, bits: number, turns: number): number {
+/** Upper bound of |a - b| in units, imaginary parts compared modulo 2 pi / turns. */
+export function gapBetween(a: FixedComplex, b: FixedComplex, bits: number, turns: number): bigint {
   const turn = (2n * piFixed(bits)) / BigInt(turns);
-  const re = a.re - b.re;
   let im = (a.im - b.im) % turn;
   if (2n * absolute(im) > turn) im -= im > 0n ? turn : -turn;
-  const gap = bitLength(absolute(re) + absolute(im) + 1n);
-  const size = Math.max(0, bitLength(sizeOf(a)) - bits);
-  return Math.max(0, Math.floor((bits + size - gap) * Math.log10(2)));
+  return absolute(a.re - b.re) + absolute(im);
 }
 
-/** Value in doubles, for plans. */
-export function approximately(value: FixedComplex, bits: number): { readonly re: number; readonly im: number } {
-  return { re: numberFromFixed(value.re, bits), im: numberFromFixed(value.im, bits) };
+/** Number of decimal digits on which a value agrees with another, relative to the larger of 1 and its size. */
+export function agreedDigits(value: FixedComplex, gap: bigint, bits: number): number {
+  const size = Math.max(0, bitLength(sizeOf(value)) - bits);
+  return Math.max(0, Math.floor((bits + size - bitLength(gap + 1n)) * Math.log10(2)));
 }
