@@ -130,10 +130,12 @@ const NAMED = 6;
 /** Zeros as rings on the axis, poles as crosses above their line; both with their word. */
 function Marks({ marks, x, y, frame, domain }: MarksProps) {
   const zeroAt = domain.from <= 0 && domain.to >= 0 ? y(0) : frame.bottom;
-  return marks.map((mark) => {
+  const places = new Set(marks.map((mark) => mark.x)).size;
+  return marks.map((mark, index) => {
     const at = x(mark.x);
     const order = mark.order > 1 ? ` of order ${mark.order}` : '';
-    const word = marks.length > NAMED ? '' : mark.kind + order;
+    const named = marks.findIndex((other) => other.kind === mark.kind && other.x === mark.x) === index;
+    const word = named && places <= NAMED ? mark.kind + order : '';
     const style = { stroke: lineStyle(mark.series).colour };
     return (
       <g key={`${mark.kind} ${mark.series} ${mark.x}`} className={styles.mark}>

@@ -19,7 +19,10 @@ export function LatexOut({ theory, form }: LatexOutProps) {
   async function latex(): Promise<LatexOutput | null> {
     try {
       const { notation } = view.get();
-      return await client.document(outline.state.get().text, theory, form, { notation });
+      const found = await client.document(outline.state.get().text, theory, form, { notation });
+      if (found.refused === undefined) return found;
+      notices.say(found.refused);
+      return null;
     } catch (error) {
       notices.say(`No LaTeX could be made: ${error instanceof Error ? error.message : String(error)}`);
       return null;

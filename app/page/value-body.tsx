@@ -1,6 +1,7 @@
 import type { DecimalComplex, ValueResult } from '../../engine/requests/result';
 import { useSession } from '../state/session';
 import { copyText } from '../storage/files';
+import { Convergence } from './convergence';
 import { Digits, errorText, secondsText } from './digits';
 import { Says } from './tex';
 import styles from './value-body.module.css';
@@ -20,6 +21,7 @@ export function ValueBody({ result }: { readonly result: ValueResult }) {
         {secondsText(result.seconds)}
       </p>
       <DeterminantFacts result={result} />
+      {result.convergence && result.convergence.length > 0 ? <Convergence rows={result.convergence} /> : null}
     </>
   );
 }

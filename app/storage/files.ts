@@ -17,6 +17,7 @@ export function fileName(title: string, ending: string): string {
   const words = title
     .toLowerCase()
     .normalize('NFKD')
+    .replace(/\p{Mark}/gu, '')
     .replace(/[^a-z0-9]+/g, '-')
     .replace(/^-+|-+$/g, '')
     .slice(0, 60);

@@ -19,6 +19,7 @@ test('the curve follows a dragged slider, and the text takes its value when it i
   await expect.poll(() => plot.path()).not.toBe('');
   const first = await plot.path();
   const slider = plot.slider('r');
+  await slider.scrollIntoViewIfNeeded();
   const box = await slider.boundingBox();
   if (!box) throw new Error('the slider has no place');
   const y = box.y + box.height / 2;
