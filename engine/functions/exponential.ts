@@ -10,6 +10,13 @@ export const exponential: SpecialFunction = {
   parameters: [],
   reflections: [],
   additive: (sum) => sum,
+  powers: (argument) => {
+    const terms = argument.split().map((term) => ({ term, power: logarithm(term) }));
+    return {
+      rest: Form.sum(terms.flatMap(({ term, power }) => (power === null ? [term] : []))),
+      bases: terms.flatMap(({ power }) => power ?? []),
+    };
+  },
   shifts: [],
   zeros: [],
   growth: [
@@ -37,3 +44,13 @@ export const exponential: SpecialFunction = {
   crossCheck: null,
   sources: [],
 };
+
+/** n log x with a whole number n. */
+function logarithm(term: Form): { readonly base: Form; readonly exponent: number } | null {
+  const [only] = term.terms;
+  const [factor, ...more] = only?.factors ?? [];
+  if (!only?.coefficient.isReal() || !only.coefficient.re.isInteger() || !factor || more.length > 0) return null;
+  const { atom, power } = factor;
+  if (atom.kind !== 'call' || atom.name !== 'log' || power !== 1) return null;
+  return { base: atom.arguments[0] as Form, exponent: Number(only.coefficient.re.numerator) };
+}

@@ -129,6 +129,11 @@ export interface SpecialFunction {
    * Factors of such a function are collected into one.
    */
   readonly additive?: (sum: Form) => Form;
+  /** Powers of closed forms that can be taken out: f(x) = f(rest) times the product of base^exponent. */
+  readonly powers?: (argument: Form) => {
+    readonly rest: Form;
+    readonly bases: readonly { readonly base: Form; readonly exponent: number }[];
+  };
   /** The exact value at special arguments; null where there is none to give. */
   readonly exactValue?: (argument: Form, parameters: readonly Form[]) => Form | null;
   readonly zeros: readonly Lattice[];

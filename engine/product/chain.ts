@@ -25,7 +25,7 @@ export class StepLattice {
     this.geometry = geometry;
   }
 
-  static of(name: FunctionName, parameters: readonly Form[], geometry: Geometry): StepLattice {
+  private static of(name: FunctionName, parameters: readonly Form[], geometry: Geometry): StepLattice {
     const steps = functions[name].shifts.map((shift) => shift.step(parameters));
     const found = new Map<string, readonly number[]>();
     for (const counts of countsUpTo(steps.length, MAXIMAL_STEPS)) {
@@ -33,6 +33,19 @@ export class StepLattice {
       for (const form of stages(sum, geometry)) if (!found.has(form.key)) found.set(form.key, counts);
     }
     return new StepLattice(found, geometry);
+  }
+
+  /** The lattice of a function from those made before, or a new one. */
+  static shared(
+    known: Map<string, StepLattice>,
+    name: FunctionName,
+    parameters: readonly Form[],
+    geometry: Geometry,
+  ): StepLattice {
+    const key = `${name}|${parameters.map((form) => form.key).join('|')}`;
+    const lattice = known.get(key) ?? StepLattice.of(name, parameters, geometry);
+    known.set(key, lattice);
+    return lattice;
   }
 
   /** How many of each step make up the difference; null when it is no such combination. */

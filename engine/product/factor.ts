@@ -105,6 +105,15 @@ export function atWeight(argument: Form, weight: Weight): Form {
   return argument.substitute((name) => (name === WEIGHT ? weight.position : name === FLUX ? weight.flux : null));
 }
 
+/** True for the geometry symbols b, Q, w1, ..: engine names that stand for numbers, placeholders left out. */
+export function isGeometry(name: string): boolean {
+  return name.startsWith('@') && name !== WEIGHT && name !== FLUX;
+}
+
+export function mentionsWeight(form: Form): boolean {
+  return form.symbols().some((name) => name === WEIGHT || name === FLUX);
+}
+
 /** A number as a factor. */
 export function constantFactor(value: Form, from: readonly string[]): Factor<never> {
   return { name: 'linear', argument: value, parameters: [], power: 1, weights: null, half: false, from };

@@ -3,7 +3,7 @@ import type { Gaussian } from '../exact/gaussian';
 import { Rational } from '../exact/rational';
 import { functions } from '../functions/table';
 import { expandChain } from './chain';
-import { type Factor, FLUX, type Product, WEIGHT, type WeightSet } from './factor';
+import { type Factor, FLUX, isGeometry, type Product, WEIGHT, type WeightSet } from './factor';
 
 /**
  * Brings arguments of elementary functions to one form by their declared shifts and reflections: the constant part is
@@ -22,8 +22,22 @@ function reduceFactor<W extends WeightSet>(factor: Factor<W>): Factor<W>[] {
   return shifted.flatMap((f) => (f.argument.key === factor.argument.key ? [f] : orient(f)));
 }
 
-/** Replaces a function at a special argument by its exact value. */
+/** Replaces a function at a special argument by its exact value, and takes powers of closed forms out of it. */
 export function exactFactors<W extends WeightSet>(factor: Factor<W>): Factor<W>[] {
+  const taken = functions[factor.name].powers?.(factor.argument);
+  if (taken && taken.bases.length > 0) {
+    const kept = taken.rest.isZero() ? [] : [{ ...factor, argument: taken.rest }];
+    const powers = taken.bases.map(
+      ({ base, exponent }): Factor<W> => ({
+        ...factor,
+        name: 'linear',
+        argument: base,
+        parameters: [],
+        power: factor.power * exponent,
+      }),
+    );
+    return [...kept, ...powers];
+  }
   const value =
     factor.name === 'linear' ? null : (functions[factor.name].exactValue?.(factor.argument, factor.parameters) ?? null);
   if (value === null) return [factor];
@@ -43,13 +57,28 @@ function isNumber({ argument }: Factor): boolean {
   return argument.toGaussian() !== null;
 }
 
-/** i x as the two factors i and x, where a function is the factor x itself. */
+/** i x and x/b as two factors each, where a function is the factor x itself. */
 function turned<W extends WeightSet>(factor: Factor<W>): Factor<W>[] {
-  if (factor.name !== 'linear' || isNumber(factor) || !leading(factor.argument)?.re.isZero()) return [factor];
+  if (factor.name !== 'linear' || factor.argument.symbols().every(isGeometry)) return [factor];
+  const unit = leading(factor.argument)?.re.isZero() ? Form.i : Form.one;
+  const content = unit.mul(commonGeometry(factor.argument));
+  if (content.equals(Form.one)) return [factor];
   return [
-    { ...factor, argument: Form.i },
-    { ...factor, argument: factor.argument.mul(Form.i.neg()) },
+    { ...factor, argument: content },
+    { ...factor, argument: factor.argument.div(content) },
   ];
+}
+
+/** The powers of geometry symbols that all terms share. */
+function commonGeometry(argument: Form): Form {
+  const [first, ...more] = argument.terms;
+  const shared = (first?.factors ?? []).filter(
+    ({ atom, power }) =>
+      atom.kind === 'symbol' &&
+      isGeometry(atom.name) &&
+      more.every(({ factors }) => factors.some((f) => f.atom.key === atom.key && f.power === power)),
+  );
+  return shared.reduce((product, { atom, power }) => product.mul(Form.atom(atom, power)), Form.one);
 }
 
 /** Makes the leading coefficient positive where f is even or odd. */
