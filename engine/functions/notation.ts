@@ -12,10 +12,10 @@ export function parenthesised(inner: string): string {
 /** True when the text is a sum or carries a sign, outside all brackets. */
 export function isSum(text: string): boolean {
   let depth = 0;
-  for (const character of text) {
-    if ('({['.includes(character)) depth++;
-    else if (')}]'.includes(character)) depth--;
-    else if (depth === 0 && '+-'.includes(character)) return true;
+  for (const [token] of text.matchAll(/\\(?:pm|mp)(?![A-Za-z])|[\s\S]/g)) {
+    if ('({['.includes(token)) depth++;
+    else if (')}]'.includes(token)) depth--;
+    else if (depth === 0 && ['+', '-', '\\pm', '\\mp'].includes(token)) return true;
   }
   return false;
 }
@@ -62,6 +62,12 @@ export function indexSum(indices: readonly string[], periods: readonly Form[], p
     return rational ? `${text}${index}` : `${index}${asFactor(text)}`;
   });
   return terms.join('+');
+}
+
+/** `(lead+x)(lead+y)`, a square where both are the same. */
+export function pairOfModes(lead: string, x: Form, y: Form, print: Printer): string {
+  const [one, two] = [x, y].map((form) => parenthesised(plus(lead, form, print))) as [string, string];
+  return one === two ? `${one}^{2}` : one + two;
 }
 
 /** A period; the inverse of a symbol as a power, `b^{-1}`. */

@@ -1,6 +1,8 @@
 import { piFixed } from '../arithmetic/fixed-constants';
 import { Form } from '../exact/form';
-import type { SpecialFunction } from './special-function';
+import { gcd, Rational } from '../exact/rational';
+import { isSum } from './notation';
+import type { Printer, SpecialFunction } from './special-function';
 
 /**
  * f(x) = (-1)^x for integers x, as products over fluxes have it. Its logarithm is i pi for odd and 0 for even x; an
@@ -18,7 +20,7 @@ export const sign: SpecialFunction = {
   notations: [
     {
       label: '(-1)^x',
-      latex: (argument, _parameters, print) => `(-1)^{${print.form(argument)}}`,
+      latex: (argument, _parameters, print) => `(-1)^{${exponent(argument, print)}}`,
       definition: () => '(-1)^x,\\quad x=0,\\pm1,\\ldots',
     },
   ],
@@ -41,6 +43,23 @@ export const sign: SpecialFunction = {
   crossCheck: null,
   sources: [],
 };
+
+/** The exponent over its common denominator, positive terms first: `(n+|n|)/2`. */
+function exponent(argument: Form, print: Printer): string {
+  const denominator = argument.terms.reduce((common, { coefficient: { re } }) => {
+    const left = re.denominator / gcd(common, re.denominator);
+    return common * left;
+  }, 1n);
+  const terms = argument.scale(Rational.of(denominator)).split();
+  const [above, below] = [false, true].map((negative) => terms.filter((term) => isNegative(term) === negative));
+  const text = [above, below].map((list) => (list?.length ? print.form(Form.sum(list)) : '')).join('');
+  if (denominator === 1n) return text;
+  return `${isSum(text) ? `(${text})` : text}/${denominator}`;
+}
+
+function isNegative(term: Form): boolean {
+  return term.terms[0]?.coefficient.re.sign() === -1;
+}
 
 /**
  * An integer argument up to even numbers: |n| and n have the same parity, and so have x and -x. Names stand for integers;
@@ -65,5 +84,5 @@ function parity(sum: Form): Form {
 }
 
 function positive(term: Form): Form {
-  return term.terms[0]?.coefficient.re.sign() === -1 ? term.neg() : term;
+  return isNegative(term) ? term.neg() : term;
 }

@@ -1,6 +1,6 @@
 import { Form } from '../exact/form';
 import { CLOSED_FORM_BITS, tripleSineSecondRoute } from './barnes-routes';
-import { indexSum, parenthesised, periodText, plus, realFirst } from './notation';
+import { indexSum, pairOfModes, parenthesised, periodText, plus, realFirst } from './notation';
 import { outsideDomain } from './outside-domain';
 import type { FunctionAt, Printer, SpecialFunction } from './special-function';
 import { logTripleSineRound } from './triple-sine-closed';
@@ -19,7 +19,7 @@ export const tripleSine: SpecialFunction = {
   name: 'tripleSine',
   spelling: 'triplesine',
   parameters: ['w1', 'w2', 'w3'],
-  reflections: [{ center: (w) => Form.sum(w).mul(HALF), power: 1, sign: 1 }],
+  reflections: [{ center: (w) => total(w).mul(HALF), power: 1, sign: 1 }],
   shifts: [0, 1, 2].map((index) => ({
     step: (w: readonly Form[]) => w[index] as Form,
     quotient: (x: Form, w: readonly Form[]) => [
@@ -43,21 +43,17 @@ export const tripleSine: SpecialFunction = {
       latex: (x, w, print) => `S_3${parenthesised(`${realFirst(x, print)}${periodList(w, print)}`)}`,
       definition: (w, print) => {
         const lead = indexSum(['n_1', 'n_2', 'n_3'], w, print);
-        const factors = `${parenthesised(`${lead}+x`)}${parenthesised(`${plus(lead, Form.sum(w), print)}-x`)}`;
+        const factors = `${parenthesised(`${lead}+x`)}${parenthesised(`${plus(lead, total(w), print)}-x`)}`;
         return `S_3(x${periodList(w, print)})=\\prod_{n_1,n_2,n_3\\ge0}${factors}`;
       },
     },
   ],
   modes: (x, w, print) => {
-    const rest = Form.sum(w).sub(x);
-    if (isRound(w)) {
-      // n1 + n2 + n3 = n in (n + 1)(n + 2)/2 ways.
-      const pair = `${parenthesised(plus('n', x, print))}${parenthesised(plus('n', rest, print))}`;
-      return `\\prod_{n\\ge0}\\left[${pair}\\right]^{(n+1)(n+2)/2}`;
-    }
+    const rest = total(w).sub(x);
+    // n1 + n2 + n3 = n in (n + 1)(n + 2)/2 ways.
+    if (isRound(w)) return `\\prod_{n\\ge0}\\left[${pairOfModes('n', x, rest, print)}\\right]^{(n+1)(n+2)/2}`;
     const lead = indexSum(['n_1', 'n_2', 'n_3'], w, print);
-    const factors = `${parenthesised(plus(lead, x, print))}${parenthesised(plus(lead, rest, print))}`;
-    return `\\prod_{n_1,n_2,n_3\\ge0}${factors}`;
+    return `\\prod_{n_1,n_2,n_3\\ge0}${pairOfModes(lead, x, rest, print)}`;
   },
   elementary: false,
   double: (w) => {
@@ -102,7 +98,18 @@ function isRound(w: readonly Form[]): boolean {
   return w.every((period) => period.equals(Form.one));
 }
 
-/** `|w_1,w_2,w_3`; nothing on the round sphere. */
+/** True for the periods of the squashed sphere as symbols. */
+function isSymbolic(w: readonly Form[]): boolean {
+  return w.every((period, k) => period.equals(Form.symbol(`@w${k + 1}`)));
+}
+
+/** Sum of the periods, with its own symbol while they are symbols. */
+function total(w: readonly Form[]): Form {
+  return isSymbolic(w) ? Form.symbol('@W') : Form.sum(w);
+}
+
+/** `|omega` or `|w_1,w_2,w_3`; nothing on the round sphere. */
 function periodList(w: readonly Form[], print: Printer): string {
-  return isRound(w) ? '' : `\\,|\\,${w.map((period) => periodText(period, print)).join(',')}`;
+  if (isRound(w)) return '';
+  return `\\,|\\,${isSymbolic(w) ? '\\omega' : w.map((period) => periodText(period, print)).join(',')}`;
 }

@@ -1,7 +1,7 @@
 import type { FixedComplex } from '../arithmetic/fixed-complex';
 import { Form } from '../exact/form';
 import { upsilonSecondRoute } from './barnes-routes';
-import { asFactor, indexSum, parenthesised, periodText, plus, realFirst } from './notation';
+import { asFactor, indexSum, pairOfModes, parenthesised, periodText, realFirst } from './notation';
 import { outsideDomain } from './outside-domain';
 import type { ExactParameter, FunctionAt, Printer, SpecialFunction } from './special-function';
 import { upsilonKernel } from './upsilon-double';
@@ -20,7 +20,7 @@ export const upsilon: SpecialFunction = {
   name: 'upsilon',
   spelling: 'upsilon',
   parameters: ['b'],
-  reflections: [{ center: ([b]) => sum(b as Form).mul(HALF), power: 1, sign: 1 }],
+  reflections: [{ center: ([b]) => half(b as Form), power: 1, sign: 1 }],
   exactValue: (x, [b]) => (x.equals(half(b as Form)) ? Form.one : null),
   shifts: [
     { step: ([b]) => b as Form, quotient: (x, [b]) => quotient(x, b as Form, Form.call('log', b as Form)) },
@@ -62,9 +62,16 @@ export const upsilon: SpecialFunction = {
   ],
   modes: (x, [b], print) => {
     const periods = [b as Form, (b as Form).inverse()];
-    const lead = indexSum(['m', 'n'], periods, print);
-    const total = (b as Form).equals(Form.symbol('@b')) ? Form.symbol('@Q') : sum(b as Form);
-    return `\\prod_{m,n\\ge0}${parenthesised(plus(lead, x, print))}${parenthesised(plus(lead, total.sub(x), print))}`;
+    // Not m, which masses are called.
+    const lead = indexSum(['k', 'n'], periods, print);
+    return `\\prod_{k,n\\ge0}${pairOfModes(
+      lead,
+      x,
+      half(b as Form)
+        .scale(2)
+        .sub(x),
+      print,
+    )}`;
   },
   elementary: false,
   double: ([b]) => (b?.im === 0 && b.re > 0 && Number.isFinite(b.re) ? upsilonKernel(b.re) : outsideDomain),

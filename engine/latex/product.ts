@@ -1,10 +1,12 @@
 import type { Form } from '../exact/form';
+import { parenthesised } from '../functions/notation';
 import type { FunctionAt, Notation, Printer } from '../functions/special-function';
 import { functions } from '../functions/table';
 import { atWeight, type Factor, FLUX, WEIGHT } from '../product/factor';
 import type { TheoryGroup } from '../theory/theory';
 import type { TheoryWeights } from '../theory/weights';
 import { formLatex } from './form';
+import { sumOfSquaresLatex, sumsOfSquares } from './sum-of-squares';
 import { NO_WEIGHT, type PrintedWeights, printWeights } from './weights';
 
 /** A stretch of a formula and the multiplets it stems from. */
@@ -64,12 +66,17 @@ function atPrinted(form: Form, { weight, flux }: PrintedWeights): Form {
 function factorsLatex(factors: readonly Factor[], at: (argument: Form) => Form, style: Style): string {
   const above: Single[] = [];
   const below: Single[] = [];
-  for (const factor of factors) {
-    const latex = functionLatex(
-      { ...factor, argument: at(factor.argument), parameters: factor.parameters.map(at) },
-      style,
-    );
+  const { squares, others } = sumsOfSquares(factors);
+  for (const factor of others) {
+    const { additive } = functions[factor.name];
+    const argument = at(factor.argument);
+    const shortest = additive === undefined ? argument : additive(argument);
+    if (additive !== undefined && shortest.isZero()) continue;
+    const latex = functionLatex({ ...factor, argument: shortest, parameters: factor.parameters.map(at) }, style);
     (factor.power < 0 ? below : above).push({ latex, power: Math.abs(factor.power) });
+  }
+  for (const { re, im, power } of squares) {
+    (power < 0 ? below : above).push({ latex: sumOfSquaresLatex(at(re), at(im)), power: Math.abs(power) });
   }
   return quotient(above, below);
 }
@@ -119,7 +126,20 @@ function juxtaposed(factors: readonly Single[]): string {
 }
 
 function raised(latex: string, power: number): string {
-  return /^[A-Za-z0-9]$/.test(latex) ? `${latex}^{${power}}` : `\\left[${latex}\\right]^{${power}}`;
+  if (/^[A-Za-z0-9]$/.test(latex) || isBracketed(latex)) return `${latex}^{${power}}`;
+  return `${/[([]/.test(latex) ? `\\left[${latex}\\right]` : parenthesised(latex)}^{${power}}`;
+}
+
+/** True when one pair of parentheses or brackets encloses the whole. */
+function isBracketed(latex: string): boolean {
+  if (!/^(\\left)?[([]/.test(latex)) return false;
+  let depth = 0;
+  for (let k = 0; k < latex.length; k++) {
+    const character = latex.charAt(k);
+    if ('([{'.includes(character)) depth++;
+    else if (')]}'.includes(character) && --depth === 0) return k === latex.length - 1;
+  }
+  return false;
 }
 
 /** Two pieces stay on one line up to so many characters of LaTeX, which is about a line of print. */
