@@ -1,6 +1,6 @@
 import { FormError } from '../exact/form';
 import type { FormulaRequest } from '../language/tree';
-import { type ElementaryProduct, elementary, isSpecial, quantity } from '../spheres/quantity';
+import { type ElementaryProduct, elementary, isOpen, quantity } from '../spheres/quantity';
 import type { Analysis } from './analysis';
 import { type Answer, failure } from './answer';
 import { formulaView, type Printable } from './formula';
@@ -27,10 +27,10 @@ export function runFormula(analysis: Analysis, request: FormulaRequest): Answer 
   } satisfies Answer<FormulaResult>;
 }
 
-/** Elementary where nothing else is left, else special functions. */
+/** Elementary where nothing else but constants is left, else special functions. */
 export function preferredForm(printable: Printable): 'elementary' | 'functions' {
   try {
-    return printable.elementary().product.some(isSpecial) ? 'functions' : 'elementary';
+    return printable.elementary().product.some(isOpen) ? 'functions' : 'elementary';
   } catch (error) {
     if (!(error instanceof FormError)) throw error;
     return 'functions';

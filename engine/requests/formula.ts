@@ -7,7 +7,7 @@ import { displayLatex, type Piece, productLatex } from '../latex/product';
 import { symbolLatex } from '../latex/symbol';
 import { fluxStem, stemOf } from '../latex/weights';
 import { collectEqual, simplify } from '../product/simplify';
-import { type ElementaryProduct, isSpecial } from '../spheres/quantity';
+import { type ElementaryProduct, isOpen } from '../spheres/quantity';
 import type { Sphere, TheoryProduct } from '../spheres/sphere';
 import { gaugeGroups, type Theory } from '../theory/theory';
 import type { FormulaView } from './result';
@@ -76,7 +76,7 @@ function factorKey({ name, argument, parameters, power, weights, half, from }: T
 function remarks(form: FormulaForm, { product, at }: ElementaryProduct): string[] {
   if (form !== 'elementary') return [];
   const values = at.map(({ name, value }) => `$${symbolLatex(name)}=${formLatex(value)}$`).join(', ');
-  const left = [...new Set(product.filter(isSpecial).map(({ name }) => functions[name].notations[0]?.label ?? name))];
+  const left = [...new Set(product.filter(isOpen).map(({ name }) => functions[name].notations[0]?.label ?? name))];
   return [
     ...(at.length > 0 ? [`Holds at ${values}.`] : []),
     ...(left.length > 0 ? [`What is left in $${left.join(',')}$ has no elementary form at these charges.`] : []),

@@ -1,5 +1,6 @@
 import { Form } from '../exact/form';
 import type { Factor } from '../product/factor';
+import { hasCubicTrace } from '../theory/checks/cubic-level';
 import type { TheoryGroup } from '../theory/theory';
 import type { TheoryWeights } from '../theory/weights';
 
@@ -8,8 +9,13 @@ export function quadratic(group: TheoryGroup): Form {
   return powerSum(group, 2).scale(group.group.levelScale);
 }
 
+/** Tr sigma^3 of U(n) and SU(n), n > 2; the weights of every other group here come in pairs, and it vanishes. */
+export function cubicTrace(group: TheoryGroup): Form {
+  return hasCubicTrace(group) ? powerSum(group, 3) : Form.zero;
+}
+
 /** Sum of a power of all printed coordinates, in the independent ones. */
-export function powerSum(group: TheoryGroup, power: number): Form {
+function powerSum(group: TheoryGroup, power: number): Form {
   return Form.sum(group.coordinates.map((name) => coordinate(group, name).pow(power)));
 }
 

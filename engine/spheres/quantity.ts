@@ -1,6 +1,6 @@
 import { Form } from '../exact/form';
 import { functions } from '../functions/table';
-import { type Factor, FLUX, substitute, WEIGHT } from '../product/factor';
+import { type Factor, FLUX, isGeometry, substitute, WEIGHT } from '../product/factor';
 import { simplify } from '../product/simplify';
 import type { Theory } from '../theory/theory';
 import type { TheoryWeights } from '../theory/weights';
@@ -65,6 +65,11 @@ export function elementary(
 /** True for factors that are not elementary. */
 export function isSpecial(factor: Factor<TheoryWeights>): boolean {
   return !functions[factor.name].elementary;
+}
+
+/** True for factors that are not elementary and no constants: they depend on more than the geometry. */
+export function isOpen(factor: Factor<TheoryWeights>): boolean {
+  return isSpecial(factor) && (factor.weights !== null || !factor.argument.symbols().every(isGeometry));
 }
 
 /** Names of all coordinates and parameters that a product depends on, geometry symbols left out. */

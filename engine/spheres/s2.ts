@@ -1,5 +1,6 @@
 import { Form } from '../exact/form';
 import { type Factor, FLUX, WEIGHT } from '../product/factor';
+import { twoSphereConditions } from '../theory/checks/two-sphere';
 import { gaugeGroups, type Multiplet, type Theory } from '../theory/theory';
 import { matterWeights, rootWeights, type TheoryWeights } from '../theory/weights';
 import { exponential, fluxTrace, trace } from './classical';
@@ -57,7 +58,7 @@ export const s2: Sphere = {
       'e^{-4\\pi i\\xi\\,\\mathrm{tr}\\,\\sigma-i\\theta\\,\\mathrm{tr}\\,n}\\,Z_{\\text{1-loop}}(\\sigma,n)$.',
     'Constants $1/|W|$, powers of $2\\pi$ and the radius are not included.',
   ],
-  conditions: [],
+  conditions: twoSphereConditions,
   fluxes: true,
   specialFunction: 'fluxGamma',
   sources: [

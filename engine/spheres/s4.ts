@@ -1,5 +1,6 @@
 import { Form } from '../exact/form';
 import { type Factor, substitute, WEIGHT } from '../product/factor';
+import { fourSphereConditions } from '../theory/checks/four-sphere';
 import { gaugeGroups, type Multiplet, type Theory } from '../theory/theory';
 import { matterWeights, rootWeights, type TheoryWeights, type WeightedSet } from '../theory/weights';
 import { exponential, quadratic } from './classical';
@@ -15,7 +16,7 @@ const half = Form.ratio(1, 2);
  *
  * Conventions: the vector multiplet gives Upsilon_b(i a.sigma) for every root, a hyper in R gives
  * 1/Upsilon_b(Q/2 + i w.(sigma, m)) for every weight of R, a half-hyper for one of each pair of weights; classical factor
- * exp(-(8 pi^2/g^2) Tr sigma^2); Upsilon_b(Q/2) = 1, and the constant Upsilon_b'(0) for each Cartan direction is left out.
+ * exp(-(8 pi^2/g^2) (sigma, sigma)), (sigma, sigma) being Tr sigma^2 for SU(n), U(n) and USp(n); Upsilon_b(Q/2) = 1, and the constant Upsilon_b'(0) for each Cartan direction is left out.
  * `supersymmetry 4` adds the adjoint hyper at the mass i(b - 1/b)/2 where all but the Vandermonde cancels.
  *
  * Sources: V. Pestun, arXiv:0712.2824; N. Hama, K. Hosomichi, arXiv:1206.6359; T. Okuda, V. Pestun, arXiv:1004.1222.
@@ -67,7 +68,7 @@ export const s4: Sphere = {
     'The instanton factor $|Z_{\\text{inst}}|^2$ multiplies the integrand and is not included in the one-loop product.',
     "$1/|W|$, the measure, and the constants $\\Upsilon(Q/2)$ and $\\Upsilon'(0)$ are not included.",
   ],
-  conditions: [],
+  conditions: fourSphereConditions,
   fluxes: false,
   specialFunction: 'upsilon',
   sources: [

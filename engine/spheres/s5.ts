@@ -1,8 +1,9 @@
 import { Form } from '../exact/form';
 import { type Factor, substitute, WEIGHT } from '../product/factor';
+import { fiveSphereConditions } from '../theory/checks/five-sphere';
 import { gaugeGroups, type Multiplet, type Theory, type TheoryGroup } from '../theory/theory';
 import { matterWeights, rootWeights, type TheoryWeights, type WeightedSet } from '../theory/weights';
-import { exponential, powerSum, quadratic } from './classical';
+import { cubicTrace, exponential, quadratic } from './classical';
 import type { Sphere, TheoryProduct } from './sphere';
 
 const w = Form.symbol(WEIGHT);
@@ -16,7 +17,7 @@ const half = Form.ratio(1, 2);
  *
  * Conventions: the vector multiplet gives S_3(i a.sigma) for every root, a hyper in R gives
  * 1/S_3(|w|/2 + i w.(sigma, m)) for every weight of R, a half-hyper for one of each pair of weights; classical factor
- * exp(-[(4 pi^3/g^2) Tr sigma^2 + (pi k/3) Tr sigma^3]/(w1 w2 w3)); S_3 zeta-regularised, the constant S_3'(0)/2 pi for each
+ * exp(-[(4 pi^3/g^2) (sigma, sigma) + (pi k/3) Tr sigma^3]/(w1 w2 w3)); S_3 zeta-regularised, the constant S_3'(0)/2 pi for each
  * Cartan direction left out.
  *
  * Sources: K. Hosomichi, R.-K. Seong, S. Terashima, arXiv:1203.0371; J. Källén, J. Qiu, M. Zabzine, arXiv:1206.6008;
@@ -66,7 +67,7 @@ export const s5: Sphere = {
     'Perturbative part: instantons at the three fixed circles are not included.',
     "$1/|W|$, the measure, and the constant $S_3'(0)/2\\pi$ for each Cartan direction are not included.",
   ],
-  conditions: [],
+  conditions: fiveSphereConditions,
   fluxes: false,
   specialFunction: 'tripleSine',
   sources: [
@@ -77,11 +78,11 @@ export const s5: Sphere = {
   ],
 };
 
-/** (4 pi^3/g^2) Tr sigma^2 + (pi k/3) Tr sigma^3. */
+/** (4 pi^3/g^2) (sigma, sigma) + (pi k/3) Tr sigma^3; (sigma, sigma) is Tr sigma^2 for SU(n), U(n) and USp(n). */
 function classicalExponent(group: TheoryGroup): Form {
   const terms: Form[] = [];
   if (group.coupling !== null) terms.push(Form.pi.pow(3).scale(4).div(group.coupling.pow(2)).mul(quadratic(group)));
-  if (group.level !== null) terms.push(Form.pi.mul(Form.ratio(1, 3)).mul(group.level).mul(powerSum(group, 3)));
+  if (group.level !== null) terms.push(Form.pi.mul(Form.ratio(1, 3)).mul(group.level).mul(cubicTrace(group)));
   return Form.sum(terms);
 }
 
