@@ -6,6 +6,7 @@ import type { ExactParameter, FunctionName, PreciseLog } from '../functions/spec
 import { functions } from '../functions/table';
 import { exactOrder } from '../product/divisor';
 import { expand, type Product } from '../product/factor';
+import { isTooFar } from './reach';
 
 /** Digits that a request may ask for. */
 export const MAXIMAL_DIGITS = 1000;
@@ -45,6 +46,11 @@ export function evaluatePrecise(
   const entries = collectEntries(product, values);
   const names = [...new Set(entries.flatMap((e) => [e.argument, ...e.parameters].flatMap((f) => f.symbols())))];
   if (names.length > 0) return { kind: 'unset', names };
+  const far = entries.some(({ name, argument, parameters: periods }) => {
+    const at = formDouble(argument, () => null);
+    return at === null || isTooFar(name, at, periods);
+  });
+  if (far) return { kind: 'unreachable' };
   let order = 0;
   let meets = false;
   for (const entry of entries) {

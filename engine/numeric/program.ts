@@ -5,6 +5,7 @@ import { functions } from '../functions/table';
 import type { Product } from '../product/factor';
 import { type AffineEntry, type AffineProduct, affineProduct } from './affine';
 import type { Entry } from './precise';
+import { withinReach } from './reach';
 
 /**
  * A product compiled for doubles: everything but the variables has a value, equal factors are evaluated once, and
@@ -63,7 +64,8 @@ class Kernels {
     const key = `${name}|${parameters.map((form) => form.key).join('|')}`;
     const known = this.#known.get(key);
     if (known) return known;
-    const kernel = functions[name].double(parameters.map((form) => formDouble(form, () => null) ?? NOT_A_NUMBER));
+    const periods = parameters.map((form) => formDouble(form, () => null) ?? NOT_A_NUMBER);
+    const kernel = withinReach(functions[name].double(periods), name, parameters);
     this.#known.set(key, kernel);
     return kernel;
   }
@@ -123,7 +125,8 @@ function pointwise({ name, argument, parameters, power }: Entry, variables: read
       xRe[k] = x.re;
       xIm[k] = x.im;
       if (still) continue;
-      const kernel = functions[name].double(parameters.map((form) => formDouble(form, at) ?? NOT_A_NUMBER));
+      const periods = parameters.map((form) => formDouble(form, at) ?? NOT_A_NUMBER);
+      const kernel = withinReach(functions[name].double(periods), name, parameters, at);
       kernel.addLog(
         xRe.subarray(k, k + 1),
         xIm.subarray(k, k + 1),
