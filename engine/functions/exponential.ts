@@ -19,10 +19,8 @@ export const exponential: SpecialFunction = {
   },
   shifts: [],
   zeros: [],
-  growth: [
-    { direction: Form.one, logarithm: (x) => x },
-    { direction: Form.one.neg(), logarithm: (x) => x },
-  ],
+  // The logarithm is the argument in whatever direction, also along a line where it is imaginary: e^{2 pi i zeta x}.
+  growth: [Form.one, Form.i, Form.one.neg(), Form.i.neg()].map((direction) => ({ direction, logarithm: (x) => x })),
   notations: [
     {
       label: 'e^{x}',
