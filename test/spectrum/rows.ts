@@ -4,6 +4,7 @@ import { piFixed } from '../../engine/arithmetic/fixed-constants';
 import { Form } from '../../engine/exact/form';
 import type { Spectrum, WrittenTower } from '../../engine/spectrum/tower';
 import fixture from '../fixtures/spectra/spectra.json';
+import { decimalFixed } from '../functions/decimal-fixed';
 import { parseForm } from './parse-form';
 
 export type Row = (typeof fixture.rows)[number];
@@ -38,19 +39,12 @@ export function valuesOf(row: Row): Map<string, Form> {
 
 /** Distance of a ball from the printed number of a row, imaginary parts modulo 2 pi/turns (0: not). */
 export function distanceFrom(ball: Ball, value: { re?: string; im?: string }, turns: number): number {
-  const re = ball.re - decimal(value.re ?? '0', ball.bits);
-  let im = ball.im - decimal(value.im ?? '0', ball.bits);
+  const re = ball.re - decimalFixed(value.re ?? '0', ball.bits);
+  let im = ball.im - decimalFixed(value.im ?? '0', ball.bits);
   if (turns > 0) {
     const turn = (2n * piFixed(ball.bits)) / BigInt(turns);
     im %= turn;
     if (2n * absolute(im) > turn) im -= im > 0n ? turn : -turn;
   }
   return Math.hypot(numberFromFixed(re, ball.bits), numberFromFixed(im, ball.bits));
-}
-
-function decimal(text: string, bits: number): bigint {
-  const [whole = '0', part = ''] = text.replace('-', '').split('.');
-  const digits = BigInt(`${whole}${part}`);
-  const value = (digits << BigInt(bits)) / 10n ** BigInt(part.length);
-  return text.startsWith('-') ? -value : value;
 }
