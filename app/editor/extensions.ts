@@ -15,12 +15,14 @@ import { theme } from './theme';
 
 /** Everything the editor is made of. Tab is left alone: it leads out of the text. */
 export function extensions(session: Session): Extension {
+  // Nothing else on the page moves by itself.
+  const still = matchMedia('(prefers-reduced-motion: reduce)').matches;
   return [
     lineNumbers(),
     foldGutter({ openText: '▾', closedText: '▸' }),
     highlightSpecialChars(),
     history(),
-    drawSelection(),
+    drawSelection({ cursorBlinkRate: still ? 0 : 1200 }),
     dropCursor(),
     bracketMatching(),
     closeBrackets(),

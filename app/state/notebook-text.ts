@@ -87,7 +87,8 @@ export function createNotebookText(): NotebookText {
 
   function spanNow(revision: number, span: Span): Span | null {
     const since = changesSince(revision);
-    return since && since.reduce<Span | null>((at, changes) => at && mapSpan(at, changes), span);
+    if (!since) return null;
+    return since.reduce<Span | null>((at, changes) => at && mapSpan(at, changes), span);
   }
 
   return {

@@ -1,8 +1,11 @@
 import { expect, test } from 'playwright/test';
 import { NotebookPage } from '../pages/notebook-page';
 
-/** Many short pieces of prose, so that both halves are taller than the window. */
-const text = Array.from({ length: 60 }, (_, at) => `## Part ${at + 1}\n\nWords of part ${at + 1}.\n\n`).join('');
+/** Many short cards, so that both halves are taller than the window. */
+const text = Array.from(
+  { length: 60 },
+  (_, at) => `## Part ${at + 1}\n\nWords of part ${at + 1}.\n\nlet a${at + 1} = ${at + 1}\n\n`,
+).join('');
 
 test('the halves scroll together, whichever is scrolled', async ({ page }) => {
   const notebook = new NotebookPage(page);
@@ -38,7 +41,9 @@ test('the cursor brings its card into sight', async ({ page }) => {
   await page.keyboard.press('ControlOrMeta+Home');
   const first = notebook.sheet.getByRole('heading', { name: 'Part 1', exact: true });
   await expect(first).toBeInViewport();
-  await expect(notebook.card('Text').filter({ has: first })).toHaveAttribute('aria-current', 'location');
+  await expect(
+    notebook.card('Text').filter({ has: page.getByRole('heading', { name: 'Part 1', exact: true }) }),
+  ).toHaveAttribute('aria-current', 'location');
   await page.keyboard.press('ControlOrMeta+End');
   await expect(notebook.sheet.getByRole('heading', { name: 'Part 60', exact: true })).toBeInViewport();
 });
