@@ -1,6 +1,7 @@
 import { describe, expect, test } from 'vitest';
 import { s4 } from '../../engine/spheres/s4';
 import { betaFunction } from '../../engine/theory/checks/beta-function';
+import { conformalAnomaly } from '../../engine/theory/checks/conformal-anomaly';
 import { globalAnomaly } from '../../engine/theory/checks/global-anomaly';
 import { consistencyRows } from './consistency-rows';
 import { says, theoryOf, verdict } from './theory-text';
@@ -77,5 +78,29 @@ describe('global anomaly', () => {
         theory('gauge G = USp(4)', `flavor F = SO(${n})`, 'matter G F', 'halfhyper h fund vector'),
       );
     expect([at(7), at(8)]).toEqual(['fails', 'holds']);
+  });
+});
+
+// D. Anselmi, D. Z. Freedman, M. T. Grisaru, A. A. Johansen, hep-th/9708042: (a, c) = (5/24, 1/6) of a vector multiplet,
+// (1/24, 1/12) of a hyper; N = 4 has a = c = dim G/4; SU(2) with four flavours (23/24, 7/6).
+describe('conformal anomalies', () => {
+  test.each([
+    [['matter', 'hyper q'], '\\frac{1}{24}', '\\frac{1}{12}'],
+    [['gauge G = U(1)'], '\\frac{5}{24}', '\\frac{1}{6}'],
+    [['supersymmetry 4', 'gauge G = SU(3)'], '2', '2'],
+    [['gauge G = SU(3)', 'matter G', 'hyper a adj'], '2', '2'],
+    [['gauge G = SU(2)', 'matter G', 'hyper q 4*fund'], '\\frac{23}{24}', '\\frac{7}{6}'],
+    [
+      ['gauge G = SU(2)', 'flavor F = SO(8)', 'matter G F', 'halfhyper q fund vector'],
+      '\\frac{23}{24}',
+      '\\frac{7}{6}',
+    ],
+  ])('%j', (lines, a, c) => {
+    expect(says(conformalAnomaly, theory(...lines))[0]).toContain(`$a=${a}$ and $c=${c}$`);
+  });
+
+  test('running theories have none', () => {
+    expect(says(conformalAnomaly, theory('gauge G = SU(2)', 'matter G', 'hyper q 3*fund'))).toEqual([]);
+    expect(says(conformalAnomaly, theory('gauge G = U(1)', 'matter G', 'hyper q 1'))).toEqual([]);
   });
 });

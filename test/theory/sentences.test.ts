@@ -67,6 +67,7 @@ const spheres: [string, SphereRules, readonly Condition[], string[][]][] = [
         'hyper p 0 4*fund 1',
         'halfhyper h 0 1 vector',
       ],
+      ['gauge G = SU(2), coupling g', 'matter G', 'hyper q 4*fund'],
     ],
   ],
   [

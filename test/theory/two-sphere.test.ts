@@ -1,6 +1,7 @@
 import { describe, expect, test } from 'vitest';
 import { s2 } from '../../engine/spheres/s2';
 import { superpotential } from '../../engine/theory/checks/superpotential';
+import { thetaAngle } from '../../engine/theory/checks/theta-angle';
 import { centralCharge, contourInTwo, fiRunning, twistedChirals } from '../../engine/theory/checks/two-dimensional';
 import { consistencyRows } from './consistency-rows';
 import { says, theoryOf, verdict } from './theory-text';
@@ -66,4 +67,12 @@ test('twisted chirals are neutral', () => {
   const at = (cell: string) =>
     verdict(twistedChirals, theory(['gauge G = U(1)', 'flavor A = U(1)', 'matter G A R', `twisted y ${cell} 1 0`]));
   expect([at('0'), at('1')]).toEqual(['holds', 'fails']);
+});
+
+// K. Hori, D. Tong, hep-th/0609032, section 4: theta of U(N) is shifted by (N - 1) pi.
+test('W bosons shift theta', () => {
+  const at = (group: string) => says(thetaAngle, theory([`gauge G = ${group}`]))[0];
+  expect(at('U(2)')).toContain('(-1)^{\\operatorname{tr}n}$: they shift $\\theta$ by $\\pi$');
+  expect(at('U(3)')).toContain('(-1)^{2\\operatorname{tr}n}$: they shift $\\theta$ by $2\\pi$, a whole number');
+  expect([at('U(1)'), at('SU(2)')]).toEqual([undefined, undefined]);
 });

@@ -26,12 +26,34 @@ const SOURCE =
   'V. A. Novikov, M. A. Shifman, A. I. Vainshtein, V. I. Zakharov, Nucl. Phys. B 229 (1983) 381; N. Seiberg, E. Witten, ' +
   'hep-th/9408099 (1994); V. Pestun, arXiv:0712.2824 (2007)';
 
-function simpleFinding(theory: Theory, owner: TheoryGroup, index: number, part: number, print: Printer): Finding {
+/** Whether all couplings keep their value: b = 0 for every simple part and every U(1). */
+export function isConformal(theory: Theory): boolean {
+  return gaugeGroups(theory).every(
+    ({ group, index }) =>
+      group.group.simple.every((_, part) => {
+        const { twice, matter } = simpleShares(theory, group, index, part);
+        return matter.equals(Rational.of(twice));
+      }) &&
+      (group.group.abelianRank === 0 || chargeSquares(theory, group, index).isZero()),
+  );
+}
+
+/** 2h and the sum of I2 over hypers, half-hypers counted half. */
+function simpleShares(
+  theory: Theory,
+  owner: TheoryGroup,
+  index: number,
+  part: number,
+): { readonly twice: number; readonly matter: Rational } {
   const type = owner.group.simple[part];
   const twice = type === undefined ? 0 : 2 * rootSystem(type).dualCoxeter;
   // sumOverMatter counts chirals: two for a hyper, one for a half-hyper. N = 4 adds a hyper in the adjoint.
   const extra = theory.supersymmetry === 4 ? Rational.of(twice) : Rational.zero;
-  const matter = indexSum(theory, index, part).mul(half).add(extra);
+  return { twice, matter: indexSum(theory, index, part).mul(half).add(extra) };
+}
+
+function simpleFinding(theory: Theory, owner: TheoryGroup, index: number, part: number, print: Printer): Finding {
+  const { twice, matter } = simpleShares(theory, owner, index, part);
   const b = Rational.of(twice).sub(matter);
   const name = owner.group.simple.length > 1 ? `, SU(2) number ${part + 1}` : '';
   const lead = `${owner.group.abelianRank > 0 ? 'The simple part of ' : ''}$${groupLatex(owner, print)}$${name}`;
@@ -52,15 +74,20 @@ function behaviour(b: Rational, owner: TheoryGroup): string {
     : 'conformal, and the Gaussian of the coupling makes the integral converge';
 }
 
-function abelianFinding(theory: Theory, owner: TheoryGroup, index: number, print: Printer): Finding {
+/** Sum of the squared charges of all hypers under the U(1) of unit trace. */
+function chargeSquares(theory: Theory, owner: TheoryGroup, index: number): Rational {
   const n = Rational.of(owner.group.coordinateCount);
-  const sum = sumOverMatter(theory, ({ representations }) =>
+  return sumOverMatter(theory, ({ representations }) =>
     tracesOf(representations[index] as Representation).chargeSquared.mul(
       Rational.of(dimensionWithout(representations, index)),
     ),
   )
     .mul(half)
     .div(n.mul(n));
+}
+
+function abelianFinding(theory: Theory, owner: TheoryGroup, index: number, print: Printer): Finding {
+  const sum = chargeSquares(theory, owner, index);
   const lead = owner.group.isAbelian
     ? `$${groupLatex(owner, print)}$`
     : `The $\\mathrm{U}(1)$ of $${groupLatex(owner, print)}$`;

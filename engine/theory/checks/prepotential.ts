@@ -26,8 +26,8 @@ export function hessian(theory: Theory, branch: CoulombBranch, { point }: Branch
   for (const { group, index } of branch.groups) {
     const lattice = cocharacterLattice(group);
     const own = point.slice(offset, offset + lattice.rank);
-    // One of each pair of roots, the pair counted with the factor 1/2.
-    for (const root of lattice.positiveRoots)
+    // One of each pair of roots, the pair counted with the factor 1/2; the adjoint hyper of N = 2 cancels them.
+    for (const root of theory.supersymmetry === 2 ? [] : lattice.positiveRoots)
       add(root, 0, offset, lattice.rank, Math.abs(valueAt(root, 0, own, lattice.rank)));
     const owner = theory.groups[index] as TheoryGroup;
     const level = levelValue(theory, owner.level).toNumber();
