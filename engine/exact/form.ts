@@ -38,7 +38,7 @@ const MAXIMAL_TERMS = 4096;
 /**
  * An exact Laurent polynomial with Gaussian rational coefficients in atoms; affine in Coulomb parameters and masses
  * wherever it is the argument of a special function. Immutable and in normal form: two forms that are equal as
- * polynomials in their atoms have equal keys. Square roots of rationals are reduced (sqrt(2)^2 = 2), so forms over
+ * polynomials in their atoms have equal keys. Square roots of single terms are reduced (sqrt(2)^2 = 2), so forms over
  * one quadratic field are compared exactly.
  */
 export class Form {
@@ -280,16 +280,15 @@ function multiplyTerms(a: Term, b: Term): readonly Term[] {
   return reduced.terms.flatMap((term) => multiplyTerms(rest, term));
 }
 
+/** True for the root of a single term. */
 function isRoot(atom: Atom): atom is Extract<Atom, { kind: 'call' }> {
-  return atom.kind === 'call' && atom.name === 'sqrt' && (atom.arguments[0] as Form).toRational() !== null;
+  return atom.kind === 'call' && atom.name === 'sqrt' && (atom.arguments[0] as Form).terms.length === 1;
 }
 
-/** atom^power, with sqrt(q)^2 = q for rational q so that quadratic irrationals have one normal form. */
+/** atom^power, with sqrt(x)^2 = x for single terms x so that quadratic irrationals have one normal form. */
 function powerOfAtom(atom: Atom, power: number): Form {
   if (!isRoot(atom) || power === 1) return Form.atom(atom, power);
-  const radicand = (atom.arguments[0] as Form).toRational() as Rational;
-  const half = Math.floor(power / 2);
-  const outside = Form.number(radicand.pow(half));
+  const outside = (atom.arguments[0] as Form).pow(Math.floor(power / 2));
   return power % 2 === 0 ? outside : outside.mul(Form.atom(atom));
 }
 

@@ -76,14 +76,11 @@ export const tripleSine: SpecialFunction = {
 /** 1/S_2(x | u, v) as a double sine. */
 function inverseDoubleSine(x: Form, periods: readonly Form[]): FunctionAt {
   const [u, v] = periods as [Form, Form];
-  const root = Form.call('sqrt', u.mul(v));
-  const halfQ = u.add(v).div(root).mul(HALF);
-  return {
-    name: 'doubleSine',
-    argument: Form.i.mul(x.div(root).sub(halfQ)),
-    parameters: [Form.call('sqrt', u.div(v))],
-    power: -1,
-  };
+  // Roots apart: products of them then have one normal form.
+  const [rootU, rootV] = [Form.call('sqrt', u), Form.call('sqrt', v)];
+  const parameter = rootU.div(rootV);
+  const argument = x.div(rootU.mul(rootV)).sub(parameter.add(parameter.inverse()).mul(HALF));
+  return { name: 'doubleSine', argument: Form.i.mul(argument), parameters: [parameter], power: -1 };
 }
 
 /** (i pi/6) B_33(x | w), B_33 = (z^3 - (w1^2 + w2^2 + w3^2) z/4)/(w1 w2 w3) with z = x - |w|/2. */

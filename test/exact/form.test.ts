@@ -211,6 +211,14 @@ describe('roots', () => {
     );
   });
 
+  test('so it is for single terms, while roots of sums stay', () => {
+    const [x, y] = [Form.symbol('x'), Form.symbol('y')];
+    expect(sqrt(x.div(y)).pow(2).key).toBe(x.div(y).key);
+    expect(sqrt(x).pow(-1).key).toBe(sqrt(x).div(x).key);
+    expect(sqrt(x).mul(sqrt(y)).div(sqrt(x)).key).toBe(sqrt(y).key);
+    expect(sqrt(x.add(y)).pow(2).symbols()).toEqual(['x', 'y']);
+  });
+
   test.each([
     [8, 1, '2*sqrt(2)'],
     [1, 2, '1/2*sqrt(2)'],
