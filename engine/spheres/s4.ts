@@ -65,6 +65,9 @@ export const s4: Sphere = {
   }),
   conventions: (theory) => [
     ...(theory.round ? [] : ['$Q=b+b^{-1}$']),
+    ...(theory.supersymmetry === 4 && !theory.round
+      ? ['The adjoint hypermultiplet has the mass $\\frac{i}{2}(b-b^{-1})$.']
+      : []),
     'The instanton factor $|Z_{\\text{inst}}|^2$ multiplies the integrand and is not included in the one-loop product.',
     "$1/|W|$, the measure, and the constants $\\Upsilon(Q/2)$ and $\\Upsilon'(0)$ are not included.",
   ],

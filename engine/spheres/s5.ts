@@ -10,6 +10,7 @@ const w = Form.symbol(WEIGHT);
 /** Sum of the periods, |omega|. */
 const total = Form.symbol('@W');
 const periods = ['@w1', '@w2', '@w3'].map((name) => Form.symbol(name));
+const last = Form.symbol('@w3');
 const half = Form.ratio(1, 2);
 
 /**
@@ -18,10 +19,12 @@ const half = Form.ratio(1, 2);
  * Conventions: the vector multiplet gives S_3(i a.sigma) for every root, a hyper in R gives
  * 1/S_3(|w|/2 + i w.(sigma, m)) for every weight of R, a half-hyper for one of each pair of weights; classical factor
  * exp(-[(4 pi^3/g^2) (sigma, sigma) + (pi k/3) Tr sigma^3]/(w1 w2 w3)); S_3 zeta-regularised, the constant S_3'(0)/2 pi for each
- * Cartan direction left out.
+ * Cartan direction left out. `supersymmetry 2` adds the adjoint hyper of mass i (w1 + w2 - w3)/2, i/2 on the round sphere, for
+ * which S_3(z)/S_3(z + w3) = S_2(z | w1, w2) leaves a Chern-Simons matrix model.
  *
  * Sources: K. Hosomichi, R.-K. Seong, S. Terashima, arXiv:1203.0371; J. Källén, J. Qiu, M. Zabzine, arXiv:1206.6008;
- * Y. Imamura, arXiv:1210.6308; G. Lockhart, C. Vafa, arXiv:1210.5909.
+ * Y. Imamura, arXiv:1210.6308; G. Lockhart, C. Vafa, arXiv:1210.5909; for `supersymmetry 2` H.-C. Kim, S. Kim,
+ * arXiv:1206.6339.
  */
 export const s5: Sphere = {
   name: 'S5',
@@ -34,7 +37,7 @@ export const s5: Sphere = {
     abelian: 'the cubic level of U(n) is one number; write `level`',
   },
   halvesWeights: true,
-  supersymmetries: [1],
+  supersymmetries: [1, 2],
   minimalSupersymmetry: 1,
   rCharge: () => ({ value: Form.zero, fixed: true }),
   latex: (theory) => (theory.round ? 'S^5' : 'S^5_\\omega'),
@@ -43,12 +46,13 @@ export const s5: Sphere = {
     (name) => theory.geometry.get(name) ?? null,
   ],
   vector: (theory) =>
-    gaugeGroups(theory).flatMap(({ index }) => {
+    gaugeGroups(theory).flatMap(({ group, index }) => {
       const roots = rootWeights(theory, index).map(({ weights }) => ({ weights, multiplicity: 1 }));
-      return onRound(
-        theory,
-        tripleSines(roots, () => Form.i.mul(w), 1, 'vector'),
-      );
+      const vectors = tripleSines(roots, (position) => Form.i.mul(position), 1, 'vector');
+      if (theory.supersymmetry !== 2) return onRound(theory, vectors);
+      const adjoint = [...roots, { weights: null, multiplicity: group.group.rank }];
+      const hyper = tripleSines(adjoint, (position) => last.add(Form.i.mul(position)), -1, 'vector');
+      return onRound(theory, [...vectors, ...hyper]);
     }),
   multiplet: (theory, multiplet) => onRound(theory, hypers(theory, multiplet)),
   classical: (theory) =>
@@ -64,6 +68,11 @@ export const s5: Sphere = {
   }),
   conventions: (theory) => [
     ...(theory.round ? [] : ['$|\\omega|=\\omega_1+\\omega_2+\\omega_3$']),
+    ...(theory.supersymmetry === 2
+      ? [
+          `The adjoint hypermultiplet has the mass $${theory.round ? '\\frac{i}{2}' : '\\frac{i}{2}(\\omega_1+\\omega_2-\\omega_3)'}$.`,
+        ]
+      : []),
     'Perturbative part: instantons at the three fixed circles are not included.',
     "$1/|W|$, the measure, and the constant $S_3'(0)/2\\pi$ for each Cartan direction are not included.",
   ],

@@ -1,23 +1,13 @@
 import { describe, expect, test } from 'vitest';
 import { Form } from '../../engine/exact/form';
+import { productLatex } from '../../engine/latex/product';
 import { evaluatePrecise } from '../../engine/numeric/precise';
 import { simplify } from '../../engine/product/simplify';
-import { isSpecial } from '../../engine/spheres/quantity';
+import { isOpen } from '../../engine/spheres/quantity';
 import { s5 } from '../../engine/spheres/s5';
 import type { Theory } from '../../engine/theory/theory';
 import { theoryOf } from '../theory/theory-text';
-import {
-  ballAt,
-  distance,
-  grid,
-  logAt,
-  numberOf,
-  type Point,
-  productOf,
-  ratio,
-  realProgram,
-  valuesAt,
-} from './evaluate';
+import { ballAt, distance, grid, logAt, type Point, productBall, productOf, realProgram, valuesAt } from './evaluate';
 import { reference, row } from './fixture';
 
 const theory = (...lines: string[]) => theoryOf(lines, {}, s5);
@@ -48,7 +38,7 @@ describe('perturbative partition functions', () => {
   test('N = 1* at the mass i/2 is a Chern-Simons matrix model', () => {
     const star = theory('gauge G = SU(2), coupling g', 'flavor A = U(1)', 'matter G A', 'hyper a adj 1');
     const point = { g: Form.call('sqrt', Form.number(8)), m: Form.i.mul(Form.ratio(1, 2)) };
-    // The two neutral components give 1/S_3(1) = 2 pi/S_3'(0), which the reference leaves out with the Cartan constant.
+    // The neutral component gives 1/S_3(1) = 2 pi/S_3'(0), so that the constant of the measure drops out.
     expectRow(rankOne(star, point), 's5-N1-star', 1e-12);
   });
 
@@ -161,20 +151,49 @@ describe('laws', () => {
   });
 });
 
-describe('closed forms', () => {
-  // S_3(z)/S_3(z + 1) = S_2(z), S_2(iy) S_2(-iy) = 4 sinh^2(pi y): N. Kurokawa, S. Koyama, Forum Math. 15 (2003) 839.
-  test.each(['SU(2)', 'SU(3)', 'USp(4)'])('the adjoint of %s at the mass i/2 leaves hyperbolic sines', (group) => {
-    const star = theory(`gauge G = ${group}`, 'flavor A = U(1)', 'matter G A', 'hyper a adj 1');
-    const half = Form.i.mul(Form.ratio(1, 2));
-    const at = productOf(s5, star, 'one-loop').map((factor) => ({
-      ...factor,
-      argument: factor.argument.substitute((name) => (name === 'm' ? half : null)),
-    }));
-    expect(at.length).toBeGreaterThan(0);
-    expect(half.isZero()).toBe(false);
+// S_3(z)/S_3(z + w3) = S_2(z | w1, w2), and S_2(iy | w1, w2) S_2(-iy | w1, w2) = 4 sinh(pi y/w1) sinh(pi y/w2):
+// N. Kurokawa, S. Koyama, Forum Math. 15 (2003) 839; the matrix model: H.-C. Kim, S. Kim, arXiv:1206.6339.
+describe('N = 2', () => {
+  const reduced = (...lines: string[]) => {
+    const of = theory(...lines);
+    const left = simplify(productOf(s5, of, 'one-loop'), 'elementary', s5.geometry(of));
+    const latex = productLatex(of.groups, left, { kind: 'function', notation: 0 }).map((piece) => piece.latex);
+    return { left, latex };
+  };
+
+  test.each(['SU(2)', 'SU(3)', 'U(2)', 'USp(4)', 'SO(7)', 'G2'])(
+    '%s leaves hyperbolic sines and a constant',
+    (group) => {
+      const { left } = reduced('supersymmetry 2', `gauge G = ${group}`);
+      expect(left.filter(isOpen)).toEqual([]);
+      const sines = left.filter(({ name }) => name === 'hyperbolicSine');
+      expect(sines.length).toBeGreaterThan(0);
+      expect(
+        sines.every(({ power, half, argument }) => power === 2 && half && argument.equals(Form.symbol('@w'))),
+      ).toBe(true);
+    },
+  );
+
+  test('in print', () => {
+    expect(reduced('supersymmetry 2', 'gauge G = SU(3)').latex).toEqual([
+      '\\prod_{a<b}\\left[2\\sinh\\pi(\\sigma_a-\\sigma_b)\\right]^{2}',
+      '\\frac{1}{\\left[S_3(1)\\right]^{2}}',
+    ]);
+    expect(reduced(SQUASHED, 'supersymmetry 2', 'gauge G = SU(2)').latex).toEqual([
+      '4\\sinh\\left(\\frac{2\\pi\\sigma}{\\omega_2}\\right)\\,\\sinh\\left(\\frac{2\\pi\\sigma}{\\omega_1}\\right)',
+      '\\frac{1}{S_3(\\omega_3\\,|\\,\\omega)}',
+    ]);
   });
-  void simplify;
-  void isSpecial;
-  void numberOf;
-  void ratio;
+
+  test.each(['', ', w1 = 1, w2 = 6/5, w3 = 9/10'])('is the adjoint hyper of its mass%s', (squashing) => {
+    const lines = [`sphere S5${squashing}`, 'gauge G = SU(3)'];
+    const star = theory(...lines, 'flavor A = U(1)', 'matter G A', 'hyper a adj 1');
+    const mass = Form.i.mul(squashing === '' ? Form.ratio(1, 2) : Form.ratio(13, 20));
+    const at = { sigma1: '0.3', sigma2: '-0.8', m: mass };
+    const two = theory('supersymmetry 2', ...lines);
+    expect(distance(ballAt(s5, star, 'one-loop', at, 20), ballAt(s5, two, 'one-loop', at, 20))).toBe(0);
+    const { left } = reduced('supersymmetry 2', ...lines);
+    const reference = productBall(left, valuesAt(s5, two, at), 20);
+    expect(distance(ballAt(s5, two, 'one-loop', at, 20), reference)).toBe(0);
+  });
 });
