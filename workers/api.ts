@@ -1,5 +1,6 @@
 import type { FormulaForm } from '../engine/language/tree';
 import { type Analysis, analyse } from '../engine/requests/analysis';
+import { type BuiltinBlock, builtinBlocks } from '../engine/requests/builtin-text';
 import { type RepresentationChoice, representationChoices } from '../engine/requests/chooser';
 import { type LatexOut, latexOut } from '../engine/requests/document';
 import { type HoverText, hoverAt } from '../engine/requests/hover';
@@ -22,6 +23,7 @@ export interface EngineApi {
   document(text: string, name: string, form: FormulaForm, notation: number): LatexOut;
   representations(group: string, limit: number): readonly RepresentationChoice[];
   hover(text: string, offset: number): HoverText | null;
+  builtins(): readonly BuiltinBlock[];
 }
 
 /** An engine that remembers the last text it read. `now` is a clock in seconds. */
@@ -47,5 +49,6 @@ export function createEngineApi(now: () => number): EngineApi {
     document: (text, name, form, notation) => latexOut(read(text), name, form, notation),
     representations: representationChoices,
     hover: (text, offset) => hoverAt(read(text), offset),
+    builtins: builtinBlocks,
   };
 }

@@ -63,6 +63,7 @@ export function createEngineClient(connect: () => EngineConnection = connectWork
       return { snippet: out.snippet, document: out.document };
     },
     representations: (group, limit) => quick.ask((api) => api.representations(group, limit)),
+    builtins: () => quick.ask((api) => api.builtins()),
     dispose: () => {
       quick.end();
       slow.end();

@@ -1,4 +1,5 @@
 import type { FormulaForm } from '../engine/language/tree';
+import type { BuiltinBlock } from '../engine/requests/builtin-text';
 import type { FailureResult, Outline, PlotResult, Progress, Result } from '../engine/requests/result';
 
 /** What the page decides about how the engine prints. */
@@ -59,6 +60,8 @@ export interface EngineClient {
   document(text: string, theoryName: string, form: FormulaForm, options: OutlineOptions): Promise<LatexOutput>;
   representations(group: string, limit: number): Promise<readonly RepresentationChoice[]>;
   hover(text: string, offset: number): Promise<HoverHelp | null>;
+  /** Blocks of text to insert: spectra of the fields on round spheres. */
+  builtins(): Promise<readonly BuiltinBlock[]>;
   dispose(): void;
   /** Called when the worker was ended and started anew, so that what was asked of it can be asked again. */
   onRestart(callback: () => void): void;

@@ -44,6 +44,17 @@ const functions = [...options(EXPRESSION_FUNCTIONS, 'function'), ...options(CONS
 /** Words that may stand at the cursor, with what they are. */
 export function completion(session: Session): CompletionSource {
   const representations = representationOptions(session.client);
+  let blocks: readonly Completion[] | null = null;
+
+  /** Whole blocks, asked for once. */
+  async function builtins(): Promise<readonly Completion[]> {
+    blocks ??= (await session.client.builtins()).map(({ label, text }) => ({
+      label: `spectrum of a ${label}`,
+      detail: 'block',
+      apply: text,
+    }));
+    return blocks;
+  }
 
   async function offered(context: CompletionContext): Promise<readonly Completion[]> {
     const line = context.state.doc.lineAt(context.pos);
@@ -57,7 +68,7 @@ export function completion(session: Session): CompletionSource {
       ...named(symbolsIn(context.state.doc.toString())),
     ];
 
-    if (/^\w*$/.test(before)) return options(WORK_WORDS, 'begins work');
+    if (/^\w*$/.test(before)) return [...options(WORK_WORDS, 'begins work'), ...(await builtins())];
     if (block === 'theory' && line.text !== start) {
       if (/^[ \t]+\w*$/.test(before)) return options(THEORY_LINE_WORDS, 'line of a theory');
       const word = firstWord(before);

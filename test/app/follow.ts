@@ -23,6 +23,7 @@ export function heldClient() {
     document: unasked,
     representations: unasked,
     hover: unasked,
+    builtins: unasked,
     dispose: () => undefined,
     onRestart: () => undefined,
   };
