@@ -19,7 +19,7 @@ import type { Estimate } from './euler-maclaurin';
 import { LogProduct } from './log-product';
 
 /** Most lattice points multiplied out; beyond it the precision asked for is out of reach. */
-const MAXIMAL_POINTS = 1_000_000;
+const MAXIMAL_POINTS = 400_000;
 
 /**
  * log Gamma_N(x|w) = d/ds zeta_N(s, x|w) at 0, zeta_N(s) = sum over n >= 0 of (x + n.w)^-s with principal logarithms

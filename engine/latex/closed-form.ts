@@ -51,7 +51,13 @@ function isBare(base: Form): boolean {
   const plain = only.coefficient.isReal() && only.coefficient.re.sign() > 0 && only.coefficient.re.isInteger();
   if (only.factors.length === 0) return plain || only.coefficient.re.isZero();
   const factor = only.factors[0];
-  return plain && only.coefficient.re.equals(Rational.one) && only.factors.length === 1 && factor?.power === 1;
+  return (
+    factor?.atom.kind !== 'call' &&
+    plain &&
+    only.coefficient.re.equals(Rational.one) &&
+    only.factors.length === 1 &&
+    factor?.power === 1
+  );
 }
 
 function powerLatex(base: string, power: Form, bare: boolean): string {

@@ -81,7 +81,7 @@ function productSign({ name, from, to }: WrittenTower['ranges'][number]): string
 }
 
 function parenthesised(text: string, always = false): string {
-  return always || /[+\-\\]/.test(text) ? `\\left(${text}\\right)` : text;
+  return always || /[+\-\\^]/.test(text) ? `\\left(${text}\\right)` : text;
 }
 
 function raised(base: string, power: string): string {

@@ -1,4 +1,4 @@
-import { Form } from '../exact/form';
+import { type Atom, Form } from '../exact/form';
 import { Gaussian } from '../exact/gaussian';
 import { Rational } from '../exact/rational';
 import { reduceRoots } from './form-division';
@@ -58,7 +58,7 @@ export class ClosedSum {
       this.keep(base, power);
       return;
     }
-    for (const factor of only.factors) this.keep(Form.atom(factor.atom), power.scale(factor.power));
+    for (const { atom, power: times } of only.factors) this.atom(atom, power.scale(times));
     const turns = turnsOf(only.coefficient);
     if (turns === null) {
       this.keep(Form.gaussian(only.coefficient), power);
@@ -111,6 +111,16 @@ export class ClosedSum {
       const unit = Number(((whole.numerator % 4n) + 4n) % 4n);
       if (unit !== 0) this.keep(Form.gaussian(Gaussian.i.pow(unit)), Form.one);
     } else this.constant({ name: 'one' }, phase(turns));
+  }
+
+  /** Exponentials go into the exponent, roots of numbers become powers of them. */
+  private atom(atom: Atom, power: Form): void {
+    if (atom.kind === 'constant' && atom.name === 'e') this.constant({ name: 'one' }, power);
+    else if (atom.kind === 'call' && atom.name === 'exp') {
+      this.constant({ name: 'one' }, power.mul(atom.arguments[0] as Form));
+    } else if (atom.kind === 'call' && atom.name === 'sqrt') {
+      this.number(atom.arguments[0] as Form, power.scale(Rational.of(1, 2)));
+    } else this.keep(Form.atom(atom), power);
   }
 
   private keep(base: Form, power: Form): void {

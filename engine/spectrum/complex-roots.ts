@@ -1,3 +1,5 @@
+import { sqrt } from '../arithmetic/double-complex';
+
 /** A complex number in doubles. */
 export interface Point {
   readonly re: number;
@@ -20,6 +22,8 @@ export function complexRoots(coefficients: readonly Point[]): Point[] {
     re: (re * top.re + im * top.im) / norm,
     im: (im * top.re - re * top.im) / norm,
   }));
+  if (degree === 1) return [{ re: -(monic[0] as Point).re, im: -(monic[0] as Point).im }];
+  if (degree === 2) return rootsOfQuadratic(monic[1] as Point, monic[0] as Point);
   const radius = rootBound(monic);
   if (radius === 0) return Array.from({ length: degree }, () => ({ re: 0, im: 0 }));
   let roots: Point[] = Array.from({ length: degree }, (_, k) => ({
@@ -48,6 +52,20 @@ export function rootBound(monic: readonly Point[]): number {
     largest = Math.max(largest, Math.hypot(q.re, q.im) ** (1 / k));
   }
   return 2 * largest;
+}
+
+/** Roots of n^2 + b n + c; the larger one first, the other by the product, so that none cancels. */
+function rootsOfQuadratic(b: Point, c: Point): Point[] {
+  const half = { re: -b.re / 2, im: -b.im / 2 };
+  const root = sqrt({ re: half.re * half.re - half.im * half.im - c.re, im: 2 * half.re * half.im - c.im });
+  const sign = half.re * root.re + half.im * root.im < 0 ? -1 : 1;
+  const larger = { re: half.re + sign * root.re, im: half.im + sign * root.im };
+  const size = larger.re * larger.re + larger.im * larger.im;
+  if (size === 0) return [larger, larger];
+  return [
+    larger,
+    { re: (c.re * larger.re + c.im * larger.im) / size, im: (c.im * larger.re - c.re * larger.im) / size },
+  ];
 }
 
 /** Newton step corrected for the other roots. */

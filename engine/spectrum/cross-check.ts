@@ -8,14 +8,22 @@ import { closedPrecise } from './closed-precise';
 import { exactNumbers } from './exact-numbers';
 import { regularisedCount } from './expansion';
 import { fewerBits, negative } from './factor-value';
+import { quotient } from './form-division';
 import { isFailure, linearSum, type SumFailure } from './linear-sum';
 import type { Pairing } from './pairing';
-import { multiplyPolynomials, type Polynomial, polynomialIn, scalePolynomial, zeroPolynomial } from './polynomial';
+import {
+  multiplyPolynomials,
+  type Polynomial,
+  polynomialIn,
+  risingBinomial,
+  scalePolynomial,
+  zeroPolynomial,
+} from './polynomial';
 import { polynomialRoots } from './polynomial-roots';
 import type { Prepared } from './prepare';
 import { recognise } from './recognise';
 import { type Prescription, rootlessSum } from './rootless-sum';
-import { severalSum } from './several-sum';
+import { severalSumOnce } from './several-sum';
 import { estimateOf, scaleEstimate, sumOf } from './total';
 import type { Tower, TowerFactor } from './tower';
 
@@ -161,7 +169,7 @@ function severalCheck(tower: Tower, prescription: Prescription, bits: number): C
   for (const factor of tower.factors) {
     if (factor.kind !== 'linear') return 'spectrum-undefined';
     for (const { shift, periods, multiplicity } of barnesTerms(tower, factor)) {
-      const value = severalSum(shift, periods, multiplicity.scale(factor.power), bits, FURTHER);
+      const value = termCheck(shift, periods, multiplicity.scale(factor.power), bits);
       if (isFailure(value)) return value;
       parts.push(value);
       const count = barnesZetaAtZero(shift, periods).mul(multiplicity).scale(factor.power);
@@ -174,4 +182,16 @@ function severalCheck(tower: Tower, prescription: Prescription, bits: number): C
   const numbers = exactNumbers([{ ...tower, exponent: Rational.one }], prescription);
   const anomaly = prescription === 'operator' ? estimateOf(numbers?.anomaly ?? Form.zero, bits) : null;
   return { route: 'further', estimate: sumOf(anomaly === null ? parts : [...parts, anomaly]) };
+}
+
+/** Equal periods are a tower in one index, w (n + x/w) with a binomial multiplicity. */
+function termCheck(shift: Form, periods: readonly Form[], multiplicity: Form, bits: number): Estimate | SumFailure {
+  const w = periods[0] as Form;
+  if (!periods.every((p) => p.equals(w))) return severalSumOnce(shift, periods, multiplicity, bits, FURTHER);
+  const q = [quotient(shift, w), Form.one];
+  const m = scalePolynomial(risingBinomial(periods.length - 1), multiplicity);
+  const value = rootlessSum(q, m, { from: 0, to: null }, bits, 'factors', FURTHER);
+  if (isFailure(value)) return value;
+  const scale = estimateOf(logarithmOf(w).mul(regularisedCount(q, m, { from: 0, to: null })), bits);
+  return scale === null ? 'spectrum-undefined' : sumOf([value, scale]);
 }

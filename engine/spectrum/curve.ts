@@ -8,9 +8,11 @@ import { complexRoots } from './complex-roots';
 import { linearSumDouble } from './double-sum';
 import { exactNumbers } from './exact-numbers';
 import { guarded } from './guard';
+import { inspectTowers } from './inspect';
 import type { Pairing } from './pairing';
 import type { Polynomial } from './polynomial';
 import { openNames, prepare, substituteTowers, type Values } from './prepare';
+import { isRefusal } from './read';
 import type { Prescription } from './rootless-sum';
 import { type Remark, remark, type Spectrum } from './tower';
 
@@ -59,6 +61,8 @@ function compile(
   if (open.length > 0) return remark('spectrum-names-unset', null, 'row', { names: open.join(', ') });
   const prepared = prepare(written);
   if (isRemark(prepared)) return prepared;
+  const refusal = inspectTowers(prepared.towers, null).find(isRefusal);
+  if (refusal) return refusal;
   const numbers = exactNumbers(prepared.towers, prescription);
   if (numbers === null) return remark('operator-periods', null, 'row');
   const anomaly = prescription === 'operator' ? numbers.anomaly : Form.zero;

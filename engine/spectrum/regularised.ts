@@ -113,7 +113,8 @@ function evaluate(
   const difference = estimateOf(exact.anomaly, bits);
   if (zeta0 === null || scale === null || difference === null) return failed('spectrum-undefined');
   const check = checkValue(prepared, prescription, bits);
-  const gap = typeof check === 'string' ? 0n : gapBetween(log.value, check.estimate.value, bits, turnsOf(prepared));
+  const gap =
+    typeof check === 'string' ? 0n : gapBetween(log.value, check.estimate.value, bits, turnsOf(prepared, remarks));
   const modulus = remarks.some(({ code }) => code === 'square-root-sign');
   const shown = modulus ? { re: log.value.re, im: 0n } : log.value;
   return {
@@ -131,8 +132,12 @@ function evaluate(
   };
 }
 
-/** Common denominator of the multiplicities: logarithms of single factors are known up to 2 pi i. */
-function turnsOf({ towers }: Prepared): number {
+/**
+ * Common denominator of the multiplicities: logarithms of single factors are known up to 2 pi i, so the imaginary part of
+ * log det up to 2 pi over that. Null where multiplicities are no rational numbers of one denominator.
+ */
+function turnsOf({ towers }: Prepared, remarks: readonly Remark[]): number | null {
+  if (remarks.some(({ code }) => code === 'degeneracy-fraction')) return null;
   let common = 1n;
   for (const { exponent } of towers) common = (common * exponent.denominator) / gcd(common, exponent.denominator);
   return Number(common);

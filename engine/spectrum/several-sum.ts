@@ -13,6 +13,22 @@ const GUARD = 48;
 /** Further steps of the second value that the error is taken from. */
 const FURTHER_STEPS = 5;
 
+interface Steps {
+  readonly further: number;
+  readonly twice: boolean;
+}
+
+/** One value with more steps, without the error that a second one would give; for cross-checks. */
+export function severalSumOnce(
+  shift: Form,
+  periods: readonly Form[],
+  multiplicity: Form,
+  bits: number,
+  further: number,
+): Estimate | SumFailure {
+  return severalSum(shift, periods, multiplicity, bits, { further, twice: false });
+}
+
 /**
  * multiplicity times the regularised sum of log(w.n + shift), that is -multiplicity log Gamma_N(shift|periods). When
  * all periods point to the left, log(-1) = i pi is taken out. The error is the difference of two values with different
@@ -23,18 +39,20 @@ export function severalSum(
   periods: readonly Form[],
   multiplicity: Form,
   bits: number,
-  further = 0,
+  { further, twice }: Steps = { further: 0, twice: true },
 ): Estimate | SumFailure {
   const working = bits + GUARD;
   const rough = periods.map((w) => formFixed(w, 64));
   if (rough.some((w) => w === null)) return 'spectrum-undefined';
-  if (rough.every((w) => w !== null && w.re < 0n)) return turned(shift, periods, multiplicity, bits, further);
+  if (rough.every((w) => w !== null && w.re < 0n)) {
+    return turned(shift, periods, multiplicity, bits, { further, twice });
+  }
   const x = formFixed(shift, working);
   const w = periods.map((p) => formFixed(p, working));
   const factor = estimateOf(multiplicity, working);
   if (x === null || factor === null || !w.every((p) => p !== null)) return 'spectrum-undefined';
   const first = logBarnesGamma(x, w, working, further);
-  const second = logBarnesGamma(x, w, working, further + FURTHER_STEPS);
+  const second = twice ? logBarnesGamma(x, w, working, further + FURTHER_STEPS) : first;
   if (first === null || second === null) return 'spectrum-too-far';
   const gap = sizeOf(difference(first.value, second.value));
   const value = { value: negative(second.value), error: first.error + second.error + gap };
@@ -48,10 +66,10 @@ function turned(
   periods: readonly Form[],
   multiplicity: Form,
   bits: number,
-  further: number,
+  steps: Steps,
 ): Estimate | SumFailure {
   const mirrored = periods.map((w) => w.neg());
-  const rest = severalSum(shift.neg(), mirrored, multiplicity, bits, further);
+  const rest = severalSum(shift.neg(), mirrored, multiplicity, bits, steps);
   const phase = estimateOf(Form.pi.mul(Form.i).mul(multiplicity).mul(barnesZetaAtZero(shift.neg(), mirrored)), bits);
   if (typeof rest === 'string' || phase === null) return typeof rest === 'string' ? rest : 'spectrum-undefined';
   return sumOf([rest, phase]);

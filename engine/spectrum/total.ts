@@ -45,8 +45,9 @@ export function ballOf({ value, error }: Estimate, bits: number): Ball {
   return { re: value.re, im: value.im, bits, error };
 }
 
-/** Upper bound of |a - b| in units, imaginary parts compared modulo 2 pi / turns. */
-export function gapBetween(a: FixedComplex, b: FixedComplex, bits: number, turns: number): bigint {
+/** Upper bound of |a - b| in units, imaginary parts compared modulo 2 pi / turns, or not at all (null). */
+export function gapBetween(a: FixedComplex, b: FixedComplex, bits: number, turns: number | null): bigint {
+  if (turns === null) return absolute(a.re - b.re);
   const turn = (2n * piFixed(bits)) / BigInt(turns);
   let im = (a.im - b.im) % turn;
   if (2n * absolute(im) > turn) im -= im > 0n ? turn : -turn;

@@ -3,8 +3,10 @@ import { type ClosedCheck, checkClosed } from './closed-check';
 import type { ClosedForm } from './closed-form';
 import { type ExactNumbers, exactNumbers } from './exact-numbers';
 import { guarded } from './guard';
+import { inspectTowers } from './inspect';
 import type { Pairing } from './pairing';
 import { noValues, openNames, type Prepared, prepare, substituteTowers } from './prepare';
+import { isRefusal } from './read';
 import { recognise } from './recognise';
 import { type Remark, remark, type Spectrum } from './tower';
 import { zeroModes } from './zero-modes';
@@ -43,7 +45,13 @@ function bothNumbers({ towers }: Prepared): SpectrumView['numbers'] & object {
   return { factors: factors as ExactNumbers, operator: exactNumbers(towers, 'operator') };
 }
 
-function closedForm(spectrum: Spectrum, { pairing }: Prepared, names: readonly string[]): SpectrumView['closed'] {
+function closedForm(
+  spectrum: Spectrum,
+  { towers, pairing }: Prepared,
+  names: readonly string[],
+): SpectrumView['closed'] {
+  const refusal = inspectTowers(towers, null).find(isRefusal);
+  if (refusal) return refusal;
   if (zeroModes(pairing).length > 0) return remark('closed-zero-mode', null, 'row');
   const form = recognise(pairing);
   if (form === null) return remark('closed-unknown', null, 'row');
