@@ -1,0 +1,74 @@
+// Source: mpmath by another method (integral), test/fixtures/spectra/generate.py; laws: Barnes 1904, Ruijsenaars 2000.
+import fc from 'fast-check';
+import { describe, expect, test } from 'vitest';
+import { numberFromFixed } from '../../engine/arithmetic/fixed';
+import type { FixedComplex } from '../../engine/arithmetic/fixed-complex';
+import { formFixed } from '../../engine/arithmetic/form-fixed';
+import { logBarnesGamma } from '../../engine/functions/barnes-gamma';
+import { barnesGammaDouble } from '../../engine/functions/barnes-gamma-double';
+import fixture from '../fixtures/spectra/mpmath.json';
+import { parseForm } from '../spectrum/parse-form';
+import { decimalFixed } from './decimal-fixed';
+
+const BITS = 160;
+
+function fixed(text: string): FixedComplex {
+  const value = formFixed(parseForm(text), BITS);
+  if (value === null) throw new Error(text);
+  return value;
+}
+
+function logGamma(x: FixedComplex, periods: readonly FixedComplex[], further = 0) {
+  const found = logBarnesGamma(x, periods, BITS, further);
+  if (found === null) throw new Error('too many points');
+  return found;
+}
+
+const rough = ({ re, im }: FixedComplex) => ({ re: numberFromFixed(re, BITS), im: numberFromFixed(im, BITS) });
+
+describe('log Gamma_N', () => {
+  test.each(fixture.gamma.map((row) => [row.x, row.periods.join(', '), row] as const))(
+    'at %s, periods %s',
+    (_x, _w, row) => {
+      const x = fixed(row.x);
+      const periods = row.periods.map(fixed);
+      const { value } = logGamma(x, periods);
+      const wanted = { re: decimalFixed(row.value.re, BITS), im: decimalFixed(row.value.im, BITS) };
+      // The integrals are printed with 20 digits.
+      expect(Math.abs(numberFromFixed(value.re - wanted.re, BITS))).toBeLessThan(1e-18);
+      expect(Math.abs(numberFromFixed(value.im - wanted.im, BITS))).toBeLessThan(1e-18);
+      const double = barnesGammaDouble(periods.map(rough))(rough(x));
+      expect(double.re).toBeCloseTo(Number(row.value.re), 11);
+      expect(double.im).toBeCloseTo(Number(row.value.im), 11);
+    },
+  );
+
+  const period = fc.integer({ min: 10, max: 60 }).map((k) => `${k}/20`);
+  const argument = fc
+    .record({ re: fc.integer({ min: 1, max: 80 }), im: fc.integer({ min: -80, max: 80 }) })
+    .map(({ re, im }) => fixed(`${re}/20+${im}/20*i`));
+
+  test('one step along a period is a function of the others', () => {
+    fc.assert(
+      fc.property(argument, period, period, (x, one, other) => {
+        const [w, v] = [fixed(one), fixed(other)];
+        const here = logGamma(x, [w, v]);
+        const next = logGamma({ re: x.re + w.re, im: x.im }, [w, v]);
+        const rest = logGamma(x, [v]);
+        const allowed = Number(here.error + next.error + rest.error) + 4;
+        expect(Math.abs(Number(here.value.re - next.value.re - rest.value.re))).toBeLessThan(allowed);
+        expect(Math.abs(Number(here.value.im - next.value.im - rest.value.im))).toBeLessThan(allowed);
+      }),
+      { numRuns: 10 },
+    );
+  });
+
+  test('the number of steps does not matter, for complex periods too', () => {
+    const periods = [fixed('1'), fixed('-1/5+11/10*i')];
+    const x = fixed('2/3+i/7');
+    const few = logGamma(x, periods);
+    const many = logGamma(x, periods, 6);
+    expect(Math.abs(Number(few.value.re - many.value.re))).toBeLessThan(Number(few.error + many.error));
+    expect(Math.abs(Number(few.value.im - many.value.im))).toBeLessThan(Number(few.error + many.error));
+  });
+});
