@@ -14,6 +14,7 @@ import { logDeterminantCurve } from '../spectrum/curve';
 import { elementary, namesIn } from '../spheres/quantity';
 import type { TheoryProduct } from '../spheres/sphere';
 import type { Analysis } from './analysis';
+import { coefficientOrder } from './coefficient';
 import { assigned } from './determinant';
 import { functionProduct } from './function-value';
 import { resolvePoint } from './point';
@@ -75,6 +76,9 @@ function theoryCurve(
   const { sphere } = entry;
   const { theory } = entry.built;
   const raw = theoryQuantity(entry, what.name);
+  if (raw === null && coefficientOrder(entry.sphere, what.name) !== null) {
+    return `\`${what.name}\` is a coefficient, which has no curve here; ask for its \`value\` at points.`;
+  }
   if (raw === null) return unknownQuantity(entry, what.name);
   const free = axes.map((axis) => ({ name: axis.name, span: what.span }));
   const resolved = resolvePoint(analysis, sphere, theory, at, free, 'zero', namesIn(theory, raw));

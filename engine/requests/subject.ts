@@ -17,7 +17,8 @@ export function theoryQuantity(entry: TheoryEntry, what: string): TheoryProduct 
 }
 
 export function unknownQuantity(entry: TheoryEntry, what: string): string {
-  const names = [...QUANTITIES, ...(entry.built?.theory?.multiplets ?? []).map(({ name }) => name)];
+  const series = entry.sphere?.series === undefined ? [] : [`${entry.sphere.series.name}1`];
+  const names = [...QUANTITIES, ...series, ...(entry.built?.theory?.multiplets ?? []).map(({ name }) => name)];
   return `\`${what}\` is no quantity of \`${entry.block.name.name}\`; there are ${names.map((n) => `\`${n}\``).join(', ')}.`;
 }
 

@@ -7,6 +7,7 @@ import type { TheoryProduct } from '../spheres/sphere';
 import { agreedDigits } from './agreement';
 import type { Analysis } from './analysis';
 import { type Answer, failure, type Surroundings } from './answer';
+import { coefficientOrder, runCoefficient } from './coefficient';
 import { runDeterminant } from './determinant';
 import { functionValue } from './function-value';
 import { type Point, resolvePoint } from './point';
@@ -29,6 +30,10 @@ export function runValue(analysis: Analysis, request: ValueRequest, surroundings
   const { sphere } = entry;
   const { theory } = entry.built;
   const raw = theoryQuantity(entry, quantity.what.name);
+  const order = raw === null ? coefficientOrder(sphere, quantity.what.name) : null;
+  if (order !== null) {
+    return runCoefficient(analysis, { sphere, theory }, { at: request.at, log: quantity.log, order, digits });
+  }
   if (raw === null) return failure(of, unknownQuantity(entry, quantity.what.name));
   const resolved = resolvePoint(analysis, sphere, theory, request.at, [], 'error', namesIn(theory, raw));
   if (resolved.kind === 'failure') return failure(of, resolved.message);

@@ -4,6 +4,7 @@ import { fourSphereConditions } from '../theory/checks/four-sphere';
 import { gaugeGroups, type Multiplet, type Theory } from '../theory/theory';
 import { matterWeights, rootWeights, type TheoryWeights, type WeightedSet } from '../theory/weights';
 import { exponential, quadratic } from './classical';
+import { instantonCoefficient } from './instantons';
 import type { Sphere, TheoryProduct } from './sphere';
 
 const w = Form.symbol(WEIGHT);
@@ -74,6 +75,17 @@ export const s4: Sphere = {
   conditions: fourSphereConditions,
   fluxes: false,
   specialFunction: 'upsilon',
+  series: {
+    name: 'instanton',
+    coefficient: instantonCoefficient,
+    notes: (theory) => [
+      'Coefficient of $q^k$ at one pole, with $a=i\\sigma$, $\\epsilon_1=b$, $\\epsilon_2=b^{-1}$ and masses entering as ' +
+        '$Q/2+im$; at the other pole it is the complex conjugate.',
+      ...(gaugeGroups(theory).every(({ group }) => group.group.family === 'U')
+        ? []
+        : ['It is that of $U(n)$ at traceless $a$: the factor of the $U(1)$ is not divided out.']),
+    ],
+  },
   sources: [
     { key: 'Pestun-2007', text: 'V. Pestun, arXiv:0712.2824 (2007)' },
     { key: 'Hama-Hosomichi-2012', text: 'N. Hama, K. Hosomichi, arXiv:1206.6359 (2012)' },

@@ -35,7 +35,35 @@ export interface Sphere extends SphereRules {
   readonly fluxes: boolean;
   /** The function that multiplets of this sphere give, whose notations can be chosen. */
   readonly specialFunction: FunctionName;
+  /**
+   * Coefficients of a series that multiplies the integrand, by what they are called (`instanton2` for the second of
+   * `instanton`); absent where a sphere has none.
+   */
+  readonly series?: {
+    readonly name: string;
+    /** `exchanged`: the same coefficient by different terms, for a check. */
+    readonly coefficient: (theory: Theory, order: number, exchanged: boolean) => CoefficientSum;
+    /** Conventions to say beside a value. */
+    readonly notes: (theory: Theory) => readonly string[];
+  };
   readonly sources: readonly Source[];
+}
+
+/**
+ * A coefficient as a sum of products of closed forms; refused in words where it cannot be had. Single terms may diverge
+ * where the sum does not: every factor moves with a small d, and the limit d -> 0 of the sum is meant.
+ */
+export type CoefficientSum =
+  | { readonly kind: 'sum'; readonly terms: readonly CoefficientTerm[] }
+  | { readonly kind: 'refused'; readonly message: string };
+
+export type CoefficientTerm = readonly RegulatedFactor[];
+
+/** (value + slope d)^power. */
+export interface RegulatedFactor {
+  readonly value: Form;
+  readonly slope: number;
+  readonly power: 1 | -1;
 }
 
 /** A linear factor of the eigenvalues of one field: form in the level `n` and the weight, with its multiplicity. */
