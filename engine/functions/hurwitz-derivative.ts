@@ -15,6 +15,7 @@ import { piFixed } from '../arithmetic/fixed-constants';
 import { Rational } from '../exact/rational';
 import { bernoulliNumber } from './bernoulli';
 import { bernoulliTail, type Estimate, type FarPoint, farPoint, stepsToFarPoint, ulpsOf } from './euler-maclaurin';
+import { factorial } from './factorial';
 
 /**
  * W^-k zeta'(-k, W) at a far point, k >= 0, with log W given: Euler-Maclaurin (DLMF 25.11.28 differentiated, 2.10(i)).
@@ -131,10 +132,4 @@ function timesRational(z: FixedComplex, factor: Rational): FixedComplex {
 
 function fixed(value: Rational, bits: number): bigint {
   return fixedFromRatio(value.numerator, value.denominator, bits);
-}
-
-function factorial(n: number): Rational {
-  let product = 1n;
-  for (let k = 2; k <= n; k++) product *= BigInt(k);
-  return Rational.of(product);
 }

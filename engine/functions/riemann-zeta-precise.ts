@@ -14,7 +14,7 @@ const values = memoiseByKey<bigint>(32);
 
 function alternatingSum(s: number, bits: number): bigint {
   const guard = 24;
-  const d = borwein(64 * Math.ceil((bits + guard) / 64));
+  const d = borweinCoefficients(64 * Math.ceil((bits + guard) / 64));
   const last = d[d.length - 1] as bigint;
   const shift = BigInt(bits + guard);
   let total = 0n;
@@ -26,8 +26,8 @@ function alternatingSum(s: number, bits: number): bigint {
   return ((total * power) / (last * (power - 1n)) + (1n << BigInt(guard - 1))) >> BigInt(guard);
 }
 
-/** d_0, ..., d_n for an error below 2^-bits; integers. */
-const borwein = memoiseBounded(8, (bits: number): readonly bigint[] => {
+/** d_0, ..., d_n, integers; (3 + sqrt 8)^n exceeds 2^(bits + 4). */
+export const borweinCoefficients = memoiseBounded(8, (bits: number): readonly bigint[] => {
   const n = Math.ceil((bits + 4) / Math.log2(3 + Math.sqrt(8)));
   const list: bigint[] = [];
   let term = 1n;

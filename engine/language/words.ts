@@ -94,6 +94,14 @@ export const SPECIAL_FUNCTIONS = {
   triplesine: { signature: 'triplesine(z; w1, w2, w3)', least: 4, most: 4 },
   dilog: { signature: 'dilog(z)', least: 1, most: 1 },
   hurwitz: { signature: 'hurwitz(s, a)', least: 2, most: 2 },
+  riemannzeta: { signature: 'riemannzeta(s)', least: 1, most: 1 },
+  zetaprime: { signature: 'zetaprime(k, a)', least: 2, most: 2 },
+  polylog: { signature: 'polylog(n, z)', least: 2, most: 2 },
+  clausen: { signature: 'clausen(n, theta)', least: 2, most: 2 },
+  digamma: { signature: 'digamma(z)', least: 1, most: 1 },
+  polygamma: { signature: 'polygamma(n, z)', least: 2, most: 2 },
+  barnesg: { signature: 'barnesg(z)', least: 1, most: 1 },
+  qpochhammer: { signature: 'qpochhammer(x, q)', least: 2, most: 2 },
 } as const;
 export type SpecialFunctionWord = keyof typeof SPECIAL_FUNCTIONS;
 

@@ -64,6 +64,7 @@ function settle(evaluate: (bits: number) => FunctionValue, digits: number): Ball
     const ball: Ball = { re: value.re, im: value.im, bits, error: value.error };
     const result = value.of === 'logarithm' ? expBall(ball, needed + 8) : ball;
     if (result === null) continue;
+    if (result.error === 0n && result.re === 0n && result.im === 0n) return result;
     if (bitLength(magnitudeAbove(result)) - bitLength(result.error) >= needed - 28) return result;
   }
   return 'The argument cannot be told from a pole or a zero. Give it exactly, or move it away.';

@@ -57,6 +57,32 @@ describe('where there is no value', () => {
     expect(kind('hurwitz', '-2', '-3')).toBe('value');
   });
 
+  test('poles and exact zeros', () => {
+    expect(kind('digamma', '-3')).toBe('pole');
+    expect(kind('polygamma', '2', '0')).toBe('pole');
+    expect(kind('polylog', '1', '1')).toBe('pole');
+    expect(kind('polylog', '-3', '1')).toBe('pole');
+    expect(kind('clausen', '1', '0')).toBe('pole');
+    expect(kind('riemannzeta', '1')).toBe('pole');
+    const zero = (word: ValueFunctionWord, ...args: string[]): unknown =>
+      valueFunctions[word].evaluate(args.map(argument), 100);
+    const exact = { kind: 'value', of: 'value', re: 0n, im: 0n, error: 0n };
+    expect(zero('riemannzeta', '-4')).toEqual(exact);
+    expect(zero('barnesg', '-2')).toEqual(exact);
+    expect(zero('clausen', '4', '0')).toEqual(exact);
+    expect(zero('qpochhammer', '1', '1/3')).toMatchObject(exact);
+  });
+
+  test('arguments outside the domain', () => {
+    expect(kind('polygamma', '1/2', '1')).toBe('outside');
+    expect(kind('polygamma', '-1', '1')).toBe('outside');
+    expect(kind('polylog', '3/2', '1/2')).toBe('outside');
+    expect(kind('clausen', '2', '1,1')).toBe('outside');
+    expect(kind('zetaprime', '1', '-2')).toBe('outside');
+    expect(kind('qpochhammer', '1/2', '1')).toBe('outside');
+    expect(kind('barnesg', '20000')).toBe('outside');
+  });
+
   test('Gamma_N at -n.w, and periods in no half plane', () => {
     expect(kind('barnesgamma', '0', '1', '2')).toBe('indistinct');
     expect(kind('barnesgamma', '-5/2', '1', '3/2')).toBe('indistinct');
