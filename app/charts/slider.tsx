@@ -64,7 +64,7 @@ export function Slider({ card }: { readonly card: ParameterCard }) {
         value={moved ?? card.value}
         onChange={(event) => live.move(card.name, event.target.valueAsNumber)}
       />
-      <output className={styles.value}>{shown}</output>
+      <span className={styles.value}>{shown}</span>
     </div>
   );
 }

@@ -33,7 +33,7 @@ export function RequestCard({ card }: { readonly card: RequestCardData }) {
       }
       tools={result ? <Tools card={card} result={result} /> : undefined}
     >
-      <div aria-live="polite" aria-busy={answer?.state === 'working'}>
+      <div aria-busy={answer?.state === 'working'}>
         <Working card={card} answer={answer} />
         {result ? (
           <Stale on={old} says="The answer to the text as it was before.">

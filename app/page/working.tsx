@@ -1,3 +1,4 @@
+import { useRef } from 'react';
 import type { RequestCard } from '../../engine/requests/result';
 import type { Answer } from '../state/answers';
 import { useSession } from '../state/session';
@@ -17,6 +18,8 @@ interface WorkingProps {
 export function Working({ card, answer }: WorkingProps) {
   const { answers } = useSession();
   const takesTime = useHeldFor(answer === undefined || answer.state === 'working', PATIENCE_MS);
+  const tookTime = useRef(false);
+  if (takesTime) tookTime.current = true;
   if (answer?.state === 'stopped') {
     return (
       <p className={styles.working}>
@@ -33,7 +36,8 @@ export function Working({ card, answer }: WorkingProps) {
       </p>
     );
   }
-  if (!takesTime) return null;
+  // Quick answers are read where they stand; the end of long work is said.
+  if (!takesTime) return tookTime.current ? <p className="heard" role="status">{`${card.caption}: ready`}</p> : null;
   const progress = answer?.state === 'working' ? answer.progress : null;
   return (
     <p className={styles.working}>

@@ -29,7 +29,7 @@ export interface Keeper {
   /** Opens what the address holds, or what was open last, or the worked example. */
   start(): Promise<void>;
   open(id: string): Promise<void>;
-  /** A new notebook with a text; it is kept once it is open. */
+  /** A notebook with this text: the one that is kept already, or a new one. */
   create(text: string): Promise<void>;
   remove(notebook: StoredNotebook): Promise<void>;
   saveNow(): Promise<void>;
@@ -104,6 +104,11 @@ export function createKeeper(text: NotebookText, view: Store<View>, settings: Se
 
   async function create(content: string): Promise<void> {
     await saveNow();
+    const same = (await listNotebooks().catch(() => [])).find((notebook) => notebook.text === content);
+    if (same) {
+      show(same, same.version);
+      return;
+    }
     show({ id: newId(), text: content, view: plainView }, null);
     // Not held yet, whatever the text: the first save puts it on the shelf.
     held = { text: '', view: { ...plainView } };
@@ -125,9 +130,7 @@ export function createKeeper(text: NotebookText, view: Store<View>, settings: Se
       notices.say('The link is damaged: no notebook could be read from it.');
       return false;
     }
-    const same = (await listNotebooks().catch(() => [])).find((notebook) => notebook.text === shared);
-    if (same) show(same, same.version);
-    else await create(shared);
+    await create(shared);
     return true;
   }
 

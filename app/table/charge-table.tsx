@@ -181,12 +181,25 @@ function Row({ card, row, at, showKind, onCell, onChoose }: RowProps) {
         >
           down
         </WordButton>
-        <WordButton aria-label={`Remove ${row.name}`} onClick={() => edit((_text, now) => removedRow(now, at))}>
+        <WordButton
+          aria-label={`Remove ${row.name}`}
+          onClick={(event) => {
+            focusNeighbour(event.currentTarget);
+            edit((_text, now) => removedRow(now, at));
+          }}
+        >
           remove
         </WordButton>
       </td>
     </tr>
   );
+}
+
+/** Before a row goes, the focus moves to the row that takes its place. */
+function focusNeighbour(button: HTMLElement): void {
+  const row = button.closest('tr');
+  const neighbour = row?.nextElementSibling ?? row?.previousElementSibling;
+  neighbour?.querySelector<HTMLElement>('[data-cell]')?.focus();
 }
 
 function holdsRepresentation({ role, group }: TheoryColumn): boolean {

@@ -89,6 +89,20 @@ test('a link holds the whole text', async ({ page, context }) => {
   expect(inflateRawSync(Buffer.from(fragment.slice(2), 'base64url')).toString('utf8')).toBe(text);
 });
 
+test('a browser that keeps nothing is told of, and the notebook works all the same', async ({ page }) => {
+  await page.addInitScript(() => {
+    IDBFactory.prototype.open = () => {
+      throw new DOMException('not allowed here', 'SecurityError');
+    };
+  });
+  const notebook = new NotebookPage(page);
+  await notebook.open();
+  await expect(notebook.theory('beacon').pieces.first()).toBeVisible();
+  await expect(page.getByText('not kept: save it as a file')).toBeVisible();
+  await notebook.write('# Typed all the same\n');
+  await expect(notebook.card('Text').getByRole('heading')).toHaveText('Typed all the same');
+});
+
 test('two tabs on one notebook lose nothing', async ({ page, context }) => {
   const first = new NotebookPage(page);
   await first.openText('# Two tabs\n');

@@ -2,6 +2,9 @@ import AxeBuilder from '@axe-core/playwright';
 import { expect, type Page, test } from 'playwright/test';
 import { NotebookPage } from '../pages/notebook-page';
 
+// Reading a whole page for accessibility takes many seconds on a busy machine.
+test.describe.configure({ timeout: 150_000 });
+
 const tags = ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa'];
 
 async function violations(page: Page): Promise<readonly string[]> {

@@ -61,6 +61,7 @@ test('multiplets are added, copied, moved and removed', async ({ page }) => {
   await theory.row('q').hover();
   await theory.change('Remove', 'q').click();
   await expect.poll(() => theory.names()).toEqual(['p', 'y', 'x']);
+  await expect(theory.root.getByRole('button', { name: /^Name of p/ })).toBeFocused();
   for (let step = 0; step < 4; step += 1) await notebook.undo();
   await expect.poll(() => notebook.text()).toBe(text);
 });
