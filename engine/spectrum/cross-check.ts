@@ -85,7 +85,11 @@ function isFailed(found: CheckValue | SumFailure): found is SumFailure {
 
 function singleCheck(tower: Tower, prescription: Prescription, bits: number): CheckValue | SumFailure {
   const degeneracy = polynomialIn(tower.degeneracy, tower.indices[0] as string) ?? zeroPolynomial;
-  if (tower.factors.some(({ kind }) => kind === 'irreducible')) return byRoots(tower, degeneracy, prescription, bits);
+  if (tower.factors.some(({ kind }) => kind === 'irreducible')) {
+    const found = byRoots(tower, degeneracy, prescription, bits);
+    // Roots too close to be told apart: the whole polynomial then, from another point.
+    if (found !== null) return found;
+  }
   const q = tower.factors.reduce<Polynomial>(
     (product, factor) => {
       let result = product;
@@ -117,11 +121,11 @@ function byRoots(
   degeneracy: Polynomial,
   prescription: Prescription,
   bits: number,
-): CheckValue | SumFailure {
+): CheckValue | SumFailure | null {
   const parts: Estimate[] = [];
   for (const factor of tower.factors) {
     const shifts = polynomialRoots(factorPolynomial(factor), bits);
-    if (shifts === null) return 'spectrum-undefined';
+    if (shifts === null) return null;
     for (const shift of shifts) {
       const multiplicity = scalePolynomial(degeneracy, factor.power);
       const value = linearSum(shift, multiplicity, { from: 0, to: tower.last }, bits, FURTHER);

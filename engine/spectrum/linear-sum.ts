@@ -1,4 +1,4 @@
-import { numberFromFixed } from '../arithmetic/fixed';
+import { bitLength, numberFromFixed } from '../arithmetic/fixed';
 import {
   absoluteComplex,
   addComplex,
@@ -98,12 +98,18 @@ function endlessTail(
   coefficients.forEach((c, k) => {
     const scaled = multiplyComplex(c, integerPowerComplex(at, k, working), working);
     const weight = numberFromFixed(absoluteComplex(scaled) + 1n, working);
-    const { value: derivative, error: inside } = scaledHurwitzDerivative(point, k, logarithm, Math.log2(weight));
+    const log2Weight = Math.log2(weight);
+    const { value: derivative, error: inside } = scaledHurwitzDerivative(point, k, logarithm, log2Weight);
     value = addComplex(value, multiplyComplex(scaled, derivative, working));
     const height = numberFromFixed(absoluteComplex(derivative), working) + 1;
-    error += (size ** k + 4 * (k + 1) * weight) * height + weight * Number(inside) + 2;
+    error += (size ** k + 4 * (k + 1) * weight) * height + scaledError(inside, log2Weight) + 2;
   });
   return { value, error };
+}
+
+/** error times 2^exponent, rounded up to a power of two; either may be beyond doubles by itself. */
+export function scaledError(error: bigint, exponent: number): number {
+  return 2 ** (bitLength(error) + exponent);
 }
 
 /** Drops `guard` bits; the error in the old units. */

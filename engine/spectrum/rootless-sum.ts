@@ -20,7 +20,7 @@ import { scaledHurwitz, scaledHurwitzDerivative } from '../functions/hurwitz-der
 import { rootBound } from './complex-roots';
 import type { Run } from './expansion';
 import { fixedCoefficients, fixedMultiplicity } from './explicit-sum';
-import { MAXIMAL_STEPS, rounded, type SumFailure } from './linear-sum';
+import { MAXIMAL_STEPS, rounded, type SumFailure, scaledError } from './linear-sum';
 import { degreeOf, type Polynomial, shiftPolynomial } from './polynomial';
 
 /** The series in 1/W starts where the roots are this many times closer than W. */
@@ -51,10 +51,12 @@ export function rootlessSum(
   const center = centerOf(rough[degree - 1] as FixedComplex, degree);
   const inW = shiftPolynomial(q, Form.number(center).neg());
   const expansion = shiftPolynomial(multiplicity, Form.number(center).neg());
-  const roughQ = fixedCoefficients(inW, 64);
+  // To the precision of the result: roots closer than 2^-64 to their mean count too.
+  const fine = bits + 64;
+  const roughQ = fixedCoefficients(inW, fine);
   const roughM = fixedCoefficients(expansion, 64);
   if (roughQ === null || roughM === null) return 'spectrum-undefined';
-  const radius = rootBound(roughQ.map((c) => ({ re: numberFromFixed(c.re, 64), im: numberFromFixed(c.im, 64) })));
+  const radius = rootBound(roughQ.map((c) => ({ re: numberFromFixed(c.re, fine), im: numberFromFixed(c.im, fine) })));
   const reach = Math.max(SEPARATION * radius, 0.14 * (bits + 64) + 8 + expansion.length);
   const start = run.from + center.toNumber();
   const steps = Math.max(0, Math.ceil(reach - start)) + offset;
@@ -148,13 +150,14 @@ function seriesPart(
   let error = 1;
   let harmonic = Rational.zero;
   scaledM.forEach((c, k) => {
-    const derivative = scaledHurwitzDerivative(point, k, logarithm, Math.log2(weights[k] as number));
+    const log2Weight = Math.log2(weights[k] as number);
+    const derivative = scaledHurwitzDerivative(point, k, logarithm, log2Weight);
     let bracket = scaleByInteger(derivative.value, -degree);
-    let inside = degree * Number(derivative.error);
+    let inside = 0;
     e.forEach((coefficientOfW, i) => {
       const { value: z, error: slip } = zeta[i - k + m.length - 1] as Estimate;
       bracket = addComplex(bracket, multiplyComplex(coefficientOfW, z, working));
-      inside += Number(slip) * degree * ratio ** (i + 1) + 8 * (i + 2) * (size + 1);
+      inside += degree * scaledError(slip, (i + 1) * Math.log2(ratio)) + 8 * (i + 2) * (size + 1);
     });
     const middle = e[k] as FixedComplex;
     const finite = finitePart(e, k, harmonic, middle, degree, working, prescription);
@@ -163,6 +166,7 @@ function seriesPart(
     value = addComplex(value, multiplyComplex(c, bracket, working));
     const height = numberFromFixed(absoluteComplex(bracket), working) + 1;
     error += 4 * (k + 2) * ((weights[k] as number) + size ** k) * height + (weights[k] as number) * inside;
+    error += degree * scaledError(derivative.error, log2Weight);
   });
   return { value, error };
 }

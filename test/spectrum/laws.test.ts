@@ -192,3 +192,42 @@ test('higher precision confirms the stated errors', () => {
   const finer = { re: high.log.re >> drop, im: high.log.im >> drop, bits: low.log.bits, error: 1n };
   expect(gap(low.log, finer)).toBeLessThan(1);
 });
+
+describe('hard cases', () => {
+  const spectrumOf = (towers: readonly WrittenTower[]): Spectrum => ({ name: 'own', towers, parameters: new Map() });
+
+  test.each([10n ** 10n, 10n ** 20n, 10n ** 40n])('roots within 1/%s of each other', (distance) => {
+    // Equal to the double root up to terms of second order in the distance: Taylor expansion of log det.
+    const square = number(1, 4).sub(Form.number(Rational.of(2n, distance)));
+    const close = determinant(
+      spectrumOf([tower([n.pow(2).add(n).add(square)], n.add(Form.one))]),
+      'operator',
+      new Map(),
+      50,
+    );
+    const double = value([tower([n.add(number(1, 2)), n.add(number(1, 2))], n.add(Form.one))], 'operator');
+    if (close.kind !== 'value') throw new Error(close.remark.code);
+    expect(close.crossCheck?.agreedDigits).toBe(50);
+    const gapInDoubles =
+      numberFromFixed(close.log.re, close.log.bits) - numberFromFixed(double.log.re, double.log.bits);
+    // -d/d(square) log det is a sum of order 10.
+    expect(Math.abs(gapInDoubles)).toBeLessThan(40 / Number(distance) + 1e-15);
+  });
+
+  test('heavy masses, whose terms cancel over many digits', () => {
+    const heavy = tower(
+      [n.pow(2).add(n.scale(3)).add(Form.number(10_000))],
+      n
+        .add(number(1))
+        .mul(n.add(number(2)))
+        .mul(n.scale(2).add(number(3))),
+    );
+    const found = determinant(spectrumOf([heavy]), 'operator', new Map(), 40);
+    expect(found.kind === 'value' && [found.crossCheck?.route, found.crossCheck?.agreedDigits]).toEqual(['roots', 40]);
+  });
+
+  test('500 digits', () => {
+    const found = determinant(spectrumOf([tower([n.add(number(1, 3))], n.add(Form.one))]), 'factors', new Map(), 500);
+    expect(found.kind === 'value' && found.crossCheck?.agreedDigits).toBe(500);
+  });
+});

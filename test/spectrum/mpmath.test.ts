@@ -12,8 +12,8 @@ describe('determinants of further spectra', () => {
     const { tower } = row;
     const found = determinant(spectrumOf([tower]), prescription === 'operator' ? 'operator' : 'factors', new Map(), 30);
     if (found.kind !== 'value') throw new Error(found.remark.code);
-    // The generator reaches 28 digits (the Cauchy integral has 40 points); values are below 100.
-    expect(distanceFrom(found.log, row.value, 1)).toBeLessThan(1e-26);
+    // 30 digits are printed, values are below 200.
+    expect(distanceFrom(found.log, row.value, 1)).toBeLessThan(3e-28);
     expect(found.crossCheck?.agreedDigits).toBe(30);
   });
 });
