@@ -34,6 +34,17 @@ export const fluxGamma: SpecialFunction = {
     { kind: 'zero', start: ([n]) => Form.one.add(halfSize(n as Form)), steps: () => [Form.one] },
   ],
   growth: [],
+  // Stirling, DLMF 5.11.1, for both; log(-z) = log z -+ i pi above and below the real axis.
+  logarithmicGrowth: [Form.i.neg(), Form.i].map((direction) => ({
+    direction,
+    about: () => HALF,
+    polynomial: (z, [n]) =>
+      direction
+        .mul(Form.pi)
+        .mul(z.sub(halfSize(n as Form)))
+        .sub(z.scale(2)),
+    logarithm: (z) => z.scale(2),
+  })),
   notations: [
     {
       label: '\\Gamma',

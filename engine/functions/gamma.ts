@@ -5,6 +5,8 @@ import { logGammaBySpouge } from './log-gamma-spouge';
 import { parenthesised, plus, realFirst } from './notation';
 import type { SpecialFunction } from './special-function';
 
+const HALF = Form.ratio(1, 2);
+
 /**
  * Euler's Gamma(x) = int_0^oo t^{x-1} e^{-t} dt: poles at 0, -1, -2, ..., no zeros, Gamma(x + 1) = x Gamma(x)
  * (DLMF 5.2-5.5). It is sqrt(2 pi) times the zeta-regularised product of 1/(x + n) over n >= 0 (Lerch).
@@ -17,6 +19,13 @@ export const gamma: SpecialFunction = {
   shifts: [{ step: () => Form.one, quotient: (x) => [{ name: 'linear', argument: x, parameters: [], power: 1 }] }],
   zeros: [{ kind: 'pole', start: () => Form.zero, steps: () => [Form.one.neg()] }],
   growth: [],
+  // Stirling, DLMF 5.11.1.
+  logarithmicGrowth: [Form.one, Form.i, Form.i.neg()].map((direction) => ({
+    direction,
+    about: () => Form.zero,
+    polynomial: (z) => Form.call('log', Form.pi.scale(2)).mul(HALF).sub(z),
+    logarithm: (z) => z.sub(HALF),
+  })),
   notations: [
     {
       label: '\\Gamma',

@@ -16,6 +16,12 @@ export const linear: SpecialFunction = {
   shifts: [],
   zeros: [{ kind: 'zero', start: () => Form.zero, steps: () => [] }],
   growth: [],
+  logarithmicGrowth: [Form.one, Form.one.neg(), Form.i, Form.i.neg()].map((direction) => ({
+    direction,
+    about: () => Form.zero,
+    polynomial: () => Form.zero,
+    logarithm: () => Form.one,
+  })),
   notations: [
     {
       label: 'x',

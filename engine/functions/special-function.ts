@@ -94,6 +94,20 @@ export interface Growth {
   readonly logarithm: (x: Form, parameters: readonly Form[]) => Form;
 }
 
+/**
+ * Leading growth with a logarithm, as Stirling's: with z = x - about,
+ * log f(x) = polynomial(z) + logarithm(z) log z + constant + O(1/z) as Re (direction * x) -> +infinity.
+ */
+export interface LogarithmicGrowth {
+  readonly direction: Form;
+  readonly about: (parameters: readonly Form[]) => Form;
+  readonly polynomial: (z: Form, parameters: readonly Form[]) => Form;
+  /** A polynomial too; the logarithm beside it is the principal one. */
+  readonly logarithm: (z: Form, parameters: readonly Form[]) => Form;
+  /** A constant without closed form, in doubles; zero where it is absent. */
+  readonly constant?: (parameters: readonly Complex[]) => number;
+}
+
 /** How a function is printed. Strings are LaTeX; `argument` comes typeset. */
 export interface Notation {
   /** Short word shown in the chooser of notations, itself LaTeX: `s_b`. */
@@ -138,6 +152,8 @@ export interface SpecialFunction {
   readonly exactValue?: (argument: Form, parameters: readonly Form[]) => Form | null;
   readonly zeros: readonly Lattice[];
   readonly growth: readonly Growth[];
+  /** For functions whose growth is no polynomial. */
+  readonly logarithmicGrowth?: readonly LogarithmicGrowth[];
   readonly notations: readonly Notation[];
   /** The infinite product it regularises, in LaTeX, at an argument; null for an elementary function. */
   readonly modes: ((argument: Form, parameters: readonly Form[], print: Printer) => string) | null;

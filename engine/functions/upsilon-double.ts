@@ -22,10 +22,7 @@ export function upsilonKernel(b: number): DoubleKernel {
   const tables = upsilonTables(b);
   const value = new Float64Array(2);
   const gamma = new Float64Array(2);
-  onStrip(tables, 0, tables.reach, value);
-  const joined = value[0] as number;
-  far(tables, 0, tables.reach, 0, value);
-  const constant = joined - (value[0] as number);
+  const constant = farConstant(tables);
   return {
     addLog: (xRe, xIm, power, outRe, outIm) => {
       for (let k = 0; k < xRe.length; k++) {
@@ -42,6 +39,20 @@ export function upsilonKernel(b: number): DoubleKernel {
       }
     },
   };
+}
+
+/** K of the asymptotic series above: minus the logarithm of the zeta-regularised product at Q/2. */
+export function upsilonConstant(b: number): number {
+  return farConstant(upsilonTables(b));
+}
+
+/** Where both formulas serve they agree. */
+function farConstant(tables: UpsilonTables): number {
+  const value = new Float64Array(2);
+  onStrip(tables, 0, tables.reach, value);
+  const joined = value[0] as number;
+  far(tables, 0, tables.reach, 0, value);
+  return joined - (value[0] as number);
 }
 
 const ZERO_WIDTH = 8 * 2 ** -53;

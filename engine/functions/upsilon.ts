@@ -4,7 +4,7 @@ import { upsilonSecondRoute } from './barnes-routes';
 import { asFactor, indexSum, pairOfModes, parenthesised, periodText, realFirst } from './notation';
 import { outsideDomain } from './outside-domain';
 import type { ExactParameter, FunctionAt, Printer, SpecialFunction } from './special-function';
-import { upsilonKernel } from './upsilon-double';
+import { upsilonConstant, upsilonKernel } from './upsilon-double';
 import { logUpsilon } from './upsilon-precise';
 
 const HALF = Form.ratio(1, 2);
@@ -38,6 +38,19 @@ export const upsilon: SpecialFunction = {
     { kind: 'zero', start: ([b]) => sum(b as Form), steps: ([b]) => [b as Form, (b as Form).inverse()] },
   ],
   growth: [],
+  // z^2 log(-+iz) - (3/2) z^2 - ((b^2 + b^-2)/12) log(-+iz) + K: see `upsilon-double`.
+  logarithmicGrowth: [Form.i.neg(), Form.i].map((direction) => ({
+    direction,
+    about: ([b]) => sum(b as Form).mul(HALF),
+    polynomial: (z, [b]) =>
+      direction
+        .mul(Form.pi)
+        .mul(HALF)
+        .mul(logarithmic(z, b as Form))
+        .sub(z.mul(z).mul(Form.ratio(3, 2))),
+    logarithm: (z, [b]) => logarithmic(z, b as Form),
+    constant: ([b]) => upsilonConstant(b?.re ?? Number.NaN),
+  })),
   notations: [
     {
       label: '\\Upsilon_b',
@@ -92,6 +105,11 @@ function quotient(x: Form, period: Form, logarithm: Form): FunctionAt[] {
     { name: 'gamma', argument: Form.one.sub(u), parameters: [], power: -1 },
     { name: 'exponential', argument: Form.one.sub(u.scale(2)).mul(logarithm), parameters: [], power: 1 },
   ];
+}
+
+/** z^2 - (b^2 + b^-2)/12. */
+function logarithmic(z: Form, b: Form): Form {
+  return z.mul(z).sub(b.mul(b).add(b.mul(b).inverse()).mul(Form.ratio(1, 12)));
 }
 
 function sum(b: Form): Form {

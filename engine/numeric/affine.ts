@@ -44,17 +44,19 @@ export function affineProduct(product: Product, variables: readonly string[], va
   const unset = new Set<string>();
   const open: Values = (name) => (variables.includes(name) ? null : values(name));
   for (const factor of product) {
-    const parameters = factor.parameters.map((form) => form.substitute(open));
-    const template = readTemplate(factor.argument.substitute(open), variables);
-    if (template === null || parameters.some((form) => form.symbols().length > 0)) {
-      others.push(factor);
-      continue;
-    }
-    for (const argument of argumentsOf(factor, template, variables, number, unset)) {
-      const entry: AffineEntry = { name: factor.name, parameters, power: factor.power, ...argument };
-      const key = entryKey(entry);
-      const present = collected.get(key);
-      collected.set(key, present ? { ...entry, power: entry.power + present.power } : entry);
+    for (const { argument: at, parameters: periods, rows } of casesOf(factor, number)) {
+      const parameters = periods.map((form) => form.substitute(open));
+      const template = readTemplate(at.substitute(open), variables);
+      if (template === null || parameters.some((form) => form.symbols().length > 0)) {
+        others.push(factor);
+        break;
+      }
+      for (const argument of argumentsOf(factor, rows, template, variables, number, unset)) {
+        const entry: AffineEntry = { name: factor.name, parameters, power: factor.power, ...argument };
+        const key = entryKey(entry);
+        const present = collected.get(key);
+        collected.set(key, present ? { ...entry, power: entry.power + present.power } : entry);
+      }
     }
   }
   const symbolic = collectEntries(others, open);
@@ -64,6 +66,38 @@ export function affineProduct(product: Product, variables: readonly string[], va
     }
   }
   return { affine: [...collected.values()].filter(({ power }) => power !== 0), others: symbolic, unset: [...unset] };
+}
+
+/** A factor over those rows of its weights that have one flux; all of them where the flux does not matter. */
+interface Case {
+  readonly argument: Form;
+  readonly parameters: readonly Form[];
+  readonly rows: readonly number[] | null;
+}
+
+/**
+ * A factor that holds the flux other than linearly in its argument, as |w.n|, written once for each value that w.n
+ * takes. One that cannot be written so, for want of a value, stays as it is.
+ */
+function casesOf(factor: Factor, number: (name: string) => DoubleValue | null): readonly Case[] {
+  const { argument, parameters, weights, half } = factor;
+  const whole: Case = { argument, parameters, rows: null };
+  const mentions = (form: Form): boolean => form.symbols().includes(FLUX);
+  if (weights === null || !(parameters.some(mentions) || mentions(argument.linearPart(FLUX).rest))) return [whole];
+  const table = weights.rows(half);
+  const width = table.names.length;
+  const numbers = table.fluxes.map((name) => (name === null ? 0 : (number(name)?.re ?? Number.NaN)));
+  const byFlux = new Map<number, number[]>();
+  for (let row = 0; row < table.rows.length / width; row++) {
+    // + 0 turns -0 into 0.
+    const flux = numbers.reduce((sum, n, j) => sum + n * (table.rows[row * width + j] as number), 0) + 0;
+    byFlux.set(flux, [...(byFlux.get(flux) ?? []), row]);
+  }
+  if (![...byFlux.keys()].every(Number.isSafeInteger)) return [whole];
+  return [...byFlux].map(([flux, rows]) => {
+    const at = (form: Form): Form => form.substitute((name) => (name === FLUX ? Form.number(flux) : null));
+    return { argument: at(argument), parameters: parameters.map(at), rows };
+  });
 }
 
 function entryKey({ name, parameters, constant, slopes }: AffineEntry): string {
@@ -99,6 +133,7 @@ type Argument = Pick<AffineEntry, 'constant' | 'slopes'>;
 
 function argumentsOf(
   factor: Factor,
+  rows: readonly number[] | null,
   template: Template,
   variables: readonly string[],
   number: (name: string) => DoubleValue | null,
@@ -108,7 +143,7 @@ function argumentsOf(
   const table = factor.weights.rows(factor.half);
   const columns = readColumns(table, variables, number, template, unset);
   const width = table.names.length;
-  return Array.from({ length: table.rows.length / width }, (_, row) => {
+  return (rows ?? Array.from({ length: table.rows.length / width }, (_, row) => row)).map((row) => {
     let constant = template.constant;
     const slopes = [...template.slopes];
     for (let j = 0; j < width; j++) {
