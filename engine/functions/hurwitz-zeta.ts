@@ -14,7 +14,7 @@ import {
 } from '../arithmetic/fixed-complex';
 import { ln2Fixed, piFixed } from '../arithmetic/fixed-constants';
 
-import { stepsToFarPoint } from './euler-maclaurin';
+import { listBits, stepsToFarPoint } from './euler-maclaurin';
 import { twiceEvenZeta } from './even-zeta';
 import { exactRational } from './exact-rational';
 import type { Complex, ExactParameter } from './special-function';
@@ -96,11 +96,14 @@ function refusal(s: ExactParameter, a: ExactParameter): FunctionValue | null {
  */
 function guardBits(s: Complex, a: Complex, bits: number): number {
   const far = 0.2 * bits + 40 + Math.hypot(s.re, s.im) + Math.hypot(a.re, a.im);
-  const near = Math.max(2 ** -64, Math.min(...[0, 1].map((k) => Math.hypot(a.re - Math.round(a.re) + k, a.im)), far));
+  // The smallest |a + k|, k >= 0.
+  const near = Math.max(2 ** -64, Math.hypot(a.re >= 0.5 ? a.re : a.re - Math.round(a.re), a.im));
   const growth =
     Math.max((1 - s.re) * Math.log2(far), -(s.re + 1) * Math.log2(near), 0) + Math.abs(s.im) * Math.PI * Math.LOG2E;
   const pole = Math.max(0, -2 * Math.log2(Math.max(2 ** -200, Math.hypot(s.re - 1, s.im))));
-  return Math.ceil(growth + pole + 2 * Math.log2(far) + Math.log2(Math.hypot(s.re, s.im) + 2)) + 24;
+  const guard = Math.ceil(growth + pole + 2 * Math.log2(far) + Math.log2(Math.hypot(s.re, s.im) + 2)) + 24;
+  // Whole multiples of 64 in all, so that the tables of logarithm and exponential serve many arguments.
+  return listBits(bits + guard) - bits;
 }
 
 /** zeta(s, a) with `bits` fraction bits; null next to s = 1 or where a term is infinite. */
@@ -145,10 +148,12 @@ function addTail(
   const square = multiplyComplex(inverse, inverse, bits);
   let term = multiplyComplex(multiplyComplex(multiplyComplex(power, at, bits), square, bits), s, bits);
   let sum = start;
-  const coefficients = twiceEvenZeta(64 * Math.ceil((0.3 * bits + 40) / 64), bits);
+  // The bits vary with the arguments; lists are made for whole multiples of 64, so that close ones share.
+  const list = listBits(bits);
+  const coefficients = twiceEvenZeta(64 * Math.ceil((0.3 * bits + 40) / 64), list);
   for (let j = 1; j <= coefficients.length; j++) {
     const coefficient = coefficients[j - 1] as bigint;
-    const part = scaleComplex(term, j % 2 === 1 ? coefficient : -coefficient, bits);
+    const part = scaleComplex(term, j % 2 === 1 ? coefficient : -coefficient, list);
     sum = addComplex(sum, part);
     if (absoluteComplex(part) <= 4n && j > 2) return sum;
     for (const add of [2 * j - 1, 2 * j]) {

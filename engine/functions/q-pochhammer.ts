@@ -10,8 +10,10 @@ import {
 } from '../arithmetic/ball';
 import { bitLength, numberFromFixed } from '../arithmetic/fixed';
 import { absoluteComplex } from '../arithmetic/fixed-complex';
-import { argumentBall, enclosed, wholeNumber, widened } from './enclosure';
+import { Rational } from '../exact/rational';
+import { argumentBall, enclosed, exactZero, wholeNumber, widened } from './enclosure';
 import { ulpsOf } from './euler-maclaurin';
+import { exactRational } from './exact-rational';
 import type { ExactParameter } from './special-function';
 import type { FunctionValue, ValueFunction } from './value-function';
 
@@ -21,17 +23,17 @@ const LARGEST_NOME = 0.99;
 
 /**
  * (x; q)_infinity = prod_{k>=0} (1 - x q^k) (DLMF 17.2.4) for complex |q| <= 0.99 and |x| <= 10^6; zeros at x = q^{-k}.
- * Method: the product up to |x q^N| < 2^{-p}; what is left out is 1 within 4 |x| |q|^N/(1 - |q|). Error: proved.
- * Second route: Euler's sum.
+ * Method: Euler's sum. Second route: the product up to |x q^N| < 2^{-p}; what is left out is 1 within
+ * 4 |x| |q|^N/(1 - |q|). Error: proved.
  */
 export const qPochhammer: ValueFunction = {
   least: 2,
   most: 2,
   definition: '(x;q)_\\infty=\\prod_{k\\ge0}(1-x\\,q^k)',
-  evaluate: ([x, q], bits) => value(x as ExactParameter, q as ExactParameter, bits, product),
+  evaluate: ([x, q], bits) => value(x as ExactParameter, q as ExactParameter, bits, eulerSum),
   crossCheck: ([x, q], bits) => ({
-    route: "Euler's sum",
-    value: value(x as ExactParameter, q as ExactParameter, bits, eulerSum),
+    route: 'product',
+    value: value(x as ExactParameter, q as ExactParameter, bits, product),
   }),
   sources: [{ key: 'DLMF-17.2', text: 'NIST Digital Library of Mathematical Functions, 17.2, 17.3' }],
 };
@@ -45,11 +47,22 @@ function value(x: ExactParameter, q: ExactParameter, bits: number, compute: Comp
   if (Math.hypot(x.approx.re, x.approx.im) > LARGEST) {
     return { kind: 'outside', says: `The first argument must be at most ${LARGEST} in size.` };
   }
+  if (isZero(x, q)) return exactZero;
   const point = (precision: number): Ball => argumentBall(x, precision);
   if (wholeNumber(q) === 0) {
     return enclosed(bits, (precision) => subtractBalls(exactBall(1n), point(precision), precision + 32));
   }
   return enclosed(bits, (precision) => compute(point(precision), argumentBall(q, precision), precision));
+}
+
+/** Whether x q^k = 1 for some k, decided where both are rational. */
+function isZero(x: ExactParameter, q: ExactParameter): boolean {
+  const [start, nome] = [exactRational(x), exactRational(q)];
+  if (start === null || nome === null || start.isZero()) return false;
+  const k = nome.isZero()
+    ? 0
+    : Math.max(0, Math.round(-Math.log(Math.abs(x.approx.re)) / Math.log(Math.abs(q.approx.re))));
+  return k < 1000 && start.mul(nome.pow(k)).equals(Rational.one);
 }
 
 function product(x: Ball, q: Ball, precision: number): Ball | null {
@@ -62,7 +75,6 @@ function product(x: Ball, q: Ball, precision: number): Ball | null {
     power = multiplyBalls(power, q, precision);
     // |log(1 - u)| <= 2 |u| for |u| <= 1/2, and e^v - 1 <= 2 v for v <= 1.
     const rest = log2Above(power) + 2 - left;
-    if (total.re === 0n && total.im === 0n && total.error === 0n) return total;
     if (rest < -precision) {
       const bits = precision - log2Above(total);
       return widened(total, ulpsOf(rest + log2Above(total), bits), bits);
