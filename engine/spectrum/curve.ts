@@ -40,7 +40,8 @@ export function logDeterminantCurve(
   xs.forEach((x, k) => {
     const value = found((symbol) => (symbol === name ? { re: x, im: 0 } : null));
     re[k] = value.re;
-    im[k] = value.im;
+    // At a zero or a pole there is no phase.
+    im[k] = Math.abs(value.re) === Number.POSITIVE_INFINITY ? 0 : value.im;
   });
   return { re, im };
 }
