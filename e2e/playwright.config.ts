@@ -11,7 +11,9 @@ export default defineConfig({
   forbidOnly: true,
   retries: 0,
   workers: 1,
-  timeout: 30_000,
+  // Twice what a quiet machine needs: the suite shares two cores with its own web server.
+  timeout: 90_000,
+  expect: { timeout: 20_000 },
   reporter: process.env.E2E_REPORT ? [['list'], ['json', { outputFile: process.env.E2E_REPORT }]] : [['list']],
   use: {
     baseURL: `http://127.0.0.1:${port}/`,
