@@ -1,3 +1,4 @@
+import { run as accuracy } from './accuracy.bench';
 import { run as arithmetic } from './arithmetic.bench';
 import { run as doubleSine } from './double-sine-precise.bench';
 import { run as jobs } from './engine.bench';
@@ -6,6 +7,10 @@ import type { ComparisonRow } from './timing';
 
 /** Prints every bench. Times are processor time, so that other work on the machine does not count. */
 function main(): void {
+  if (process.argv.includes('accuracy')) {
+    statedErrors();
+    return;
+  }
   const comparisons: readonly (readonly [string, () => readonly ComparisonRow[]])[] = [
     ['Arithmetic', arithmetic],
     ['Double sine, precise tier', doubleSine],
@@ -35,6 +40,16 @@ function main(): void {
       equal === null ? '' : `${equal}`,
     ]),
   );
+}
+
+/** `npm run bench -- accuracy [points]`. */
+function statedErrors(): void {
+  const points = Number(process.argv[process.argv.indexOf('accuracy') + 1] ?? '20000');
+  heading('Largest error over the error stated');
+  for (const { name, bits, held, refused, ratio, at } of accuracy(points)) {
+    const counts = `${held} points${refused > 0 ? `, ${refused} refused` : ''}`;
+    process.stdout.write(`  ${name.padEnd(20)} ${bits} bits  ${counts}  ${ratio.toPrecision(3)} at ${at}\n`);
+  }
 }
 
 function comparisonCells(row: ComparisonRow): string[] {
