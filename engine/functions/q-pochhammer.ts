@@ -82,7 +82,7 @@ function product(x: Ball, q: Ball, precision: number): Ball | null {
   }
 }
 
-/** (x; q)_infinity = sum_n (-1)^n q^{n(n-1)/2} x^n/(q; q)_n (DLMF 17.3.2, Euler), stopped where the ratio is below 1/2. */
+/** (x; q)_infinity = sum_n (-1)^n q^{n(n-1)/2} x^n/(q; q)_n (DLMF 17.3.2, Euler), stopped where the ratio is below 1/8. */
 function eulerSum(x: Ball, q: Ball, precision: number): Ball | null {
   const one = exactBall(1n);
   let term: Ball | null = one;
@@ -99,8 +99,8 @@ function eulerSum(x: Ball, q: Ball, precision: number): Ball | null {
     term = multiplyBalls(term, ratio, precision);
     power = next;
     const size = log2Above(term);
-    // The ratios fall with n from where |q|^n is below 1/2.
-    if (log2Above(ratio) < -1 && log2Above(power) < -1 && size < -precision) {
+    // Where |q|^n < 1/2, later ratios are at most 3 times this one: the rest is below 2 terms.
+    if (log2Above(ratio) < -3 && log2Above(power) < -1 && size < -precision) {
       return widened(sum, ulpsOf(size + 2, precision), precision);
     }
     sum = addBalls(sum, term, precision + Math.max(0, log2Above(sum)));
