@@ -149,7 +149,8 @@ export function juxtapose(parts: readonly string[]): string {
 function powerLatex(atom: Atom, power: number): string {
   const base = atomLatex(atom);
   if (power === 1) return base;
-  const wrapped = atom.kind === 'call' ? `\\left(${base}\\right)` : base;
+  // A prime is a superscript too: m'_1^2 is no LaTeX.
+  const wrapped = atom.kind === 'call' ? `\\left(${base}\\right)` : base.includes("'") ? `{${base}}` : base;
   return `${wrapped}^${power < 10 && power >= 0 ? power : `{${power}}`}`;
 }
 

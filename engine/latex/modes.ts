@@ -1,4 +1,5 @@
 import { Form } from '../exact/form';
+import { Gaussian } from '../exact/gaussian';
 import { WEIGHT } from '../product/factor';
 import type { ModeFactor, ModeTower } from '../spheres/sphere';
 import type { TheoryGroup } from '../theory/theory';
@@ -30,7 +31,11 @@ function towerLatex(tower: ModeTower, weight: Form): string {
 
 /** The Vandermonde factor as the square of the weight. */
 function prefactorLatex(prefactor: Form, weight: Form): string {
-  return prefactor.equals(weight.mul(weight)) ? `${formInParentheses(weight)}^2` : formInParentheses(prefactor);
+  if (!prefactor.equals(weight.mul(weight))) return formInParentheses(prefactor);
+  // A single coordinate is squared as it stands; in braces, since its name may carry a prime.
+  const [term, ...others] = weight.terms;
+  const plain = others.length === 0 && term?.factors.length === 1 && term.coefficient.equals(Gaussian.one);
+  return `${plain ? `{${formLatex(weight)}}` : `(${formLatex(weight)})`}^2`;
 }
 
 function isNegative(form: Form): boolean {

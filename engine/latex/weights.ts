@@ -19,10 +19,10 @@ export interface PrintedWeights {
 export const NO_WEIGHT: PrintedWeights = { sign: '', weight: Form.zero, flux: Form.zero };
 
 /**
- * Index letters, a different run for each group: i is left to the imaginary unit, and letters that name masses and
- * integers in these formulas (m, n, k) come last.
+ * Index letters, a different run for each group: i is left to the imaginary unit, b to the squashing, e to exponentials,
+ * r to R-charges, and letters that name masses and integers in these formulas (m, n, k) do not occur.
  */
-const LETTERS: readonly string[] = ['abcdefgh', 'jlpqruvw', 'ABCDEFGH', 'JKLMNPQR', 'stxyzcde', 'STUVWXYZ'];
+const LETTERS: readonly string[] = ['acdfghxy', 'jlpqsuvw', 'ABCDEFGH', 'JKLMNPQR', 'STUVWXYZ'];
 
 /** How each choice of index patterns of a set is printed; several for exceptional groups. */
 export function printWeights(

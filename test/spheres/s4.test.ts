@@ -164,10 +164,10 @@ describe('N = 4 is a Vandermonde determinant', () => {
 
   test('in print', () => {
     expect(latexOf(theory('supersymmetry 4', 'gauge G = SU(3)')).latex).toEqual([
-      '\\prod_{a<b}(\\sigma_a-\\sigma_b)^{2}',
+      '\\prod_{a<c}(\\sigma_a-\\sigma_c)^{2}',
     ]);
     expect(latexOf(theory('sphere S4, b = 5/4', 'supersymmetry 4', 'gauge G = SU(3)')).latex).toEqual([
-      '\\prod_{a<b}(\\sigma_a-\\sigma_b)^{2}',
+      '\\prod_{a<c}(\\sigma_a-\\sigma_c)^{2}',
       '\\frac{1}{\\left[\\Upsilon_{b}\\left(\\frac{1}{b}\\right)\\right]^{2}}',
     ]);
   });

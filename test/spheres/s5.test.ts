@@ -176,7 +176,7 @@ describe('N = 2', () => {
 
   test('in print', () => {
     expect(reduced('supersymmetry 2', 'gauge G = SU(3)').latex).toEqual([
-      '\\prod_{a<b}\\left[2\\sinh\\pi(\\sigma_a-\\sigma_b)\\right]^{2}',
+      '\\prod_{a<c}\\left[2\\sinh\\pi(\\sigma_a-\\sigma_c)\\right]^{2}',
       '\\frac{1}{\\left[S_3(1)\\right]^{2}}',
     ]);
     expect(reduced(SQUASHED, 'supersymmetry 2', 'gauge G = SU(2)').latex).toEqual([
