@@ -3,6 +3,7 @@ import type { FixedComplex } from '../arithmetic/fixed-complex';
 import { logBarnesGamma } from './barnes-gamma';
 import type { ExactParameter, PreciseLog } from './special-function';
 import { logTripleSineRound } from './triple-sine-closed';
+import { tripleSineByContour } from './triple-sine-contour';
 import { logTripleSine } from './triple-sine-precise';
 
 /** A second value of a logarithm and how it was found. */
@@ -37,15 +38,15 @@ export function upsilonSecondRoute(x: FixedComplex, b: ExactParameter, bits: num
   return { route: 'double Gamma functions', log: value };
 }
 
-/** Bits up to which the triple Gamma functions, with tens of thousands of lattice points, are worth their time. */
-const TRIPLE_GAMMA_BITS = 260;
+/** Bits up to which the contour, whose nodes grow with the square of the bits, is worth its time. */
+const CONTOUR_BITS = 800;
 
 /** Above this many bits the closed form for equal periods is the quicker route, below it the quadrature. */
 export const CLOSED_FORM_BITS = 400;
 /** Bits up to which the quadrature is worth its time as a second route. */
 const QUADRATURE_BITS = 1200;
 
-/** For equal periods the one of quadrature and closed form that is not the main route, else -log Gamma_3(x) - log Gamma_3(|w| - x). */
+/** For equal periods the one of quadrature and closed form that is not the main route, else the quadrature on another contour. */
 export function tripleSineSecondRoute(x: FixedComplex, w: readonly ExactParameter[], bits: number): SecondRoute | null {
   if (w.length !== 3 || !w.every(({ approx }) => approx.im === 0 && approx.re > 0)) return null;
   const closed = logTripleSineRound(x, w, bits);
@@ -53,28 +54,8 @@ export function tripleSineSecondRoute(x: FixedComplex, w: readonly ExactParamete
     if (bits <= CLOSED_FORM_BITS) return { route: 'closed form in polylogarithms', log: closed };
     return bits > QUADRATURE_BITS ? null : { route: 'midpoint rule', log: logTripleSine(x, w, bits) };
   }
-  if (bits > TRIPLE_GAMMA_BITS) return null;
-  const working = bits + 16;
-  const periods = w.map((period) => real(period.value(working).re));
-  const total = periods.reduce((sum, { re }) => sum + re, 0n);
-  const lifted = { re: x.re << 16n, im: x.im << 16n };
-  const one = logBarnesGamma(lifted, periods, working);
-  const two = logBarnesGamma({ re: total - lifted.re, im: -lifted.im }, periods, working);
-  if (one === null || two === null) return null;
-  const value: PreciseLog = {
-    kind: 'value',
-    re: shiftRounded(-one.value.re - two.value.re, 16),
-    im: shiftRounded(-one.value.im - two.value.im, 16),
-    error:
-      ((one.error + two.error) >> 16n) +
-      2n +
-      argumentShare(
-        x,
-        w.map(({ approx }) => approx.re),
-        bits,
-      ),
-  };
-  return { route: 'triple Gamma functions', log: value };
+  if (bits > CONTOUR_BITS) return null;
+  return { route: 'midpoint rule off the real line', log: logTripleSine(x, w, bits, tripleSineByContour) };
 }
 
 /** What one unit in x may do to the logarithm: the growth of its derivative, and the zeros outside 0 < x < |w|. */

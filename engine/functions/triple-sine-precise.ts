@@ -33,7 +33,12 @@ const INDISTINCT: PreciseLog = { kind: 'indistinct' };
  * next to a zero, and where more than 250 000 nodes would be needed.
  * Source: Narukawa 2004, math/0306164 (integral and growth); Kurokawa and Koyama 2003 (shift).
  */
-export function logTripleSine(x: FixedComplex, periods: readonly ExactParameter[], bits: number): PreciseLog {
+export function logTripleSine(
+  x: FixedComplex,
+  periods: readonly ExactParameter[],
+  bits: number,
+  strip: StripRule = onStrip,
+): PreciseLog {
   const approx = periods.map((w) => w.approx.re);
   if (periods.length !== 3 || !periods.every((w) => w.approx.im === 0 && w.approx.re > 0)) return INDISTINCT;
   const total = approx.reduce((sum, w) => sum + w, 0);
@@ -73,7 +78,7 @@ export function logTripleSine(x: FixedComplex, periods: readonly ExactParameter[
     point = { re: point.re + (exact[index] as bigint), im: point.im };
     mirror();
   }
-  const inside = onStrip(point, periods, bits);
+  const inside = isFar(point, approx, bits) ? limit(point, periods, bits) : strip(point, periods, bits);
   if (inside === null) return INDISTINCT;
   // A generous bound of |d log S_3/dz| in the middle half (see the test); every shift moved x by one more unit.
   const size = numberFromFixed(absoluteComplex(point), bits) + total;
@@ -134,16 +139,10 @@ function tableFor(x: FixedComplex, periods: readonly ExactParameter[], bits: num
   });
 }
 
-/** log S_3 for |Re z| <= |w|/4, or far up. */
+/** log S_3 for |Re z| <= |w|/4; null where it would take too many nodes. */
+export type StripRule = (x: FixedComplex, periods: readonly ExactParameter[], bits: number) => FixedComplex | null;
+
 function onStrip(x: FixedComplex, periods: readonly ExactParameter[], bits: number): FixedComplex | null {
-  if (
-    isFar(
-      x,
-      periods.map((w) => w.approx.re),
-      bits,
-    )
-  )
-    return limit(x, periods, bits);
   const table = tableFor(x, periods, bits);
   if (table === null) return null;
   const { nodes, half, constant, quadratic } = table;

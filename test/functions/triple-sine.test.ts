@@ -2,6 +2,7 @@ import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
 import { tripleSineSecondRoute } from '../../engine/functions/barnes-routes';
 import { tripleSine } from '../../engine/functions/triple-sine';
+import { tripleSineByContour } from '../../engine/functions/triple-sine-contour';
 import { tripleSineKernel } from '../../engine/functions/triple-sine-double';
 import { logTripleSine } from '../../engine/functions/triple-sine-precise';
 import fixture from '../fixtures/functions/triple-sine.json';
@@ -34,9 +35,14 @@ describe('log S_3', () => {
     }
   });
 
-  test.each([60, 190])('precise, %i bits: the error stated is kept', (bits) => {
+  test.each([
+    [60, 'on the real line', undefined],
+    [190, 'on the real line', undefined],
+    [60, 'off the real line', tripleSineByContour],
+    [190, 'off the real line', tripleSineByContour],
+  ] as const)('precise, %i bits, nodes %s: the error stated is kept', (bits, _where, rule) => {
     for (const { w, re, im, log } of rows) {
-      const value = logTripleSine(fixedComplex(re, im, bits), w.map(parameterOfDouble), bits);
+      const value = logTripleSine(fixedComplex(re, im, bits), w.map(parameterOfDouble), bits, rule);
       const wanted = { re: fixedFromText(log[0], bits), im: fixedFromText(log[1], bits) };
       const bound = value.kind === 'value' ? Number(value.error) : 0;
       expect(unitsOff(value, wanted, bits, true), `w = ${w}, x = ${re} + ${im} i`).toBeLessThanOrEqual(bound);
@@ -44,7 +50,7 @@ describe('log S_3', () => {
     }
   });
 
-  test('second routes: polylogarithms for equal periods, triple Gamma functions else', () => {
+  test('second routes: polylogarithms for equal periods, another contour else', () => {
     const bits = 90;
     const routes = new Set<string>();
     for (const { w, re, im } of rows.filter(({ im }, k) => im !== 0 && (k < 9 || k % 9 === 1))) {
