@@ -24,7 +24,7 @@ export function asymptote(
   for (const entry of moving) {
     const law = growthOf(entry, end);
     if (law === null) return null;
-    addReal(law, entry, points, re);
+    addReal(law, entry, points, end, re);
   }
   return re.every((value, k) => end * (points[k] as number) <= 0 || Number.isFinite(value)) ? re : null;
 }
@@ -90,11 +90,12 @@ function degreeOf(key: string): number {
 }
 
 /** Adds power * Re (P + L log) at constant + slope t to out. */
-function addReal(law: Law, entry: AffineEntry, points: Float64Array, out: Float64Array): void {
+function addReal(law: Law, entry: AffineEntry, points: Float64Array, end: 1 | -1, out: Float64Array): void {
   const { constant, power } = entry;
   const slope = entry.slopes[0] as DoubleValue;
   for (let k = 0; k < points.length; k++) {
     const t = points[k] as number;
+    if (end * t <= 0) continue;
     const z = { re: constant.re - law.about.re + slope.re * t, im: constant.im - law.about.im + slope.im * t };
     const { re } = polynomialAt(law.polynomial, z);
     const beside = polynomialAt(law.logarithm, z);

@@ -1,4 +1,5 @@
 import { Form } from '../exact/form';
+import { memoiseByKey } from '../functions/kernel-memo';
 import type { FunctionAt, FunctionName } from '../functions/special-function';
 import { functions } from '../functions/table';
 import { exactOrder } from './divisor';
@@ -18,21 +19,20 @@ export type Geometry = readonly ((name: string) => Form | null)[];
  */
 export class StepLattice {
   private readonly geometry: Geometry;
-  private readonly combinations: Map<string, readonly number[]>;
+  private readonly combinations: ReadonlyMap<string, readonly number[]>;
 
-  private constructor(combinations: Map<string, readonly number[]>, geometry: Geometry) {
+  private constructor(combinations: ReadonlyMap<string, readonly number[]>, geometry: Geometry) {
     this.combinations = combinations;
     this.geometry = geometry;
   }
 
   private static of(name: FunctionName, parameters: readonly Form[], geometry: Geometry): StepLattice {
-    const steps = functions[name].shifts.map((shift) => shift.step(parameters));
-    const found = new Map<string, readonly number[]>();
-    for (const counts of countsUpTo(steps.length, MAXIMAL_STEPS)) {
-      const sum = Form.sum(steps.map((step, k) => step.scale(counts[k] ?? 0)));
-      for (const form of stages(sum, geometry)) if (!found.has(form.key)) found.set(form.key, counts);
-    }
-    return new StepLattice(found, geometry);
+    const steps = functions[name].shifts.map((shift) => stages(shift.step(parameters), geometry));
+    const key = steps.map((forms) => forms.map((form) => form.key).join(';')).join('|');
+    return new StepLattice(
+      combinationsOf(key, () => combine(steps)),
+      geometry,
+    );
   }
 
   /** The lattice of a function from those made before, or a new one. */
@@ -69,6 +69,22 @@ export class StepLattice {
       return exactOrder(name, constant, known) === 0;
     });
   }
+}
+
+/** By the steps before and after each substitution, which decide everything. */
+const combinationsOf = memoiseByKey<ReadonlyMap<string, readonly number[]>>(64);
+
+/** All short combinations of the steps, by what they are at each stage. */
+function combine(steps: readonly (readonly Form[])[]): ReadonlyMap<string, readonly number[]> {
+  const found = new Map<string, readonly number[]>();
+  const count = steps[0]?.length ?? 0;
+  for (const counts of countsUpTo(steps.length, MAXIMAL_STEPS)) {
+    for (let stage = 0; stage < count; stage++) {
+      const { key } = Form.sum(steps.map((forms, k) => (forms[stage] as Form).scale(counts[k] ?? 0)));
+      if (!found.has(key)) found.set(key, counts);
+    }
+  }
+  return found;
 }
 
 /** The form as it is and after each substitution. */
