@@ -3,6 +3,7 @@ import { run as arithmetic } from './arithmetic.bench';
 import { run as doubleSine } from './double-sine-precise.bench';
 import { run as jobs } from './engine.bench';
 import { measureLie } from './lie.bench';
+import { run as spheres } from './spheres.bench';
 import type { ComparisonRow } from './timing';
 
 /** Prints every bench. Times are processor time, so that other work on the machine does not count. */
@@ -22,7 +23,7 @@ function main(): void {
   heading('What a keystroke and a slider ask for');
   table(
     ['', 'ms', 'limit', 'ratio'],
-    jobs().map(({ name, milliseconds, limit }) => [
+    [...jobs(), ...spheres()].map(({ name, milliseconds, limit }) => [
       name,
       milliseconds.toFixed(2),
       `${limit}`,
