@@ -331,6 +331,12 @@ function reduceCall(name: CallName, args: readonly Form[]): Form {
   const q = x.toRational();
   if (name === 'inverse') return x.inverse();
   if (name === 'abs' && q) return Form.number(q.abs());
+  if (name === 'abs' && x.terms.length === 1) {
+    const { coefficient } = x.terms[0] as Term;
+    if (coefficient.isReal() && !coefficient.equals(Gaussian.one)) {
+      return Form.call('abs', x.scale(coefficient.inverse())).scale(coefficient.re.abs());
+    }
+  }
   if (name === 'abs' && x.terms[0]?.coefficient.re.sign() === -1) return Form.call('abs', x.neg());
   if (name === 'log' && q?.equals(Rational.one)) return Form.zero;
   if (name === 'sqrt' && q) return rootOfRational(q);

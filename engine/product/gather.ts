@@ -173,3 +173,16 @@ function collectConstants<W extends WeightSet>(constants: readonly Factor<W>[], 
 }
 
 const UNITS = new Set([Form.one, Form.one.neg(), Form.i, Form.i.neg()].map((form) => form.key));
+
+/** An even function over one of each pair, to an even power, written over both again; the converse of `settle`. */
+export function unfolded<W extends WeightSet>(factor: Factor<W>): Factor<W> {
+  const { weights, half, power, parameters, argument } = factor;
+  if (!half || weights === null || weights.key !== weights.oppositeKey || power % 2 !== 0) return factor;
+  const even = functions[factor.name].reflections.some(
+    (reflection) =>
+      reflection.power === 1 &&
+      reflection.sign === 1 &&
+      reflection.center(parameters).scale(2).sub(flipped(argument)).equals(argument),
+  );
+  return even ? { ...factor, half: false, power: power / 2 } : factor;
+}

@@ -3,7 +3,7 @@ import type { FunctionAt } from '../functions/special-function';
 import { functions } from '../functions/table';
 import { expandChain, type Geometry, StepLattice } from './chain';
 import { constantFactor, type Factor, flipped, type Product, type WeightSet } from './factor';
-import { buckets, flippable } from './gather';
+import { buckets, flippable, unfolded } from './gather';
 
 /** Replaces quotients at arguments that differ by periods; what they leave is taken over the same weights. */
 export function pairByShifts<W extends WeightSet>(
@@ -25,19 +25,6 @@ export function pairByShifts<W extends WeightSet>(
     const elementary = made.map((f) => ({ ...f, argument: f.argument.substitute(define) }));
     return [...open.filter(({ power }) => power !== 0), ...elementary];
   });
-}
-
-/** An even function over one of each pair, to an even power, written over both again; the converse of `settle`. */
-function unfolded<W extends WeightSet>(factor: Factor<W>): Factor<W> {
-  const { weights, half, power, parameters, argument } = factor;
-  if (!half || weights === null || weights.key !== weights.oppositeKey || power % 2 !== 0) return factor;
-  const even = functions[factor.name].reflections.some(
-    (reflection) =>
-      reflection.power === 1 &&
-      reflection.sign === 1 &&
-      reflection.center(parameters).scale(2).sub(flipped(argument)).equals(argument),
-  );
-  return even ? { ...factor, half: false, power: power / 2 } : factor;
 }
 
 /** The ways to write f(y)^q as f(x)^power: as it stands, flipped, reflected. */

@@ -2,7 +2,7 @@ import { functions } from '../functions/table';
 import { centred } from './centre';
 import type { Geometry, StepLattice } from './chain';
 import type { Factor, Product, WeightSet } from './factor';
-import { buckets, gather, join } from './gather';
+import { buckets, gather, join, unfolded } from './gather';
 import { pairByShifts } from './pair-by-shifts';
 import { reduceElementary } from './reduce-elementary';
 
@@ -22,7 +22,7 @@ export type Depth = 'functions' | 'elementary';
 export function simplify<W extends WeightSet>(product: Product<W>, depth: Depth, geometry: Geometry = []): Product<W> {
   // Within one call: the lattice of a function is the same for all its factors and in every round.
   const lattices = new Map<string, StepLattice>();
-  let current = gather(centred(gather(product), geometry, lattices));
+  let current = gather(centred(gather(product), geometry, lattices).map((factor) => unfolded(factor)));
   if (depth === 'functions') return current;
   for (let round = 0; round < MAXIMAL_ROUNDS; round++) {
     const next = gather(reduceElementary(pairByShifts(current, geometry, lattices)));

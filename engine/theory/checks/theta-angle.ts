@@ -15,10 +15,11 @@ export const thetaAngle: Condition = {
       if (family !== 'U' || size === null || size < 2) return [];
       const name = groupLatex(group, print);
       const shift = size - 1 === 1 ? '\\pi' : `${size - 1}\\pi`;
+      const moved = `they shift $\\theta$ by $${shift}$`;
       const words =
         size % 2 === 0
-          ? `they shift $\\theta$ by $${shift}$, that is by $\\pi$; formulas without this sign have another $\\theta$`
-          : `they shift $\\theta$ by $${shift}$, a whole number of its periods $2\\pi$`;
+          ? `${moved}${size === 2 ? '' : ', that is by $\\pi$'}; formulas without this sign have another $\\theta$`
+          : `${moved}, a whole number of its periods $2\\pi$`;
       return [
         {
           detail: group.name,
