@@ -69,7 +69,6 @@ const PURE: Contour = { angle: Math.PI / 4, reach: 3.5, step: 0.05 };
 const CONTOURS: Readonly<Record<string, Contour>> = {
   'u2-adj-1flavour-wz': { angle: 0, reach: 8, step: 0.05 },
   'u2-nf2-confining': { angle: 0, reach: 14, step: 0.07 },
-  'usp4-6fund-confining': { angle: 0, reach: 9, step: 0.036 },
   'g2-4fund': { angle: 0, reach: 6, step: 0.025 },
   'n4-u2-nf4-fi0': { angle: 0, reach: 6, step: 0.08 },
   'n4-u2-nf3-fi1_5': { angle: 0, reach: 10, step: 0.08 },
