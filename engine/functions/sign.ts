@@ -14,6 +14,10 @@ export const sign: SpecialFunction = {
   parameters: [],
   reflections: [],
   additive: parity,
+  outside: (argument) =>
+    argument.toRational()?.isInteger()
+      ? null
+      : `(-1)^x has no value at x = ${argument.key}: charges times fluxes are integers`,
   shifts: [],
   zeros: [],
   growth: [],

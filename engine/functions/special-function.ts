@@ -143,6 +143,8 @@ export interface SpecialFunction {
    * Factors of such a function are collected into one.
    */
   readonly additive?: (sum: Form) => Form;
+  /** Why there is no value at an exactly known argument, in words; null where there is one. Absent: there always is. */
+  readonly outside?: (argument: Form) => string | null;
   /** Powers of closed forms that can be taken out: f(x) = f(rest) times the product of base^exponent. */
   readonly powers?: (argument: Form) => {
     readonly rest: Form;

@@ -32,11 +32,13 @@ export const theoryWording = {
     `\`abelian\` sets the level of the U(1) part of U(n), n > 1; ${d.group} has no such part. Use \`level\`.`,
   'level-number': (d) => `The level \`${d.text}\` is no exact number. Write an integer or a half such as \`1/2\`.`,
   'group-name': (d) => `No group is called \`${d.name}\`; use a name from a \`gauge\` or \`flavor\` line.`,
+  'mixed-sphere': (d) => `There is no mixed level on ${d.sphere}: ${d.why}. Leave the line out.`,
   'mixed-not-abelian': (d) => `\`${d.name}\` is ${d.group}: a mixed level needs two groups with a U(1).`,
   'mixed-same': (d) =>
     `A mixed level joins two different groups; for one alone write \`level\` on the line of \`${d.name}\`.`,
   'column-unknown': (d) => `The column \`${d.name}\` is no group of this theory; columns are ${d.known}.`,
-  'multiplet-kind': (d) => `\`${d.kind}\` does not exist on ${d.sphere}; there are ${d.allowed}.`,
+  'multiplet-kind': (d) =>
+    `\`${d.kind}\` does not exist on ${d.sphere}${d.why ? `: ${d.why}` : ''}; there are ${d.allowed}.`,
   'r-charge': (d) =>
     `The R-charge \`${d.text}\` cannot be read. Write an exact number or an expression such as \`1-r\`, without blanks.`,
   'r-charge-name': (d) =>

@@ -20,6 +20,8 @@ export type PreciseValue =
   | { readonly kind: 'meeting'; readonly order: number }
   | { readonly kind: 'indistinct'; readonly argument: string }
   | { readonly kind: 'unset'; readonly names: readonly string[] }
+  /** A function has no value there; `why` says it in words. */
+  | { readonly kind: 'outside'; readonly why: string }
   | { readonly kind: 'unreachable' };
 
 /** Which algorithm evaluates the functions: their main one, or the independent second one where there is one. */
@@ -51,6 +53,10 @@ export function evaluatePrecise(
     return at === null || isTooFar(name, at, periods);
   });
   if (far) return { kind: 'unreachable' };
+  for (const { name, argument } of entries) {
+    const why = functions[name].outside?.(argument) ?? null;
+    if (why !== null) return { kind: 'outside', why };
+  }
   let order = 0;
   let meets = false;
   for (const entry of entries) {

@@ -72,6 +72,8 @@ export function functionValue(analysis: Analysis, quantity: FunctionQuantity, di
     case 'meeting':
     case 'indistinct':
       return failure(of, 'The argument cannot be told from a pole or a zero. Give it exactly, or move it away.');
+    case 'outside':
+      return failure(of, `${value.why}.`);
     case 'unreachable':
       return failure(of, 'The value is out of reach: an argument is undefined, or outside the domain of the function.');
   }

@@ -1,7 +1,8 @@
 import { Form } from '../exact/form';
 import type { Assignment, Name } from '../language/tree';
 import type { Sphere } from '../spheres/sphere';
-import type { Theory } from '../theory/theory';
+import { isCocharacter } from '../theory/flux-lattice';
+import { gaugeGroups, type Theory } from '../theory/theory';
 import type { Analysis } from './analysis';
 
 /** Values of all symbols of a theory at a point, as closed forms. */
@@ -45,9 +46,6 @@ export function resolvePoint(
         message: `\`${name.name}\` is set to \`${value.text}\`, but \`${open[0]}\` has no value.`,
       };
     if (set.has(name.name)) return { kind: 'failure', message: `\`${name.name}\` is set twice.` };
-    if (settable.fluxes.includes(name.name) && !closed.toRational()?.isInteger()) {
-      return { kind: 'failure', message: `The flux \`${name.name}\` has to be an integer; \`${value.text}\` is none.` };
-    }
     set.set(name.name, closed);
   }
   const fluxAxis = free.find(({ name }) => settable.fluxes.includes(name));
@@ -58,6 +56,8 @@ export function resolvePoint(
   const notes: string[] = [];
   const failure = fillUnset(settable, axes, set, unsetCoulomb, notes, used);
   if (failure !== null) return { kind: 'failure', message: failure };
+  const off = offLattice(theory, settable, set);
+  if (off !== null) return { kind: 'failure', message: off };
   const geometry = sphere.geometry(theory);
   const values = (name: string): Form | null => {
     if (axes.has(name)) return null;
@@ -68,6 +68,30 @@ export function resolvePoint(
   };
   return { kind: 'point', point: { values, notes } };
 }
+
+/** Fluxes on which a weight would not be integral, in words; null where there are none. */
+function offLattice(theory: Theory, settable: Settable, set: ReadonlyMap<string, Form>): string | null {
+  for (const { group } of gaugeGroups(theory)) {
+    const own = group.group.independent.map((k) => group.fluxes[k] as string);
+    if (!own.every((name) => settable.fluxes.includes(name) && set.has(name))) continue;
+    const values = group.coordinates.map((name) => {
+      const form = group.dependent.get(name) ?? Form.symbol(name);
+      const flux = (symbol: string): string => group.fluxes[group.coordinates.indexOf(symbol)] ?? symbol;
+      return form.substitute((symbol) => set.get(flux(symbol)) ?? null).toRational();
+    });
+    if (values.every((value) => value !== null) && isCocharacter(group.group, values)) continue;
+    const given = own.map((name) => `\`${name} = ${set.get(name)?.key}\``).join(', ');
+    const broken = own.find((name) => !set.get(name)?.toRational()?.isInteger());
+    if (broken !== undefined && INTEGRAL.includes(group.group.family)) {
+      return `The flux \`${broken}\` has to be an integer; \`${set.get(broken)?.key}\` is none.`;
+    }
+    return `${given} is no flux of ${group.group.name}: a weight of one of its representations would not be an integer on it.`;
+  }
+  return null;
+}
+
+/** Groups whose fluxes are any integers in the printed coordinates. */
+const INTEGRAL: readonly string[] = ['U', 'SU', 'SO', 'USp'];
 
 interface Settable {
   readonly coulomb: readonly string[];

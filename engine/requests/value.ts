@@ -75,6 +75,8 @@ function nonValue(of: string, value: Exclude<PreciseValue, { kind: 'value' }>, l
         of,
         `The argument ${value.argument} cannot be told from a pole or a zero. Give the point exactly, or move it away.`,
       );
+    case 'outside':
+      return failure(of, `${value.why}. Change the charges, or the fluxes.`);
     case 'unset':
       return failure(of, `No value for ${value.names.join(', ')}. Set them with \`at\`.`);
     case 'unreachable':

@@ -29,6 +29,9 @@ export const s2: Sphere = {
   refusals: {
     level: 'there is no Chern-Simons term in two dimensions; `theta` sets the theta angle',
     abelian: 'there is no Chern-Simons term in two dimensions; `theta` sets the theta angle',
+    mixed: 'there is no Chern-Simons term in two dimensions',
+    hyper: 'it would be two chirals, one in the conjugate representation; write them as such',
+    halfhyper: 'with four supercharges matter comes in chirals',
     coupling: 'the gauge coupling drops out of the localised integral on the two-sphere',
   },
   halvesWeights: false,
@@ -56,6 +59,8 @@ export const s2: Sphere = {
   conventions: () => [
     '$n$ is the flux through the sphere; the partition function is $\\frac{1}{|W|}\\sum_n\\int\\prod\\frac{d\\sigma}{2\\pi}\\,' +
       'e^{-4\\pi i\\xi\\,\\mathrm{tr}\\,\\sigma-i\\theta\\,\\mathrm{tr}\\,n}\\,Z_{\\text{1-loop}}(\\sigma,n)$.',
+    'With $k=w(n)$ the literature also writes $\\Gamma(x-\\frac{k}{2})/\\Gamma(1-x-\\frac{k}{2})$ for ' +
+      '$(-1)^{(k+|k|)/2}\\,\\Gamma(x+\\frac{|k|}{2})/\\Gamma(1-x+\\frac{|k|}{2})$.',
     'Constants $1/|W|$, powers of $2\\pi$ and the radius are not included.',
   ],
   conditions: twoSphereConditions,

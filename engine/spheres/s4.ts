@@ -28,6 +28,9 @@ export const s4: Sphere = {
   squashing: [{ name: 'b', symbol: '@b', round: Form.one }],
   options: { gauge: ['coulomb', 'coupling'], flavor: ['mass'] },
   refusals: {
+    mixed: 'there is no Chern-Simons term in four dimensions',
+    chiral: 'with eight supercharges matter comes in hypers, a chiral and its conjugate in each',
+    twisted: 'twisted multiplets are peculiar to two dimensions',
     fi:
       'a simple gauge group has no FI term, and the one of a U(1) breaks the R-symmetry that puts an N = 2 theory on ' +
       'the four-sphere',
@@ -69,7 +72,8 @@ export const s4: Sphere = {
     ...(theory.supersymmetry === 4 && !theory.round
       ? ['The adjoint hypermultiplet has the mass $\\frac{i}{2}(b-b^{-1})$.']
       : []),
-    'The instanton factor $|Z_{\\text{inst}}|^2$ multiplies the integrand and is not included in the one-loop product.',
+    'The instanton factor $|Z_{\\text{inst}}|^2$ multiplies the integrand and is not included; for $U(n)$ and $SU(n)$ its ' +
+      'coefficients are the quantities `instanton1`, `instanton2`, ...',
     "$1/|W|$, the measure, and the constants $\\Upsilon(Q/2)$ and $\\Upsilon'(0)$ are not included.",
   ],
   conditions: fourSphereConditions,

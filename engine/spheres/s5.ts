@@ -32,6 +32,9 @@ export const s5: Sphere = {
   squashing: [1, 2, 3].map((k) => ({ name: `w${k}`, symbol: `@w${k}`, round: Form.one })),
   options: { gauge: ['coulomb', 'level', 'coupling'], flavor: ['mass'] },
   refusals: {
+    mixed: 'mixed cubic levels are not offered',
+    chiral: 'with eight supercharges matter comes in hypers, a chiral and its conjugate in each',
+    twisted: 'twisted multiplets are peculiar to two dimensions',
     fi: 'there is no FI term for vector multiplets on the five-sphere that the localised integral keeps',
     theta: 'the theta angle of USp(2n) is invisible in the perturbative part',
     abelian: 'the cubic level of U(n) is one number; write `level`',

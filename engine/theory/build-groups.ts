@@ -152,8 +152,14 @@ export function buildMixed(
   lines: readonly MixedLine[],
   groups: readonly TheoryGroup[],
   parameters: ReadonlyMap<string, Form>,
+  rules: SphereRules,
   report: Report,
 ): MixedLevel[] {
+  const why = rules.refusals.mixed;
+  if (why !== undefined) {
+    for (const { span } of lines) report(problem('mixed-sphere', span, { sphere: rules.name, why }));
+    return [];
+  }
   return lines.flatMap((line) => {
     const places = line.groups.map((name) => groups.findIndex((group) => group.name === name.name));
     for (const [k, place] of places.entries()) {

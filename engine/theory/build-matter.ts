@@ -93,7 +93,8 @@ function comesInPairs(groups: readonly TheoryGroup[], { representations }: Multi
 }
 
 function kindData(row: MultipletRow, rules: SphereRules): Record<string, string> {
-  return { kind: row.kind, sphere: rules.name, allowed: rules.multiplets.map((word) => `\`${word}\``).join(', ') };
+  const allowed = rules.multiplets.map((word) => `\`${word}\``).join(', ');
+  return { kind: row.kind, sphere: rules.name, allowed, why: rules.refusals[row.kind] ?? '' };
 }
 
 function readRCharge(

@@ -34,7 +34,7 @@ export function buildTheory(
   const report: Report = (diagnostic) => diagnostics.push(diagnostic);
   const geometry = buildGeometry(block.sphere, rules, parameters, report);
   const { groups, backgrounds, couplings } = buildGroups(block.groups, parameters, rules, report);
-  const mixed = buildMixed(block.mixed, groups, parameters, report);
+  const mixed = buildMixed(block.mixed, groups, parameters, rules, report);
   const supersymmetry = buildSupersymmetry(block, rules, report);
   const rows = buildMatter(block, groups, parameters, rules, report);
   const multiplets = rows.flatMap(({ multiplet }) => multiplet ?? []);

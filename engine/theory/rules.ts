@@ -14,7 +14,7 @@ export interface SphereRules {
     readonly gauge: readonly GroupOption['kind'][];
     readonly flavor: readonly GroupOption['kind'][];
   };
-  /** Why an option is not in the list, by its word; for the message. */
+  /** Why an option or a kind of multiplet is not in the list, by its word, and `mixed` where levels do not mix. */
   readonly refusals: Readonly<Record<string, string>>;
   /** True where a half-hyper takes one of each pair of weights, so that its weights have to come in such pairs. */
   readonly halvesWeights: boolean;
