@@ -106,10 +106,10 @@ function phaseText(parameters: readonly Form[], print: Printer): string {
     : `\\frac{i\\pi}{24}${parenthesised(print.form(sum))}`;
 }
 
-/** The argument of s_b that S_2(z) stands for: i (Q/2 - z). */
+/** The argument of s_b that S_2(z) stands for: i (z - Q/2). */
 function ofS2(parameters: readonly Form[], print: Printer): string {
-  if (isRound(parameters)) return 'i(1-z)';
-  return `\\tfrac{i}{2}${parenthesised(`${print.form(capitalQ(parameters))}-2z`)}`;
+  if (isRound(parameters)) return 'i(z-1)';
+  return `\\tfrac{i}{2}${parenthesised(`2z-${asFactor(print.form(capitalQ(parameters)))}`)}`;
 }
 
 function isRound(parameters: readonly Form[]): boolean {

@@ -66,7 +66,9 @@ function collectSources(parts: DocumentParts): Source[] {
 function tableText(table: DocumentParts['table']): string {
   const [header, ...rows] = table;
   if (!header || rows.length === 0) return '';
-  const line = (cells: readonly string[]): string => `${cells.map((cell) => `$${cell}$`).join(' & ')} \\\\`;
+  // `$$` would begin a display.
+  const cellText = (cell: string): string => (cell === '' ? '' : `$${cell}$`);
+  const line = (cells: readonly string[]): string => `${cells.map(cellText).join(' & ')} \\\\`;
   return [
     '\\begin{center}',
     `\\begin{tabular}{${'l'.repeat(header.length)}}`,

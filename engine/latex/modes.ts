@@ -11,8 +11,8 @@ import { NO_WEIGHT, printWeights } from './weights';
 export function modesLatex(groups: readonly TheoryGroup[], towers: readonly ModeTower[]): Piece[] {
   return towers.flatMap((tower) => {
     const printed = tower.weights === null ? [NO_WEIGHT] : printWeights(groups, tower.weights, tower.half);
-    return printed.map(({ sign, weight }) => ({
-      latex: sign + towerLatex(tower, weight),
+    return printed.map(({ indices, choices, weight }) => ({
+      latex: indices + choices + towerLatex(tower, weight),
       from: tower.from,
       expanded: null,
     }));

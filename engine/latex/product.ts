@@ -51,11 +51,10 @@ function gatherPieces(product: readonly Factor<TheoryWeights>[]): Factor<TheoryW
 function pieceLatex(groups: readonly TheoryGroup[], factors: readonly Factor<TheoryWeights>[], style: Style): Piece[] {
   const first = factors[0] as Factor<TheoryWeights>;
   const printed = first.weights === null ? [NO_WEIGHT] : printWeights(groups, first.weights, first.half);
-  const expanded = style.kind === 'modes' ? null : expandedLatex(factors, style);
   return printed.map((weight) => ({
-    latex: weight.sign + factorsLatex(factors, (form) => atPrinted(form, weight), style),
+    latex: weight.indices + weight.choices + factorsLatex(factors, (form) => atPrinted(form, weight), style),
     from: first.from,
-    expanded,
+    expanded: style.kind === 'modes' ? null : expandedLatex(factors, weight, style),
   }));
 }
 
@@ -81,12 +80,9 @@ function factorsLatex(factors: readonly Factor[], at: (argument: Form) => Form, 
   return quotient(above, below);
 }
 
-function expandedLatex(factors: readonly Factor<TheoryWeights>[], style: Style): string | null {
-  const { weights, half } = factors[0] as Factor<TheoryWeights>;
-  if (weights === null) return null;
-  const count = half ? weights.size / 2 : weights.size;
-  if (count < 2 || count > MAXIMAL_EXPANDED) return null;
-  return (half ? weights.half() : weights.weights())
+function expandedLatex(factors: readonly Factor[], { size, weights }: PrintedWeights, style: Style): string | null {
+  if (size < 2 || size > MAXIMAL_EXPANDED) return null;
+  return weights()
     .map((weight) => factorsLatex(factors, (argument) => atWeight(argument, weight), style))
     .join('\\;');
 }

@@ -1,22 +1,35 @@
 import { Form } from '../exact/form';
-import type { IndexPattern, PatternRelation, PatternTerm } from '../lie/index-pattern';
+import { expandPattern, type IndexPattern, type PatternRelation, type PatternTerm } from '../lie/index-pattern';
+import type { Weight } from '../product/factor';
 import type { TheoryGroup } from '../theory/theory';
-import type { TheoryWeights } from '../theory/weights';
+import { type TheoryWeights, weightForms } from '../theory/weights';
 import { EITHER_SIGN } from './form';
 import { placedName, TRACE } from './symbol';
 
 /** A product over weights as it is printed: the product signs, and the weight they run over. */
 export interface PrintedWeights {
-  /** `\prod_{a=1}^{2}\prod_{j=1}^{3}`; empty where the set is a single weight. */
-  readonly sign: string;
+  /** `\prod_{a=1}^{2}\prod_{j=1}^{3}`; empty where there is no index. */
+  readonly indices: string;
+  /** `\prod_{\pm}` where signs are chosen; it stands for all signs under it, whatever they belong to. */
+  readonly choices: string;
   /** w.sigma + w.m with indexed coordinates, as a form in symbols made for printing. */
   readonly weight: Form;
   /** w.n with indexed fluxes. */
   readonly flux: Form;
+  /** Number of weights, and the weights themselves in the coordinates. */
+  readonly size: number;
+  readonly weights: () => readonly Weight[];
 }
 
 /** The weight where there is none: one factor without product sign. */
-export const NO_WEIGHT: PrintedWeights = { sign: '', weight: Form.zero, flux: Form.zero };
+export const NO_WEIGHT: PrintedWeights = {
+  indices: '',
+  choices: '',
+  weight: Form.zero,
+  flux: Form.zero,
+  size: 1,
+  weights: () => [{ position: Form.zero, flux: Form.zero }],
+};
 
 /**
  * Index letters, a different run for each group: i is left to the imaginary unit, b to the squashing, e to exponentials,
@@ -37,9 +50,12 @@ export function printWeights(
       patterns.map((pattern) => {
         const part = printPattern(groups[group] as TheoryGroup, group, pattern);
         return {
-          sign: joinSigns(before.sign, part.sign),
+          indices: before.indices + part.indices,
+          choices: joinChoices(before.choices, part.choices),
           weight: before.weight.add(part.weight),
           flux: before.flux.add(part.flux),
+          size: before.size * part.size,
+          weights: () => before.weights().flatMap((one) => part.weights().map((other) => sumOf(one, other))),
         };
       }),
     );
@@ -47,8 +63,12 @@ export function printWeights(
   return printed;
 }
 
-function joinSigns(a: string, b: string): string {
-  return a === PLUS_MINUS && b === PLUS_MINUS ? a : a + b;
+function sumOf(one: Weight, other: Weight): Weight {
+  return { position: one.position.add(other.position), flux: one.flux.add(other.flux) };
+}
+
+function joinChoices(a: string, b: string): string {
+  return a === b && a === PLUS_MINUS ? a : a + b;
 }
 
 const PLUS_MINUS = '\\prod_{\\pm}';
@@ -65,9 +85,12 @@ function printPattern(group: TheoryGroup, place: number, pattern: IndexPattern):
       }),
     );
   return {
-    sign: indexSigns(group, pattern, letter) + signChoices(pattern),
+    indices: indexSigns(group, pattern, letter),
+    choices: signChoices(pattern),
     weight: sum(stemOf(group)),
     flux: group.role === 'gauge' ? sum(fluxStem(group)) : Form.zero,
+    size: pattern.size,
+    weights: () => weightForms(group, expandPattern(pattern, group.coordinates.length)),
   };
 }
 

@@ -1,5 +1,6 @@
 import { Form } from '../exact/form';
 import { Rational } from '../exact/rational';
+import type { WeightVectors } from '../lie/index-pattern';
 import type { WeightOrbit } from '../lie/orbit';
 import type { Representation } from '../lie/representation';
 import { parseRepresentation } from '../lie/representation';
@@ -103,7 +104,11 @@ function independentRows(group: TheoryGroup, orbit: WeightOrbit, half: boolean):
 }
 
 function orbitForms(group: TheoryGroup, orbit: WeightOrbit, half: boolean): readonly Weight[] {
-  const { denominator, vectors, width } = half ? orbit.halfVectors() : orbit.vectors();
+  return weightForms(group, half ? orbit.halfVectors() : orbit.vectors());
+}
+
+/** Weights of one group in printed coordinates as linear forms on its positions and fluxes. */
+export function weightForms(group: TheoryGroup, { denominator, vectors, width }: WeightVectors): readonly Weight[] {
   const positions = group.coordinates.map((name) => group.dependent.get(name) ?? Form.symbol(name));
   const fluxes = positions.map((form) => form.substitute((name) => Form.symbol(fluxOf(group, name))));
   return Array.from({ length: vectors.length / width }, (_, row) => {
