@@ -73,7 +73,7 @@ export const s4: Sphere = {
       ? ['The adjoint hypermultiplet has the mass $\\frac{i}{2}(b-b^{-1})$.']
       : []),
     'The instanton factor $|Z_{\\text{inst}}|^2$ multiplies the integrand and is not included; for $U(n)$ and $SU(n)$ its ' +
-      'coefficients are the quantities `instanton1`, `instanton2`, ...',
+      'coefficients can be asked for as values: instanton1, instanton2, ...',
     "$1/|W|$, the measure, and the constants $\\Upsilon(Q/2)$ and $\\Upsilon'(0)$ are not included.",
   ],
   conditions: fourSphereConditions,

@@ -172,6 +172,17 @@ describe('N = 4 is a Vandermonde determinant', () => {
     ]);
   });
 
+  // V. Pestun, arXiv:0712.2824, section 4.4: alpha^2 H(i alpha)^2 over the positive roots, 1/H(i w) over the weights.
+  test('the round vector multiplet in H', () => {
+    const of = theory('gauge G = SU(2)', 'matter G', 'hyper q 4*fund');
+    const left = simplify(productOf(s4, of, 'one-loop'), 'functions', s4.geometry(of));
+    const pieces = productLatex(of.groups, left, { kind: 'function', notation: 1 }).map((piece) => piece.latex);
+    expect(pieces).toEqual([
+      '(2\\sigma)^{2}\\,\\left[H(2i\\sigma)\\right]^{2}',
+      '\\frac{1}{\\left[H(i\\sigma)\\right]^{8}}',
+    ]);
+  });
+
   test('on the ellipsoid, at the mass i(b - 1/b)/2 too', () => {
     const lines = ['sphere S4, b = 5/4', 'gauge G = SU(3)'];
     const star = theory(...lines, 'flavor A = U(1)', 'matter G A', 'hyper a adj 1');
