@@ -1,6 +1,8 @@
 import { divideFixed, numberFromFixed, shiftRounded } from '../arithmetic/fixed';
-import type { FixedComplex } from '../arithmetic/fixed-complex';
+import { conjugateComplex, type FixedComplex } from '../arithmetic/fixed-complex';
 import { logBarnesGamma } from './barnes-gamma';
+import type { Estimate } from './euler-maclaurin';
+import { memoiseByKey } from './kernel-memo';
 import type { ExactParameter, PreciseLog } from './special-function';
 import { logTripleSineRound } from './triple-sine-closed';
 import { tripleSineByContour } from './triple-sine-contour';
@@ -11,6 +13,12 @@ export interface SecondRoute {
   readonly route: string;
   readonly log: PreciseLog;
 }
+
+/** Two units of x in the working precision. */
+const ROUNDING = 2n << 16n;
+
+/** log Gamma_2(Q/2) by precision and period. */
+const centers = memoiseByKey<Estimate | null>(16);
 
 /**
  * log Upsilon_b(x) = 2 log Gamma_2(Q/2) - log Gamma_2(x) - log Gamma_2(Q - x) with the double Gamma function of periods b
@@ -24,9 +32,14 @@ export function upsilonSecondRoute(x: FixedComplex, b: ExactParameter, bits: num
   const periods = [real(exact), real(inverse)];
   const lifted = { re: x.re << 16n, im: x.im << 16n };
   const total = exact + inverse;
-  const center = logBarnesGamma(real(total >> 1n), periods, working);
+  const center = centers([working, exact].join('|'), () => logBarnesGamma(real(total >> 1n), periods, working));
   const one = logBarnesGamma(lifted, periods, working);
-  const two = logBarnesGamma({ re: total - lifted.re, im: -lifted.im }, periods, working);
+  // On the middle line, up to the error of x, Q - x is the conjugate of x, and Gamma_2 is real on the real line.
+  const off = 2n * lifted.re - total;
+  const two =
+    -ROUNDING <= off && off <= ROUNDING
+      ? one && { value: conjugateComplex(one.value), error: one.error }
+      : logBarnesGamma({ re: total - lifted.re, im: -lifted.im }, periods, working);
   if (center === null || one === null || two === null) return null;
   const error = 2n * center.error + one.error + two.error;
   const value: PreciseLog = {
