@@ -106,6 +106,7 @@ const site: ViteUserConfig = {
     dir: resolve(top, 'test'),
     include: ['**/*.test.ts'],
     environment: 'node',
+    setupFiles: [resolve(top, 'test/setup.ts')],
   },
 };
 
