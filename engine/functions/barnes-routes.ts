@@ -41,12 +41,14 @@ export function upsilonSecondRoute(x: FixedComplex, b: ExactParameter, bits: num
       ? one && { value: conjugateComplex(one.value), error: one.error }
       : logBarnesGamma({ re: total - lifted.re, im: -lifted.im }, periods, working);
   if (center === null || one === null || two === null) return null;
+  const share = argumentShare(x, [b.approx.re, 1 / b.approx.re], bits);
+  if (share === null) return null;
   const error = 2n * center.error + one.error + two.error;
   const value: PreciseLog = {
     kind: 'value',
     re: shiftRounded(2n * center.value.re - one.value.re - two.value.re, 16),
     im: shiftRounded(-one.value.im - two.value.im, 16),
-    error: (error >> 16n) + 2n + argumentShare(x, [b.approx.re, 1 / b.approx.re], bits),
+    error: (error >> 16n) + 2n + share,
   };
   return { route: 'double Gamma functions', log: value };
 }
@@ -71,16 +73,32 @@ export function tripleSineSecondRoute(x: FixedComplex, w: readonly ExactParamete
   return { route: 'midpoint rule off the real line', log: logTripleSine(x, w, bits, tripleSineByContour) };
 }
 
-/** What one unit in x may do to the logarithm: the growth of its derivative, and the zeros outside 0 < x < |w|. */
-function argumentShare(x: FixedComplex, periods: readonly number[], bits: number): bigint {
-  const total = periods.reduce((sum, w) => sum + w, 0);
-  const volume = periods.reduce((product, w) => product * w, 1);
+/**
+ * What one unit in x may do to the logarithm: the growth of its derivative, and the nearest zero; null where doubles
+ * cannot tell x from a zero.
+ */
+function argumentShare(x: FixedComplex, periods: readonly [number, number], bits: number): bigint | null {
+  const total = periods[0] + periods[1];
   const re = numberFromFixed(x.re, bits);
-  const outside = Math.min(re, total - re);
-  const reach = Math.hypot(re, numberFromFixed(x.im, bits)) + total;
-  const growth = (reach ** (periods.length - 1) * (Math.log(reach + 2) + 4)) / volume;
-  const near = Math.max(2 ** -bits, Math.abs(numberFromFixed(x.im, bits)), outside);
-  return BigInt(Math.ceil(8 * growth + 8 / near));
+  const im = numberFromFixed(x.im, bits);
+  const reach = Math.hypot(re, im) + total;
+  const growth = (reach * (Math.log(reach + 2) + 4)) / (periods[0] * periods[1]);
+  const near = Math.hypot(im, nearestZero(Math.max(-re, re - total), periods));
+  return near <= DOUBLE_ROUNDING * reach ? null : BigInt(Math.ceil(8 * growth + 16 / near));
+}
+
+/** Rounding of a lattice point in doubles, relative to its size. */
+const DOUBLE_ROUNDING = 1e-12;
+
+/** Distance of a real number to the numbers m w1 + n w2, m, n >= 0. */
+function nearestZero(beyond: number, [first, second]: readonly [number, number]): number {
+  let nearest = Math.abs(beyond);
+  for (let m = 0; m * first <= beyond; m++) {
+    const left = beyond - m * first;
+    const off = left / second - Math.round(left / second);
+    nearest = Math.min(nearest, Math.abs(off) * second);
+  }
+  return nearest;
 }
 
 function real(value: bigint): FixedComplex {
