@@ -18,7 +18,7 @@ export interface Piece {
 }
 
 /** More weights than this are not written out. */
-const MAXIMAL_EXPANDED = 24;
+const MAXIMAL_EXPANDED = 300;
 
 export const printer: Printer = { form: formLatex };
 

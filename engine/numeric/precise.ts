@@ -27,6 +27,9 @@ export type PreciseValue =
 /** Which algorithm evaluates the functions: their main one, or the independent second one where there is one. */
 export type Route = 'main' | 'second';
 
+/** Told before each function of a product is evaluated, how many are done and how many there are. */
+export type Report = (done: number, of: number) => void;
+
 /** One function value of a product: equal ones are evaluated once. */
 export interface Entry {
   readonly name: FunctionName;
@@ -44,6 +47,7 @@ export function evaluatePrecise(
   values: (name: string) => Form | null,
   digits: number,
   route: Route = 'main',
+  report: Report = () => undefined,
 ): PreciseValue {
   const entries = collectEntries(product, values);
   const names = [...new Set(entries.flatMap((e) => [e.argument, ...e.parameters].flatMap((f) => f.symbols())))];
@@ -66,7 +70,7 @@ export function evaluatePrecise(
   }
   if (order !== 0) return { kind: order > 0 ? 'zero' : 'pole', order: Math.abs(order) };
   if (meets) return { kind: 'meeting', order: 0 };
-  return sumLogs(entries, digits, route);
+  return sumLogs(entries, digits, route, report);
 }
 
 /** All weights written out at the values, equal arguments collected. */
@@ -82,12 +86,12 @@ export function collectEntries(product: Product, values: (name: string) => Form 
   return [...collected.values()].filter(({ power }) => power !== 0);
 }
 
-function sumLogs(entries: readonly Entry[], digits: number, route: Route): PreciseValue {
+function sumLogs(entries: readonly Entry[], digits: number, route: Route, report: Report): PreciseValue {
   const needed = Math.ceil(digits * Math.log2(10)) + 4;
   let guard = 24;
   while (guard <= MAXIMAL_GUARD) {
     const bits = needed + guard;
-    const attempt = logAt(entries, bits, route);
+    const attempt = logAt(entries, bits, route, report);
     if (attempt.kind === 'refused') return attempt.why;
     if (attempt.kind === 'value') {
       const { log } = attempt;
@@ -107,11 +111,12 @@ type Attempt =
   | { readonly kind: 'again' }
   | { readonly kind: 'refused'; readonly why: PreciseValue };
 
-function logAt(entries: readonly Entry[], bits: number, route: Route): Attempt {
+function logAt(entries: readonly Entry[], bits: number, route: Route, report: Report): Attempt {
   const precision = 4 * bits + 256;
   let sum: Ball = { re: 0n, im: 0n, bits, error: 0n };
   let used: string | null = null;
-  for (const entry of entries) {
+  for (const [done, entry] of entries.entries()) {
+    report(done, entries.length);
     const argument = formFixed(entry.argument, bits);
     if (argument === null) return { kind: 'refused', why: { kind: 'unreachable' } };
     const parameters = entry.parameters.map(exactParameter);

@@ -1,7 +1,7 @@
 import type { Ball } from '../arithmetic/ball';
 import { formatBall } from '../arithmetic/decimal-text';
 import type { ValueRequest } from '../language/tree';
-import { evaluatePrecise, MAXIMAL_DIGITS, type PreciseValue } from '../numeric/precise';
+import { evaluatePrecise, MAXIMAL_DIGITS, type PreciseValue, type Report } from '../numeric/precise';
 import { elementary, namesIn } from '../spheres/quantity';
 import type { TheoryProduct } from '../spheres/sphere';
 import { agreedDigits } from './agreement';
@@ -38,7 +38,8 @@ export function runValue(analysis: Analysis, request: ValueRequest, surroundings
   const resolved = resolvePoint(analysis, sphere, theory, request.at, [], 'error', namesIn(theory, raw));
   if (resolved.kind === 'failure') return failure(of, resolved.message);
   const simple = elementary(sphere, theory, raw, new Map()).product;
-  const value = evaluatePrecise(simple, resolved.point.values, digits);
+  const report = (says: string) => (done: number, of: number) => void surroundings.progress({ done, of, says });
+  const value = evaluatePrecise(simple, resolved.point.values, digits, 'main', report('function values'));
   if (value.kind !== 'value') return nonValue(of, value, quantity.log, resolved.point);
   return {
     kind: 'value',
@@ -46,7 +47,7 @@ export function runValue(analysis: Analysis, request: ValueRequest, surroundings
     notes: resolved.point.notes,
     value: formatBall(quantity.log ? value.log : value.value, digits),
     digits,
-    crossCheck: confirm(raw, simple, resolved.point, value.value, digits),
+    crossCheck: confirm(raw, simple, resolved.point, value.value, digits, report('second route')),
   } satisfies Answer<ValueResult>;
 }
 
@@ -97,12 +98,13 @@ function confirm(
   point: Point,
   value: Ball,
   digits: number,
+  report: Report,
 ): ValueResult['crossCheck'] {
   for (const [product, note] of [
     [raw, 'before simplification'],
     [simple, ''],
   ] as const) {
-    const other = evaluatePrecise(product, point.values, digits, 'second');
+    const other = evaluatePrecise(product, point.values, digits, 'second', report);
     if (other.kind !== 'value') continue;
     if (other.route === null && product === simple) return null;
     const route = [other.route ?? 'the product of all factors', note].filter((part) => part !== '').join(', ');

@@ -1,7 +1,6 @@
 import { analyse, isRequest } from '../../engine/requests/analysis';
 import { run as answer } from '../../engine/requests/run';
-import type { JobRow } from './engine.bench';
-import { timeInTurns } from './timing';
+import { type JobRow, measureJobs } from './engine.bench';
 
 const TWO = `
 theory two
@@ -69,9 +68,5 @@ export function run(): JobRow[] {
       ],
     ];
   });
-  const times = timeInTurns(
-    jobs.map(([, task]) => task),
-    3,
-  );
-  return jobs.map(([name, , limit], k) => ({ name, milliseconds: (times[k] as number) / 1000, limit }));
+  return measureJobs(jobs);
 }

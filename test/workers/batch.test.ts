@@ -46,7 +46,7 @@ describe('exit codes', () => {
     const { theories, spectra, results, problems } = JSON.parse(out);
     expect([theories.length, spectra.length, results.length, problems.length]).toEqual([1, 0, 1, 0]);
     expect(results[0].value.re).toMatch(/^-?0\.\d{25,}$/);
-    expect(error).toBe('1 of 1: value\n');
+    expect(error).toBe('1 of 1: value\n1 of 1: function values\n1 of 1: second route\n');
   });
 
   test('0 for a notebook without requests', () => {
