@@ -13,8 +13,10 @@ import {
   BITS,
   ballOf,
   beyondGrowth,
+  checkAdditive,
   checkExactValue,
   checkOrder,
+  checkPowers,
   checkReflections,
   checkShifts,
   doubleOf,
@@ -189,6 +191,20 @@ describe.each(all.map((declared) => [declared.name, declared] as const))('%s', (
     expect(declared.growth.every(({ direction }) => !direction.isZero())).toBe(true);
   });
 
+  test('sums of arguments, and powers of numbers among them', () => {
+    const logarithms = [2, 3, 5].map((n) => Form.call('log', Form.number(n)));
+    let taken = 0;
+    fc.assert(
+      fc.property(anyPoint, anyPoint, fc.array(fc.integer({ min: -3, max: 3 }), { maxLength: 3 }), (x, y, powers) => {
+        expect(() => checkAdditive(declared, x, y)).not.toThrow();
+        const sum = Form.sum([x, ...powers.map((n, k) => (logarithms[k] as Form).scale(n))]);
+        if (!isDiscrete(declared)) taken += checkPowers(declared, sum);
+      }),
+      { numRuns: 20 },
+    );
+    expect(taken > 0).toBe(declared.powers !== undefined);
+  });
+
   test('exact values, where there are some, are the values', () => {
     const twelfths = Array.from({ length: 49 }, (_, k) => Form.number(Rational.of(k - 24, 12)));
     const special = [...twelfths, ...twelfths.map((x) => Form.i.mul(x))];
@@ -248,6 +264,16 @@ describe('a law that does not hold is caught', () => {
     expect(() => checkOrder(hyperbolicSine, Form.i, [], 2)).toThrow(/order/);
     expect(() => checkOrder(hyperbolicSine, Form.i.scale(Rational.of(1, 2)), [], 1)).toThrow(/order/);
     expect(() => checkOrder(doubleSine, Form.i.neg(), [Form.one], 2)).toThrow(/order/);
+  });
+
+  test('a wrong sum and a wrong power', () => {
+    const { exponential } = functions;
+    const two = Form.call('log', Form.number(2));
+    expect(checkPowers(exponential, x.add(two))).toBe(1);
+    const halved = broken(exponential, { additive: (sum) => sum.scale(Rational.of(1, 2)) });
+    expect(() => checkAdditive(halved, x, x)).toThrow(/sum/);
+    const forgetful = broken(exponential, { powers: (sum) => ({ rest: sum.sub(two), bases: [] }) });
+    expect(() => checkPowers(forgetful, x.add(two))).toThrow(/powers/);
   });
 
   test('a wrong growth and a wrong exact value', () => {

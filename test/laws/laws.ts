@@ -142,6 +142,29 @@ export function checkShifts(declared: SpecialFunction, x: Form, parameters: read
   }
 }
 
+/** f(x) f(y) = f(x + y), and the shortest form of the sum has the same value. */
+export function checkAdditive(declared: SpecialFunction, x: Form, y: Form): void {
+  const { additive } = declared;
+  if (additive === undefined) return;
+  for (const both of [x.add(y), additive(x.add(y))]) {
+    const sum = sumOf([entry(declared, both, [], 1), entry(declared, x, [], -1), entry(declared, y, [], -1)]);
+    expectVanishing(sum, `${declared.name}: sum of ${x} and ${y}`);
+  }
+}
+
+/** f(x) is f of the rest times the powers taken out; answers how many there are. */
+export function checkPowers(declared: SpecialFunction, x: Form): number {
+  const taken = declared.powers?.(x);
+  if (taken === undefined) return 0;
+  const sum = sumOf([
+    entry(declared, x, [], 1),
+    entry(declared, taken.rest, [], -1),
+    ...taken.bases.map(({ base, exponent }) => entry(functions.linear, base, [], -exponent)),
+  ]);
+  expectVanishing(sum, `${declared.name}: powers out of ${x}`);
+  return taken.bases.length;
+}
+
 /** The exact value at a special argument, where there is one. */
 export function checkExactValue(declared: SpecialFunction, x: Form, parameters: readonly Form[]): boolean {
   const exact = declared.exactValue?.(x, parameters) ?? null;

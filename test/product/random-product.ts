@@ -120,7 +120,9 @@ const weights = fc.oneof(
 
 export const anyFactor: fc.Arbitrary<AnyFactor> = fc
   .tuple(
-    fc.constantFrom<FunctionName[]>('doubleSine', 'doubleSine', 'hyperbolicSine', 'hyperbolicCosine'),
+    fc.constantFrom<FunctionName[]>(
+      ...(['doubleSine', 'doubleSine', 'hyperbolicSine', 'hyperbolicCosine', 'linear', 'exponential'] as const),
+    ),
     weights,
     power,
     fc.boolean(),
