@@ -33,6 +33,7 @@ export const doubleSine: SpecialFunction = {
   spelling: 'doublesine',
   parameters: ['b'],
   reflections: [{ center: () => Form.zero, power: -1, sign: 1 }],
+  mirror: (x) => x.conjugate().neg(),
   shifts: [
     { step: ([b]) => Form.i.mul(b as Form), quotient: (x, [b]) => [inverseCosh(x, b as Form)] },
     { step: ([b]) => Form.i.div(b as Form), quotient: (x, [b]) => [inverseCosh(x, (b as Form).inverse())] },

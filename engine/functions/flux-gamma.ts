@@ -20,6 +20,7 @@ export const fluxGamma: SpecialFunction = {
   spelling: '',
   parameters: ['n'],
   reflections: [{ center: () => HALF, power: -1, sign: 1 }],
+  mirror: (x) => x.conjugate(),
   shifts: [
     {
       step: () => Form.one,

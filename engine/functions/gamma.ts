@@ -16,6 +16,7 @@ export const gamma: SpecialFunction = {
   spelling: 'gamma',
   parameters: [],
   reflections: [],
+  mirror: (x) => x.conjugate(),
   shifts: [{ step: () => Form.one, quotient: (x) => [{ name: 'linear', argument: x, parameters: [], power: 1 }] }],
   zeros: [{ kind: 'pole', start: () => Form.zero, steps: () => [Form.one.neg()] }],
   growth: [],

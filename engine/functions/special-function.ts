@@ -139,6 +139,11 @@ export interface SpecialFunction {
   readonly reflections: readonly Reflection[];
   readonly shifts: readonly Shift[];
   /**
+   * The point at which log f is the complex conjugate of log f(x), for real parameters: x conjugated, or minus that. Absent:
+   * none is declared.
+   */
+  readonly mirror?: (x: Form) => Form;
+  /**
    * Where f(x) f(y) = f(x + y) and f(0) = 1: brings a sum of arguments to its shortest form with the same value.
    * Factors of such a function are collected into one.
    */

@@ -20,6 +20,7 @@ export const tripleSine: SpecialFunction = {
   spelling: 'triplesine',
   parameters: ['w1', 'w2', 'w3'],
   reflections: [{ center: (w) => total(w).mul(HALF), power: 1, sign: 1 }],
+  mirror: (x) => x.conjugate(),
   shifts: [0, 1, 2].map((index) => ({
     step: (w: readonly Form[]) => w[index] as Form,
     quotient: (x: Form, w: readonly Form[]) => [

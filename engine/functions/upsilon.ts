@@ -22,6 +22,7 @@ export const upsilon: SpecialFunction = {
   parameters: ['b'],
   reflections: [{ center: ([b]) => half(b as Form), power: 1, sign: 1 }],
   exactValue: (x, [b]) => (x.equals(half(b as Form)) ? Form.one : null),
+  mirror: (x) => x.conjugate(),
   shifts: [
     { step: ([b]) => b as Form, quotient: (x, [b]) => quotient(x, b as Form, Form.call('log', b as Form)) },
     {

@@ -1,4 +1,4 @@
-import { addBalls, type Ball, expBall, multiplyBallByInteger } from '../arithmetic/ball';
+import { addBalls, type Ball, expBall } from '../arithmetic/ball';
 import { formDouble } from '../arithmetic/form-double';
 import { formFixed } from '../arithmetic/form-fixed';
 import type { Form } from '../exact/form';
@@ -86,7 +86,30 @@ export function collectEntries(product: Product, values: (name: string) => Form 
   return [...collected.values()].filter(({ power }) => power !== 0);
 }
 
-function sumLogs(entries: readonly Entry[], digits: number, route: Route, report: Report): PreciseValue {
+/** A function value and the powers of it and of its complex conjugate in a product. */
+interface Shared extends Entry {
+  readonly conjugatePower: number;
+}
+
+/** Entries at mirrored points, f(x)^p f(mirror x)^q, share one evaluation; periods have to be real. */
+function shareMirrored(entries: readonly Entry[]): Shared[] {
+  const shared = new Map<string, Shared>();
+  for (const entry of entries) {
+    const { name, argument, parameters } = entry;
+    const periods = parameters.map((period) => period.key).join('|');
+    const real = parameters.every((period) => period.conjugate().equals(period));
+    const mirrored = real ? functions[name].mirror?.(argument) : undefined;
+    const partner = mirrored && shared.get([name, mirrored.key, periods].join('|'));
+    if (partner) {
+      const key = [name, partner.argument.key, periods].join('|');
+      shared.set(key, { ...partner, conjugatePower: partner.conjugatePower + entry.power });
+    } else shared.set([name, argument.key, periods].join('|'), { ...entry, conjugatePower: 0 });
+  }
+  return [...shared.values()];
+}
+
+function sumLogs(found: readonly Entry[], digits: number, route: Route, report: Report): PreciseValue {
+  const entries = shareMirrored(found);
   const needed = Math.ceil(digits * Math.log2(10)) + 4;
   let guard = 24;
   while (guard <= MAXIMAL_GUARD) {
@@ -111,7 +134,7 @@ type Attempt =
   | { readonly kind: 'again' }
   | { readonly kind: 'refused'; readonly why: PreciseValue };
 
-function logAt(entries: readonly Entry[], bits: number, route: Route, report: Report): Attempt {
+function logAt(entries: readonly Shared[], bits: number, route: Route, report: Report): Attempt {
   const precision = 4 * bits + 256;
   let sum: Ball = { re: 0n, im: 0n, bits, error: 0n };
   let used: string | null = null;
@@ -128,8 +151,14 @@ function logAt(entries: readonly Entry[], bits: number, route: Route, report: Re
     if (log.kind !== 'value') {
       return { kind: 'refused', why: { kind: log.kind, order: log.order * Math.abs(entry.power) } };
     }
-    const term: Ball = { re: log.re, im: log.im, bits, error: log.error };
-    sum = addBalls(sum, multiplyBallByInteger(term, BigInt(entry.power), precision), precision);
+    const { power, conjugatePower } = entry;
+    const term: Ball = {
+      re: BigInt(power + conjugatePower) * log.re,
+      im: BigInt(power - conjugatePower) * log.im,
+      bits,
+      error: BigInt(Math.abs(power) + Math.abs(conjugatePower)) * log.error,
+    };
+    sum = addBalls(sum, term, precision);
   }
   return { kind: 'value', log: sum, route: used };
 }

@@ -15,6 +15,7 @@ import {
   beyondGrowth,
   checkAdditive,
   checkExactValue,
+  checkMirror,
   checkOrder,
   checkPowers,
   checkReflections,
@@ -54,6 +55,17 @@ describe.each(all.map((declared) => [declared.name, declared] as const))('%s', (
       { numRuns: 25 },
     );
   });
+
+  if (declared.mirror) {
+    test('complex conjugation', () => {
+      fc.assert(
+        fc.property(anyPoint, parameters, (x, periods) => {
+          expect(checkMirror(declared, x, periods)).toBe(true);
+        }),
+        { numRuns: 25 },
+      );
+    });
+  }
 
   if (!isDiscrete(declared)) {
     test('zeros and poles, with their orders', () => {
@@ -238,6 +250,11 @@ describe('a law that does not hold is caught', () => {
     for (const one of wrong) {
       expect(() => checkReflections(broken(doubleSine, { reflections: [one] }), x, b)).toThrow(/reflection/);
     }
+  });
+
+  test('a mirror with the wrong sign', () => {
+    expect(checkMirror(doubleSine, x, b)).toBe(true);
+    expect(() => checkMirror(broken(doubleSine, { mirror: (y) => y.conjugate() }), x, b)).toThrow(/mirrored/);
   });
 
   test('a shift of the wrong sign or step', () => {

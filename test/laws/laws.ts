@@ -130,6 +130,18 @@ export function checkReflections(declared: SpecialFunction, x: Form, parameters:
   }
 }
 
+/** log f at the mirrored point is the conjugate of log f(x); false where no such point is declared. */
+export function checkMirror(declared: SpecialFunction, x: Form, parameters: readonly Form[]): boolean {
+  const mirrored = declared.mirror?.(x);
+  if (mirrored === undefined) return false;
+  const [here, there] = [x, mirrored].map((point) => ballOf(declared, point, parameters)) as [Ball | null, Ball | null];
+  if (here !== null && there !== null) {
+    const { re, im, error } = subtractBalls(there, { ...here, im: -here.im }, 4 * BITS);
+    if (re * re + im * im > error * error) throw new Error(`${declared.name}: mirrored ${x} is off by (${re}, ${im})`);
+  }
+  return true;
+}
+
 /** f(x + step) = f(x) times the quotient. */
 export function checkShifts(declared: SpecialFunction, x: Form, parameters: readonly Form[]): void {
   for (const { step, quotient } of declared.shifts) {
