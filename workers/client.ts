@@ -1,13 +1,15 @@
 import { proxy, type Remote, releaseProxy, wrap } from 'comlink';
 import type { LatexOut } from '../engine/requests/document';
-import type { FailureResult, PlotResult, Result } from '../engine/requests/result';
+import type { FailureResult, PlotResult, Progress, Result } from '../engine/requests/result';
 import type { EngineApi } from './api';
+import { createStopToken, type StopToken } from './stop-token';
 import type { EngineClient } from './types';
 
 /** A worker and the way to it; `end` stops it at once, whatever it is doing. */
 export interface EngineConnection {
   readonly remote: Remote<EngineApi>;
   readonly end: () => void;
+  readonly newToken: () => StopToken;
   /** Called when the worker dies of itself. */
   readonly onCrash: (callback: () => void) => void;
 }
@@ -17,6 +19,8 @@ type Kind = 'outline' | 'plot' | 'hover';
 
 /** A call that takes longer than this has the worker replaced: nothing that a keystroke asks for needs as long. */
 const STUCK_AFTER_MILLISECONDS = 20_000;
+/** What is stopped ends by itself, between two function values, and keeps its tables; after this long it is ended. */
+const ENDED_AFTER_MILLISECONDS = 4_000;
 
 /**
  * The page's way to the engine. Two workers: one answers keystrokes and sliders, the other computes requests, so that
@@ -43,19 +47,13 @@ export function createEngineClient(connect: () => EngineConnection = connectWork
       newest<PlotResult | FailureResult | null>('plot', async (api) => api.plotFast(text, key, overrides)),
     hover: (text, offset) => newest('hover', (api) => api.hover(text, offset)),
     run: (text, key, _revision, onProgress, signal) => {
-      const work = async () => {
-        if (signal.aborted) return null;
-        const stop = () => slow.restart();
-        signal.addEventListener('abort', stop, { once: true });
-        try {
-          return await slow.call<Result | null>(async (api) => api.run(text, key, proxy(onProgress)), null);
-        } finally {
-          signal.removeEventListener('abort', stop);
-        }
-      };
+      const stopped = new Promise<null>((resolve) => {
+        signal.addEventListener('abort', () => resolve(null), { once: true });
+      });
+      const work = async () => (signal.aborted ? null : slow.run(text, key, onProgress, signal));
       const result: Promise<Result | null> = queue.then(work, work);
       queue = result.catch(() => undefined);
-      return result;
+      return Promise.race([result, stopped]);
     },
     document: async (text, name, form, options) => {
       const out = await quick.ask<LatexOut>(async (api) => api.document(text, name, form, options.notation[name] ?? 0));
@@ -110,6 +108,29 @@ class Channel {
     return second;
   }
 
+  /** One request. When the signal aborts, the work is asked to end, and ended if it does not. */
+  async run(
+    text: string,
+    key: string,
+    onProgress: (progress: Progress) => void,
+    signal: AbortSignal,
+  ): Promise<Result | null> {
+    const { token, stop } = this.#open().newToken();
+    let timer: ReturnType<typeof setTimeout> | null = null;
+    const end = () => {
+      stop();
+      timer = setTimeout(() => this.restart(), ENDED_AFTER_MILLISECONDS);
+    };
+    signal.addEventListener('abort', end, { once: true });
+    try {
+      return await this.call<Result | null>(async (api) => api.run(text, key, token, proxy(onProgress)), null);
+    } finally {
+      signal.removeEventListener('abort', end);
+      if (timer !== null) clearTimeout(timer);
+      stop();
+    }
+  }
+
   restart(): void {
     this.end();
     for (const callback of this.#restarts) callback();
@@ -141,6 +162,7 @@ function connectWorker(): EngineConnection {
   return {
     remote: wrap<EngineApi>(worker),
     end: () => worker.terminate(),
+    newToken: createStopToken,
     onCrash: (callback) => {
       worker.addEventListener('error', callback);
       worker.addEventListener('messageerror', callback);

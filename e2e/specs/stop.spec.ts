@@ -18,11 +18,15 @@ value gamma(1/3), 20 digits
 
 test('long work can be stopped; what waits behind it is done, and it can be started again', async ({ page }) => {
   const notebook = new NotebookPage(page);
+  const workers: string[] = [];
+  page.on('worker', (worker) => workers.push(worker.url()));
   await notebook.openText(text);
   const heavy = notebook.card(/^value one-loop/);
   await heavy.getByRole('button', { name: 'Stop' }).click();
   await expect(heavy.getByText(/^Stopped/)).toBeVisible();
   await expect(notebook.card(/^value gamma/).locator('[data-value]')).toContainText('2.67893');
+  // The stopped work ended by itself: its worker, with its tables, is still the same.
+  expect(workers.length).toBe(2);
   await heavy.getByRole('button', { name: 'Start again' }).click();
   await expect(heavy.getByRole('progressbar')).toBeVisible();
   // The page stays at hand meanwhile.

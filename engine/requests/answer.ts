@@ -9,6 +9,9 @@ export interface Surroundings {
   readonly digits: number;
 }
 
+/** Thrown out of a request whose work is no longer wanted. */
+export class Unwanted extends Error {}
+
 /** What an answer consists of besides the fields that `run` adds. */
 export type Answer<R extends Result = Result> = R extends Result ? Omit<R, 'line' | 'request' | 'seconds'> : never;
 

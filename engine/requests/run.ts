@@ -9,7 +9,11 @@ import { requestKey, requestText } from './request-text';
 import type { Result } from './result';
 import { runValue } from './value';
 
-/** Answers one request of a notebook. Never throws on what a user typed: what cannot be done is a failure in words. */
+/**
+ * Answers one request of a notebook. Never throws on what a user typed: what cannot be done is a failure in words.
+ *
+ * @throws Unwanted where `surroundings.progress` says that the work is no longer wanted.
+ */
 export function run(analysis: Analysis, request: Request, surroundings: Surroundings): Result {
   const start = surroundings.now();
   const answer = guarded(() => runByKind(analysis, request, surroundings), request.kind);

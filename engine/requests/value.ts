@@ -6,7 +6,7 @@ import { elementary, namesIn } from '../spheres/quantity';
 import type { TheoryProduct } from '../spheres/sphere';
 import { agreedDigits } from './agreement';
 import type { Analysis } from './analysis';
-import { type Answer, failure, type Surroundings } from './answer';
+import { type Answer, failure, type Surroundings, Unwanted } from './answer';
 import { coefficientOrder, runCoefficient } from './coefficient';
 import { runDeterminant } from './determinant';
 import { functionValue } from './function-value';
@@ -38,7 +38,9 @@ export function runValue(analysis: Analysis, request: ValueRequest, surroundings
   const resolved = resolvePoint(analysis, sphere, theory, request.at, [], 'error', namesIn(theory, raw));
   if (resolved.kind === 'failure') return failure(of, resolved.message);
   const simple = elementary(sphere, theory, raw, new Map()).product;
-  const report = (says: string) => (done: number, of: number) => void surroundings.progress({ done, of, says });
+  const report = (says: string) => (done: number, of: number) => {
+    if (!surroundings.progress({ done, of, says })) throw new Unwanted();
+  };
   const value = evaluatePrecise(simple, resolved.point.values, digits, 'main', report('function values'));
   if (value.kind !== 'value') return nonValue(of, value, quantity.log, resolved.point);
   return {

@@ -1,94 +1,20 @@
-import { expose, wrap } from 'comlink';
-import { afterEach, describe, expect, test, vi } from 'vitest';
+import { describe, expect, test, vi } from 'vitest';
 import type { Progress } from '../../engine/requests/result';
-import { createEngineApi, type EngineApi } from '../../workers/api';
-import { createEngineClient, type EngineConnection } from '../../workers/client';
-import type { EngineClient } from '../../workers/types';
+import { bench, engine, gate, keyOf, options, PLOT, settle, silent, TEXT } from './client-bench';
 
 /*
  * The page's client over real message channels, with the engine or a stand-in at the other end. What it promises stands
  * in workers/types.ts; there is no outside source.
  */
-const open: (() => void)[] = [];
-
-afterEach(() => {
-  vi.useRealTimers();
-  for (const close of open.splice(0)) close();
-});
-
-interface Bench {
-  readonly client: EngineClient;
-  /** Connections in the order they were made. */
-  readonly connections: { ended: boolean; crash: () => void }[];
-  readonly restarts: { count: number };
-}
-
-/** A client whose workers are message channels with `api` behind them; a new one for each connection. */
-function bench(api: () => object): Bench {
-  const connections: Bench['connections'] = [];
-  const restarts = { count: 0 };
-  const client = createEngineClient((): EngineConnection => {
-    const { port1, port2 } = new MessageChannel();
-    expose(api(), port2);
-    const close = () => {
-      port1.close();
-      port2.close();
-    };
-    open.push(close);
-    const state = { ended: false, crash: () => {} };
-    connections.push(state);
-    return {
-      remote: wrap<EngineApi>(port1),
-      end: () => {
-        state.ended = true;
-        close();
-      },
-      onCrash: (callback) => {
-        state.crash = () => {
-          close();
-          callback();
-        };
-      },
-    };
-  });
-  client.onRestart(() => restarts.count++);
-  open.push(() => client.dispose());
-  return { client, connections, restarts };
-}
-
-const engine = () => createEngineApi(() => 0);
-const TEXT =
-  'theory t\n  sphere S3\n  gauge G = U(1)\n  matter G R\n  chiral q 1 1/3\n\nvalue q of t at sigma = 1, 10 digits\n';
-const PLOT = 'let a = 1 in 0 .. 2\n\nplot gamma(x+a) over x = 1 .. 2\n';
-const silent = () => {};
-const options = { notation: {} };
-
-/** An answer that comes when it is told to. */
-function gate<T>(): { promise: Promise<T>; open: (value: T) => void } {
-  let resolve: (value: T) => void = () => {};
-  const promise = new Promise<T>((done) => {
-    resolve = done;
-  });
-  return { promise, open: resolve };
-}
-
-/** Lets messages in flight arrive. */
-const settle = () => new Promise((resolve) => setTimeout(resolve, 20));
-
-async function keyOf(client: EngineClient, text: string): Promise<string> {
-  const outline = await client.outline(text, options, 1);
-  const key = outline?.cards.flatMap((card) => (card.kind === 'request' ? [card.key] : []))[0];
-  if (key === undefined) throw new Error('No request.');
-  return key;
-}
-
 describe('answers of the engine', () => {
   test('are the same with a channel between as without', async () => {
     const { client } = bench(engine);
     const direct = engine();
     const key = await keyOf(client, TEXT);
     expect(await client.outline(TEXT, options, 1)).toEqual(direct.outline(TEXT, {}));
-    expect(await client.run(TEXT, key, 1, silent, new AbortController().signal)).toEqual(direct.run(TEXT, key, silent));
+    expect(await client.run(TEXT, key, 1, silent, new AbortController().signal)).toEqual(
+      direct.run(TEXT, key, 'token', silent),
+    );
     expect(await client.hover(TEXT, TEXT.indexOf('U(1)'))).toEqual(direct.hover(TEXT, TEXT.indexOf('U(1)')));
     expect(await client.representations('SU(3)', 8)).toEqual(direct.representations('SU(3)', 8));
     expect((await client.document(TEXT, 't', 'functions', options)).snippet).toContain('s_{b=1}');
@@ -110,7 +36,7 @@ describe('answers of the engine', () => {
   test('progress comes through', async () => {
     const steps: Progress[] = [];
     const { client } = bench(() => ({
-      run: async (_text: string, _key: string, progress: (step: Progress) => void) => {
+      run: async (_text: string, _key: string, _token: string, progress: (step: Progress) => void) => {
         progress({ done: 1, of: 2, says: 'half' });
         await settle();
         return null;
@@ -162,91 +88,6 @@ describe('late answers are dropped', () => {
     const { client } = bench(() => ({ outline: (text: string) => text }));
     expect(await client.outline('one', options, 1)).toBe('one');
     expect(await client.outline('two', options, 2)).toBe('two');
-  });
-});
-
-describe('stopping', () => {
-  const endless = () => ({ run: () => new Promise(() => {}), outline: (text: string) => text });
-
-  test('ends a run with null, and its worker alone', async () => {
-    const { client, connections, restarts } = bench(endless);
-    expect(await client.outline('text', options, 1)).toBe('text');
-    const stop = new AbortController();
-    const run = client.run(TEXT, 'k', 1, silent, stop.signal);
-    await settle();
-    expect(connections.map(({ ended }) => ended)).toEqual([false, false]);
-    stop.abort();
-    expect(await run).toBeNull();
-    expect(connections.map(({ ended }) => ended)).toEqual([false, true]);
-    expect(restarts.count).toBe(1);
-    expect(await client.outline('text', options, 2)).toBe('text');
-    expect(connections.length).toBe(2);
-  });
-
-  test('the next run has a new worker', async () => {
-    let made = 0;
-    const { client } = bench(() => {
-      const own = ++made;
-      return { run: () => (own === 1 ? new Promise(() => {}) : `from worker ${own}`) };
-    });
-    const stop = new AbortController();
-    const first = client.run(TEXT, 'k', 1, silent, stop.signal);
-    const second = client.run(TEXT, 'l', 1, silent, new AbortController().signal);
-    await settle();
-    stop.abort();
-    expect(await first).toBeNull();
-    expect(await second).toBe('from worker 2');
-  });
-
-  test('a run that is stopped before its turn is never begun', async () => {
-    const begun: string[] = [];
-    const hold = gate<null>();
-    const { client } = bench(() => ({
-      run: (_text: string, key: string) => {
-        begun.push(key);
-        return hold.promise;
-      },
-    }));
-    const stop = new AbortController();
-    const first = client.run(TEXT, 'first', 1, silent, new AbortController().signal);
-    const second = client.run(TEXT, 'second', 1, silent, stop.signal);
-    await settle();
-    stop.abort();
-    await settle();
-    expect(begun).toEqual(['first']);
-    hold.open(null);
-    expect(await second).toBeNull();
-    await first;
-    expect(begun).toEqual(['first']);
-  });
-
-  test('runs go one after the other', async () => {
-    const gates = [gate<string>(), gate<string>()];
-    let begun = 0;
-    const { client } = bench(() => ({ run: () => gates[begun++]?.promise }));
-    const runs = ['a', 'b'].map((key) => client.run(TEXT, key, 1, silent, new AbortController().signal));
-    await settle();
-    expect(begun).toBe(1);
-    gates[0]?.open('one');
-    expect(await runs[0]).toBe('one');
-    await settle();
-    expect(begun).toBe(2);
-    gates[1]?.open('two');
-    expect(await runs[1]).toBe('two');
-  });
-
-  test('a run that rejects does not hold up the next', async () => {
-    let calls = 0;
-    const { client } = bench(() => ({
-      run: () => {
-        if (++calls === 1) throw new Error('a defect');
-        return 'well';
-      },
-    }));
-    const first = client.run(TEXT, 'a', 1, silent, new AbortController().signal);
-    const second = client.run(TEXT, 'b', 1, silent, new AbortController().signal);
-    await expect(first).rejects.toThrow('a defect');
-    expect(await second).toBe('well');
   });
 });
 
