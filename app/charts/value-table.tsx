@@ -1,6 +1,7 @@
 import { useState } from 'react';
 import type { PlotResult } from '../../engine/requests/result';
 import { numbered } from '../state/numbered';
+import numbers from '../styles/number-table.module.css';
 import { symbolText } from './symbol-text';
 import { readoutText } from './ticks';
 import styles from './value-table.module.css';
@@ -22,7 +23,7 @@ export function ValueTable({ result }: { readonly result: PlotResult }) {
     <details className={styles.values} onToggle={(event) => setOpened(event.currentTarget.open)}>
       <summary>Table of values</summary>
       {opened ? (
-        <div className={styles.scroll}>{result.axes.length > 1 ? mapTable(result) : curveTable(result)}</div>
+        <div className={numbers.scroll}>{result.axes.length > 1 ? mapTable(result) : curveTable(result)}</div>
       ) : null}
     </details>
   );

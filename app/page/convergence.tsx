@@ -1,4 +1,5 @@
 import type { DecimalComplex, ValueResult } from '../../engine/requests/result';
+import numbers from '../styles/number-table.module.css';
 import styles from './convergence.module.css';
 import { errorText } from './digits';
 
@@ -9,8 +10,8 @@ export function Convergence({ rows }: { readonly rows: Rows }) {
   return (
     <details className={styles.convergence}>
       <summary>Products cut off, and how they converge</summary>
-      <div className={styles.scroll}>
-        <table className={styles.table}>
+      <div className={numbers.scroll}>
+        <table className={numbers.table}>
           <thead>
             <tr>
               <th scope="col">cut-off</th>
