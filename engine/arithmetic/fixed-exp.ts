@@ -1,9 +1,8 @@
 import { numberFromFixed, shiftRounded } from './fixed';
 import { ln2Fixed } from './fixed-constants';
 import {
-  chunkBits,
+  exponentialChunk,
   exponentialTerms,
-  inverseFactorials,
   LONG_BITS,
   planPowers,
   planSeries,
@@ -21,15 +20,23 @@ export interface ScaledFixed {
 /** Extra bits of ln 2 in the argument reduction; exponents up to 2^40 then cost less than one working ulp. */
 const REDUCTION_BITS = 44;
 
+/** Leading bits of a remainder that choose the table entries and the tail of the series: an exact double. */
+const TOP_BITS = 52;
+
 interface ExponentialTables {
   readonly chunk: number;
   /** e^(i 2^-(chunk l)), l = 1, 2, 3. */
   readonly levels: readonly [readonly bigint[], readonly bigint[], readonly bigint[]];
-  readonly terms: number;
+  /** Shifts as big integers, which are dear to make: working, working - TOP_BITS. */
+  readonly shift: bigint;
+  readonly topShift: bigint;
+  /** 2^(3 chunk). */
+  readonly cells: number;
 }
 
+/** e^(i 2^-place), i < count; each entry off by less than 1 ulp. */
 function powerTable(working: number, place: number, count: number): bigint[] {
-  // Repeated multiplication with 32 more bits: count < 2^9 products err by less than 2^11 ulps of 2^-(working + 32).
+  // Repeated multiplication with 32 more bits: count < 2^12 products err by less than 2^14 ulps of 2^-(working + 32).
   const bits = working + 32;
   const shift = BigInt(bits);
   const one = 1n << shift;
@@ -47,7 +54,7 @@ function powerTable(working: number, place: number, count: number): bigint[] {
 }
 
 const exponentialTables = memoiseBounded(16, (working: number): ExponentialTables => {
-  const chunk = chunkBits(working);
+  const chunk = exponentialChunk(working);
   const count = 1 << chunk;
   return {
     chunk,
@@ -56,74 +63,150 @@ const exponentialTables = memoiseBounded(16, (working: number): ExponentialTable
       powerTable(working, 2 * chunk, count),
       powerTable(working, 3 * chunk, count),
     ],
-    terms: exponentialTerms(working, 3 * chunk),
+    shift: BigInt(working),
+    topShift: BigInt(working - TOP_BITS),
+    cells: 2 ** (3 * chunk),
   };
 });
 
 const exponentialPlan = memoiseBounded(16, (working: number) =>
-  planSeries(exponentialTerms(working, 3 * chunkBits(working)), 1n, (k) => BigInt(k)),
+  planSeries(exponentialTerms(working, 3 * exponentialChunk(working)), 1n, (k) => BigInt(k)),
 );
 
-/** e^y for 0 <= y < 2^-(3 chunk); error below 8 ulps. */
-function exponentialOfRest(y: bigint, working: number, terms: number): bigint {
+/** Taylor series of exp at 0 <= y < 2^-reduction: short operands first. */
+interface ShortSeries {
+  /** 1/0!, ..., 1/(k-1)! with the working bits, each off by less than 1 ulp, the first two exact. */
+  readonly inverse: readonly bigint[];
+  /** 1/k!, 1/(k+1)!, ... as doubles. */
+  readonly tail: readonly number[];
+  /** 2^tailBits, and the tail is rounded to tailBits fraction bits, so that it is an exact double below 2^53. */
+  readonly tailScale: number;
+  readonly tailShift: bigint;
+}
+
+/**
+ * From the power k on where 2^(-reduction k)/k! 2^-52 is below half a working ulp, the rest of the series
+ * y^k (1/k! + y/(k+1)! + ...) is right with its bracket in doubles (each of its roundings is 2^-53 relative, and those of the
+ * higher terms carry y < 2^-20), and with a y known to 2^-52 there.
+ */
+const shortSeries = memoiseBounded(16, (working: number): ShortSeries => {
+  const reduction = 3 * exponentialChunk(working);
+  let first = 2;
+  let log2Factorial = 1;
+  while (reduction * first + log2Factorial + 52 < working + 1) log2Factorial += Math.log2(++first);
+  const tailBits = 52 + Math.floor(log2Factorial);
+  const inverse: bigint[] = [];
+  const shift = BigInt(working);
+  for (let k = 0, factorial = 1n; k < first; factorial *= BigInt(++k)) inverse.push((1n << shift) / factorial);
+  const tail: number[] = [];
+  for (let k = 1, value = 1; k < first + 4; k++) {
+    value /= k;
+    if (k >= first) tail.push(value);
+  }
+  return { inverse, tail, tailScale: 2 ** tailBits, tailShift: BigInt(tailBits) };
+});
+
+/**
+ * e^y for 0 <= y < 2^-(3 chunk), `rough` the same to 2^-52. Short: error below 2 ulps, namely 1 for the last shift, 1/2 for
+ * the tail, and what the earlier steps err (3 each: shift, coefficient, carried) times y. Long: below 8 (6 of the plan).
+ */
+function exponentialOfRest(y: bigint, rough: number, working: number, shift: bigint): bigint {
   if (working > LONG_BITS) {
     const plan = exponentialPlan(working);
     return sumPlan(plan, planPowers(y, plan.block, working), working);
   }
-  const inverse = inverseFactorials(working);
-  const shift = BigInt(working);
-  let sum = inverse[terms] ?? 0n;
-  for (let n = terms - 1; n >= 0; n--) sum = (inverse[n] as bigint) + ((y * sum) >> shift);
+  const { inverse, tail, tailScale, tailShift } = shortSeries(working);
+  let bracket = 0;
+  for (let k = tail.length - 1; k >= 0; k--) bracket = bracket * rough + (tail[k] as number);
+  let last = inverse.length - 1;
+  let sum = (inverse[last] as bigint) + ((y * BigInt(Math.round(bracket * tailScale))) >> tailShift);
+  while (--last >= 0) sum = (inverse[last] as bigint) + ((y * sum) >> shift);
   return sum;
 }
 
 /**
- * e^r for 0 <= r < 1, both with `working` fraction bits (from workingBits). Error below 40 working ulps: three table factors
- * (1 ulp each) and three truncated products, all values below e, besides the rest.
+ * e^r for 0 <= r < 1, both with `working` fraction bits (from workingBits). Error below 40 working ulps: the rest 8, three
+ * table factors 1 each and three truncated products 1 each, every one of them grown by the later factors, below e together.
  */
 export function exponentialWorking(r: bigint, working: number): bigint {
-  const { chunk, levels, terms } = exponentialTables(working);
-  const mask = (1 << chunk) - 1;
-  const top = Number(r >> BigInt(working - 3 * chunk));
-  const rest = exponentialOfRest(BigInt.asUintN(working - 3 * chunk, r), working, terms);
-  const shift = BigInt(working);
-  const fine = (rest * (levels[2][top & mask] as bigint)) >> shift;
-  const middle = (fine * (levels[1][(top >> chunk) & mask] as bigint)) >> shift;
-  return (middle * (levels[0][top >> (2 * chunk)] as bigint)) >> shift;
+  const tables = exponentialTables(working);
+  return exponentialOfSplit(r, Number(r >> tables.topShift) * 2 ** -TOP_BITS, working, tables);
 }
 
-/** x = exponent ln 2 + r with 0 <= r < ln 2 (up to one working ulp), |x| < 2^40. */
-function reduceByLn2(x: bigint, bits: number, working: number): { r: bigint; exponent: number } {
-  const ln2 = ln2Fixed(working + REDUCTION_BITS);
-  const wide = x << BigInt(working + REDUCTION_BITS - bits);
+/** The same with r in doubles, cut to TOP_BITS. */
+function exponentialOfSplit(r: bigint, top: number, working: number, tables: ExponentialTables): bigint {
+  const { chunk, levels, shift, cells } = tables;
+  const cell = Math.floor(top * cells);
+  const mask = (1 << chunk) - 1;
+  const rest = exponentialOfRest(BigInt.asUintN(working - 3 * chunk, r), top - cell / cells, working, shift);
+  const fine = (rest * (levels[2][cell & mask] as bigint)) >> shift;
+  const middle = (fine * (levels[1][(cell >> chunk) & mask] as bigint)) >> shift;
+  return (middle * (levels[0][cell >> (2 * chunk)] as bigint)) >> shift;
+}
+
+/** What the reduction of an argument with `bits` fraction bits needs. */
+interface Reduction {
+  readonly working: number;
+  readonly tables: ExponentialTables;
+  readonly ln2: bigint;
+  readonly up: bigint;
+}
+
+const reductions = memoiseBounded(32, (bits: number): Reduction => {
+  const working = workingBits(bits);
+  const tables = exponentialTables(working);
+  return {
+    working,
+    tables,
+    ln2: ln2Fixed(working + REDUCTION_BITS),
+    up: BigInt(working + REDUCTION_BITS - bits),
+  };
+});
+
+const REDUCTION_SHIFT = BigInt(REDUCTION_BITS);
+
+/** A remainder below this, cut to TOP_BITS, is below ln 2. */
+const SURELY_BELOW = Math.LN2 - 2 ** -50;
+
+/**
+ * e^x as a mantissa in [1, 2] (up to rounding) with `working` fraction bits, and a power of two; |x| < 2^40. Reduction
+ * x = exponent ln 2 + r, 0 <= r < ln 2: one working ulp for the cut and 2^40 2^-44 for ln 2, so 42 ulps of the mantissa in all.
+ */
+function expWorking(x: bigint, bits: number): ScaledFixed & { readonly working: number } {
+  const { working, tables, ln2, up } = reductions(bits);
+  const wide = x << up;
   let exponent = Math.floor(numberFromFixed(x, bits) / Math.LN2);
-  let r = wide - BigInt(exponent) * ln2;
+  let r = (exponent === 0 ? wide : wide - BigInt(exponent) * ln2) >> REDUCTION_SHIFT;
+  let top = Number(r >> tables.topShift) * 2 ** -TOP_BITS;
   // The quotient in doubles may be off by one next to a multiple of ln 2.
-  if (r < 0n) {
-    r += ln2;
-    exponent -= 1;
-  } else if (r >= ln2) {
-    r -= ln2;
-    exponent += 1;
+  if (top < 0 || top >= SURELY_BELOW) {
+    const off = top < 0 ? -1 : r >= ln2 >> REDUCTION_SHIFT ? 1 : 0;
+    if (off !== 0) {
+      exponent += off;
+      r = (wide - BigInt(exponent) * ln2) >> REDUCTION_SHIFT;
+      // Within one ulp of 0 the cut value of ln 2 may be a unit too large.
+      if (r < 0n) r = 0n;
+      top = Number(r >> tables.topShift) * 2 ** -TOP_BITS;
+    }
   }
-  return { r: r >> BigInt(REDUCTION_BITS), exponent };
+  return { mantissa: exponentialOfSplit(r, top, working, tables), exponent, working };
 }
 
 /**
  * e^x as mantissa in [1, 2] and a power of two, both x and mantissa with `bits` fraction bits. Domain |x| < 2^40.
- * Relative error below 0.6 2^-bits, whatever the size of x.
+ * Relative error below 0.6 2^-bits, whatever the size of x: half an ulp for the last rounding, 42 working ulps before, at
+ * least 10 bits below (KERNEL_GUARD).
  * Method: reduction by ln 2, three table factors, Taylor series of the rest.
  */
 export function expScaled(x: bigint, bits: number): ScaledFixed {
-  const working = workingBits(bits);
-  const { r, exponent } = reduceByLn2(x, bits, working);
-  return { mantissa: shiftRounded(exponentialWorking(r, working), working - bits), exponent };
+  const { mantissa, exponent, working } = expWorking(x, bits);
+  return { mantissa: shiftRounded(mantissa, working - bits), exponent };
 }
 
 /** e^x with `bits` fraction bits; |error| <= max(1, e^x) ulp. */
 export function expFixed(x: bigint, bits: number): bigint {
-  const { mantissa, exponent } = expScaled(x, bits);
-  return shiftRounded(mantissa, -exponent);
+  const { mantissa, exponent, working } = expWorking(x, bits);
+  return shiftRounded(mantissa, working - bits - exponent);
 }
 
 /** cosh x and sinh x with `bits` fraction bits; |error| <= max(1, cosh x) ulp each. */

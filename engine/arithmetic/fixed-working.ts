@@ -1,5 +1,3 @@
-import { memoiseBounded } from './memo';
-
 /** Guard bits of the elementary functions: their own rounding stays below 2^6 working ulps, see each function. */
 const KERNEL_GUARD = 10;
 
@@ -17,6 +15,14 @@ export const LONG_BITS = 700;
 /** Bits of one table chunk: an argument below 1 is split into three chunks and a rest below 2^-(3 chunk). */
 export function chunkBits(working: number): number {
   return working > LONG_BITS ? 6 : 8;
+}
+
+/**
+ * The same for the exponential: its single numbers (not pairs) make larger tables worth their time; 3 2^10 products of at most
+ * five digits cost below half a millisecond.
+ */
+export function exponentialChunk(working: number): number {
+  return working > LONG_BITS ? 6 : working > 320 ? 8 : 10;
 }
 
 /** One term of a power series with rational coefficients, prepared for summation from the highest power down. */
@@ -92,13 +98,3 @@ export function exponentialTerms(bits: number, reduction: number): number {
   for (let reached = 0; reached <= bits + 2; n++) reached += reduction + Math.log2(n + 1);
   return n;
 }
-
-/** Inverse factorials 1/0!, 1/1!, ... with `bits` fraction bits. */
-export const inverseFactorials: (bits: number) => readonly bigint[] = memoiseBounded(24, (bits: number) => {
-  const list: bigint[] = [];
-  for (let value = 1n << BigInt(bits), n = 1n; value !== 0n; n++) {
-    list.push(value);
-    value /= n;
-  }
-  return list;
-});

@@ -48,11 +48,14 @@ export function fixedFromNumber(x: number, bits: number): bigint {
   return shiftRounded(BigInt(scaled), up - bits);
 }
 
+/** 2^-k for |k| <= 500 at place k + 500: the power of two is dearer than the rest of the conversion. */
+const POWERS = Float64Array.from({ length: 1001 }, (_, k) => 2 ** (500 - k));
+
 /** Double next to value / 2^bits, relative error <= 2^-52; overflows to an infinity and underflows to 0 like a double. */
 export function numberFromFixed(value: bigint, bits: number): number {
   if (bits >= -500 && bits <= 500) {
     const direct = Number(value);
-    if (Number.isFinite(direct)) return direct * 2 ** -bits;
+    if (Number.isFinite(direct)) return direct * (POWERS[bits + 500] as number);
   }
   if (value === 0n) return 0;
   const drop = bitLength(value) - 64;

@@ -1,6 +1,6 @@
 /**
  * Pure memoisation with a bounded number of entries: the value depends on the key alone, so forgetting one costs time only.
- * The entry used longest ago is dropped first.
+ * Once it is full, the entry used longest ago since then is dropped first.
  */
 export function memoiseBounded<Key extends number | string, Value extends object | bigint>(
   limit: number,
@@ -18,10 +18,12 @@ export function memoiseBounded<Key extends number | string, Value extends object
         const oldest = known.keys().next();
         if (!oldest.done) known.delete(oldest.value);
       }
-    } else {
+      known.set(key, value);
+    } else if (known.size >= limit) {
+      // Only a full memory needs to know what was used last.
       known.delete(key);
+      known.set(key, value);
     }
-    known.set(key, value);
     lastKey = key;
     lastValue = value;
     return value;
