@@ -36,9 +36,9 @@ export interface CheckValue {
 }
 
 /**
- * log det by a way of its own, tower by tower and without pairing: towers of linear factors as one polynomial without
- * its roots, towers with other factors by their roots. With several indices the closed form, by the routines of its
- * functions, where it has one in sines, and further steps of the recursion else.
+ * log det by a way of its own. By factors, where the paired spectrum has a closed form in sines, that one, by the
+ * routines of its functions. Else tower by tower and without pairing: eigenvalues of linear and quadratic factors as one polynomial
+ * without its roots, those with other factors by their roots, several indices by further steps of the recursion.
  */
 export function checkValue(
   { towers, pairing }: Prepared,
@@ -46,10 +46,10 @@ export function checkValue(
   bits: number,
 ): CheckValue | SumFailure {
   const working = bits + 16;
-  if (towers.some(({ indices }) => indices.length > 1)) {
-    const closed = closedCheck(pairing, towers, prescription, working);
-    if (closed !== null) return { route: 'closed', estimate: fewerBits(closed, 16) };
-  }
+  // By operator the whole polynomials in one index know nothing of the anomaly, and so confirm it.
+  const several = towers.some(({ indices }) => indices.length > 1);
+  const closed = several || prescription === 'factors' ? closedCheck(pairing, towers, prescription, working) : null;
+  if (closed !== null) return { route: 'closed', estimate: fewerBits(closed, 16) };
   const parts: Estimate[] = [];
   const routes = new Set<CheckRoute>();
   for (const tower of towers) {
@@ -85,7 +85,7 @@ function isFailed(found: CheckValue | SumFailure): found is SumFailure {
 
 function singleCheck(tower: Tower, prescription: Prescription, bits: number): CheckValue | SumFailure {
   const degeneracy = polynomialIn(tower.degeneracy, tower.indices[0] as string) ?? zeroPolynomial;
-  if (tower.factors.some(({ kind }) => kind === 'irreducible')) {
+  if (tower.factors.some((factor) => factor.kind === 'irreducible' && factor.polynomial.length > 3)) {
     const found = byRoots(tower, degeneracy, prescription, bits);
     // Roots too close to be told apart: the whole polynomial then, from another point.
     if (found !== null) return found;

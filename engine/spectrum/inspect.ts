@@ -1,5 +1,6 @@
 import { formDouble } from '../arithmetic/form-double';
 import { Form } from '../exact/form';
+import { gcd } from '../exact/rational';
 import { analyseTower, isRemark } from './analyse';
 import { formText } from './form-text';
 import { type Pairing, pairTowers } from './pairing';
@@ -57,16 +58,23 @@ function degeneracyRemarks(tower: Tower): Remark[] {
 function firstNegative({ degeneracy, indices, last }: Tower): { step: string; value: string } | null {
   const p = polynomialIn(degeneracy, indices[0] as string) ?? [];
   const top = p.at(-1)?.toRational();
+  const valueAt = evaluator(p);
   for (let step = 0; step <= Math.min(last ?? LOOKED_AT, LOOKED_AT); step++) {
-    const value = valueAt(p, step);
+    const value = valueAt(step);
     if (value !== null && value < 0) return { step: `${step}`, value: `${value}` };
   }
   return last === null && top && top.sign() < 0 ? { step: 'large', value: '-' } : null;
 }
 
-function valueAt(p: Polynomial, step: number): number | null {
-  const value = evaluatePolynomial(p, Form.number(step));
-  return value.toRational()?.toNumber() ?? formDouble(value, () => null)?.re ?? null;
+/** Values in doubles, without cancellation where the coefficients are rational. */
+function evaluator(p: Polynomial): (step: number) => number | null {
+  const rational = p.map((c) => c.toRational());
+  if (!rational.every((c) => c !== null)) {
+    return (step) => formDouble(evaluatePolynomial(p, Form.number(step)), () => null)?.re ?? null;
+  }
+  const denominator = rational.reduce((d, c) => (d * c.denominator) / gcd(d, c.denominator), 1n);
+  const numerators = rational.map((c) => c.numerator * (denominator / c.denominator));
+  return (step) => Number(numerators.reduceRight((sum, c) => sum * BigInt(step) + c, 0n)) / Number(denominator);
 }
 
 function isIntegerValued(degeneracy: Form, indices: readonly string[]): boolean {

@@ -3,22 +3,27 @@ import {
   absoluteComplex,
   addComplex,
   type FixedComplex,
-  integerPowerComplex,
   logComplex,
-  multiplyComplex,
   subtractComplex,
   zeroComplex,
 } from '../arithmetic/fixed-complex';
 import { formFixed } from '../arithmetic/form-fixed';
 import type { Form } from '../exact/form';
-import { type Estimate, farPoint, stepsToFarPoint } from '../functions/euler-maclaurin';
-import { scaledHurwitzDerivative } from '../functions/hurwitz-derivative';
+import { type Estimate, stepsToFarPoint } from '../functions/euler-maclaurin';
 import type { Run } from './expansion';
 import { fixedCoefficients, fixedMultiplicity } from './explicit-sum';
+import { hurwitzTail, type Partial } from './hurwitz-tail';
 import { type Polynomial, shiftPolynomial } from './polynomial';
+import { log2TotalWeight, risingPolynomial, sumOfLogarithms } from './power-product';
 
 /** Most logarithms taken one by one before a series takes over. */
 export const MAXIMAL_STEPS = 100_000;
+
+/** Bits that the series is started further out for: the guard bits of usual multiplicities. */
+const REACH = 48;
+
+/** Largest error of a number known to one unit in either part. */
+const SLIP = 1.5;
 
 /** Finite runs up to this length are summed term by term. */
 const SUMMED_RUN = 2048;
@@ -55,55 +60,52 @@ export function linearSum(
   if (rough === null || roughExpansion === null) return 'spectrum-undefined';
   const start = { re: numberFromFixed(rough.re, 64) + run.from, im: numberFromFixed(rough.im, 64) };
   const steps =
-    run.to === null ? stepsToFarPoint(start, multiplicity.length, bits + 64) + offset : run.to - run.from + 1;
+    run.to === null ? stepsToFarPoint(start, multiplicity.length, bits + REACH) + offset : run.to - run.from + 1;
   if (steps > MAXIMAL_STEPS) return 'spectrum-too-far';
   const size = Math.hypot(start.re + steps, start.im) + Math.abs(start.re) + 2;
   const terms = roughExpansion.map((c, k) => numberFromFixed(absoluteComplex(c) + 1n, 64) * size ** (k + 1));
-  const guard = 20 + Math.ceil(Math.log2(1 + terms.reduce((sum, t) => sum + t, 0) * (Math.log(size) + 2)));
+  const rising = risingPolynomial(multiplicity, run.from);
+  const weight = terms.reduce((sum, t) => sum + t, 0) * (Math.log(size) + 2);
+  const guard = 20 + Math.ceil(Math.max(Math.log2(1 + weight), rising === null ? 0 : log2TotalWeight(rising, steps)));
   const working = bits + guard;
   const shift = formFixed(a, working);
-  const factor = fixedMultiplicity(multiplicity, working, Math.abs(run.from) + steps);
-  if (shift === null || factor === null) return 'spectrum-undefined';
-  let sum = zeroComplex;
-  let error = 0;
-  for (let j = 0; j < steps; j++) {
-    const nu = run.from + j;
-    const z = { re: shift.re + (BigInt(nu) << BigInt(working)), im: shift.im };
-    if (z.re === 0n && z.im === 0n) continue;
-    const logarithm = logComplex(z, working);
-    sum = addComplex(sum, factor.times(nu, logarithm));
-    const distance = numberFromFixed(absoluteComplex(z), working);
-    error += (factor.size(nu) + 1) * (4 + 2 / distance) + 2 * Math.abs(Math.log(distance)) + 6;
-  }
-  if (run.to !== null) return rounded(sum, error, guard);
+  if (shift === null) return 'spectrum-undefined';
+  const numbers = Array.from({ length: steps }, (_, j) => ({
+    re: shift.re + (BigInt(run.from + j) << BigInt(working)),
+    im: shift.im,
+  }));
+  const multiplied = rising && !numbers.some(isZero) ? sumOfLogarithms(numbers, rising, working, () => SLIP) : null;
+  const below = multiplied ?? oneByOne(numbers, multiplicity, run.from, working);
+  if (below === null) return 'spectrum-undefined';
+  if (run.to !== null) return rounded(below.value, below.error, guard);
+  const coefficients = fixedCoefficients(expansion, working);
+  if (coefficients === null) return 'spectrum-undefined';
   const at = { re: shift.re + (BigInt(run.from + steps) << BigInt(working)), im: shift.im };
-  const tail = endlessTail(expansion, at, working);
-  if (tail === null) return 'spectrum-undefined';
-  return rounded(subtractComplex(sum, tail.value), error + tail.error, guard);
+  const tail = hurwitzTail(coefficients, at, working);
+  return rounded(subtractComplex(below.value, tail.value), below.error + tail.error, guard);
 }
 
-/** sum_k c_k zeta'(-k, W), its error in units as a double. */
-function endlessTail(
-  expansion: Polynomial,
-  at: FixedComplex,
+function isZero({ re, im }: FixedComplex): boolean {
+  return re === 0n && im === 0n;
+}
+
+/** The sum of M(from + j) log z_j logarithm by logarithm, vanishing numbers left out: for any multiplicities. */
+function oneByOne(
+  numbers: readonly FixedComplex[],
+  multiplicity: Polynomial,
+  from: number,
   working: number,
-): { readonly value: FixedComplex; readonly error: number } | null {
-  const coefficients = fixedCoefficients(expansion, working);
-  if (coefficients === null) return null;
-  const point = farPoint(at, working);
-  const logarithm = logComplex(at, working);
-  const size = 2 ** point.log2Size;
+): Partial | null {
+  const factor = fixedMultiplicity(multiplicity, working, Math.abs(from) + numbers.length);
+  if (factor === null) return null;
   let value = zeroComplex;
   let error = 0;
-  coefficients.forEach((c, k) => {
-    const scaled = multiplyComplex(c, integerPowerComplex(at, k, working), working);
-    const weight = numberFromFixed(absoluteComplex(scaled) + 1n, working);
-    const log2Weight = Math.log2(weight);
-    const { value: derivative, error: inside } = scaledHurwitzDerivative(point, k, logarithm, log2Weight);
-    value = addComplex(value, multiplyComplex(scaled, derivative, working));
-    const height = numberFromFixed(absoluteComplex(derivative), working) + 1;
-    error += (size ** k + 4 * (k + 1) * weight) * height + scaledError(inside, log2Weight) + 2;
-  });
+  for (const [j, z] of numbers.entries()) {
+    if (isZero(z)) continue;
+    value = addComplex(value, factor.times(from + j, logComplex(z, working)));
+    const distance = numberFromFixed(absoluteComplex(z), working);
+    error += (factor.size(from + j) + 1) * (4 + 2 / distance) + 2 * Math.abs(Math.log(distance)) + 6;
+  }
   return { value, error };
 }
 

@@ -20,8 +20,10 @@ import { scaledHurwitz, scaledHurwitzDerivative } from '../functions/hurwitz-der
 import { rootBound } from './complex-roots';
 import type { Run } from './expansion';
 import { fixedCoefficients, fixedMultiplicity } from './explicit-sum';
+import type { Partial } from './hurwitz-tail';
 import { MAXIMAL_STEPS, rounded, type SumFailure, scaledError } from './linear-sum';
 import { degreeOf, type Polynomial, shiftPolynomial } from './polynomial';
+import { log2TotalWeight, type RisingPolynomial, risingPolynomial, sumOfLogarithms } from './power-product';
 
 /** The series in 1/W starts where the roots are this many times closer than W. */
 const SEPARATION = 4;
@@ -63,9 +65,14 @@ export function rootlessSum(
   if (steps > MAXIMAL_STEPS) return 'spectrum-too-far';
   const size = start + steps + Math.abs(start) + 2;
   const weight = roughM.reduce((sum, c, k) => sum + numberFromFixed(absoluteComplex(c) + 1n, 64) * size ** (k + 1), 0);
-  const guard = 24 + Math.ceil(Math.log2(1 + weight * degree * (Math.log(size) + 2)));
+  const rising = risingPolynomial(multiplicity, run.from);
+  const log2Weight = Math.max(
+    Math.log2(1 + weight * degree * (Math.log(size) + 2)),
+    rising === null ? 0 : log2TotalWeight(rising, steps),
+  );
+  const guard = 24 + Math.ceil(log2Weight);
   const working = bits + guard;
-  const below = explicitPart(q, multiplicity, run.from, steps, working);
+  const below = explicitPart(q, multiplicity, rising, run.from, steps, working);
   const coefficients = { q: fixedCoefficients(inW, working), m: fixedCoefficients(expansion, working) };
   if (below === null || coefficients.q === null || coefficients.m === null) return 'spectrum-undefined';
   const at = rationalFixed(center.add(Rational.of(run.from + steps)), working);
@@ -78,33 +85,29 @@ function centerOf(second: FixedComplex, degree: number): Rational {
   return Rational.of(Math.round((2 * numberFromFixed(second.re, 64)) / degree), 2);
 }
 
-interface Partial {
-  readonly value: FixedComplex;
-  /** In units of the working precision. */
-  readonly error: number;
-}
-
 function explicitPart(
   q: Polynomial,
   multiplicity: Polynomial,
+  rising: RisingPolynomial | null,
   from: number,
   steps: number,
   working: number,
 ): Partial | null {
-  const factor = fixedMultiplicity(multiplicity, working, Math.abs(from) + steps);
   const coefficients = fixedCoefficients(q, working);
-  if (factor === null || coefficients === null) return null;
+  if (coefficients === null) return null;
+  const values = Array.from({ length: steps }, (_, j) => withoutZeros(coefficients, BigInt(from + j)));
+  // Each coefficient brings one unit in either part, times a power of nu.
+  const slip = (j: number): number => 2 * (Math.abs(from + j) + 1) ** (coefficients.length - 1);
+  const multiplied = rising && sumOfLogarithms(values, rising, working, slip);
+  if (multiplied !== null) return multiplied;
+  const factor = fixedMultiplicity(multiplicity, working, Math.abs(from) + steps);
+  if (factor === null) return null;
   let value = zeroComplex;
   let error = 0;
-  for (let j = 0; j < steps; j++) {
-    const nu = from + j;
-    const lambda = withoutZeros(coefficients, BigInt(nu));
-    const logarithm = logComplex(lambda, working);
-    value = addComplex(value, factor.times(nu, logarithm));
+  for (const [j, lambda] of values.entries()) {
+    value = addComplex(value, factor.times(from + j, logComplex(lambda, working)));
     const distance = numberFromFixed(absoluteComplex(lambda), working);
-    // Each coefficient brings one unit, times a power of nu.
-    const inside = (Math.abs(nu) + 1) ** (coefficients.length - 1);
-    error += (factor.size(nu) + 1) * (4 + (2 * inside) / distance) + 2 * Math.abs(Math.log(distance)) + 6;
+    error += (factor.size(from + j) + 1) * (4 + slip(j) / distance) + 2 * Math.abs(Math.log(distance)) + 6;
   }
   return { value, error };
 }
