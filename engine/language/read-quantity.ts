@@ -26,16 +26,42 @@ export function readQuantity(reader: TokenReader): Quantity | null {
     if (token.kind === 'junk') return reader.unexpected(token, QUANTITY);
     return reader.report('quantity-expected', token, { word: token.text });
   }
-  if (reader.peek(1)?.text === '(') return readFunction(reader, token, log, start);
+  if (reader.peek(1)?.text === '(' && !hasOrders(reader)) return readFunction(reader, token, log, start);
   const what = readWhat(reader);
   if (!what) return null;
+  const orders = reader.at('(') ? readOrders(reader) : undefined;
+  if (orders === null) return null;
   if (!reader.take('of')) return reader.report('of-missing', reader.here, { name: what.name });
   const subject = reader.name('subject-missing', 'the name of a theory or a spectrum');
   if (!subject) return null;
   const span = { from: start, to: subject.span.to };
+  if (orders) return { kind: 'theory', log, what, orders, theory: subject, span };
   if (what.name !== 'determinant') return { kind: 'theory', log, what, theory: subject, span };
   const prescription = readPrescription(reader);
   return prescription && { kind: 'determinant', log, spectrum: subject, prescription, span: spanFrom(start, reader) };
+}
+
+/** Whether `name(...)` is followed by `of`, and so a quantity of a theory and no function of numbers. */
+function hasOrders(reader: TokenReader): boolean {
+  for (let k = 2; ; k++) {
+    const token = reader.peek(k);
+    if (token === null || token.text === '(') return false;
+    if (token.text === ')') return reader.peek(k + 1)?.text === 'of';
+  }
+}
+
+/** `(1, 2)`: whole numbers. */
+function readOrders(reader: TokenReader): number[] | null {
+  reader.next();
+  const orders: number[] = [];
+  do {
+    const token = reader.next();
+    if (!token || !/^\d{1,2}$/.test(token.text)) {
+      return reader.report('order-expected', token ?? reader.last, { word: token?.text ?? '' });
+    }
+    orders.push(Number(token.text));
+  } while (reader.take(','));
+  return reader.expect(')', '`,` or `)`') && orders;
 }
 
 function spanFrom(from: number, reader: TokenReader): Span {

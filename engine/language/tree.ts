@@ -252,10 +252,12 @@ export interface RangeClause {
 /** `log` in front of a quantity asks for its logarithm. */
 export type Quantity =
   | {
-      /** `one-loop`, `vector`, `classical`, `integrand`, or a multiplet's name, of a theory. */
+      /** `one-loop`, `vector`, `classical`, `integrand`, a multiplet's name, or a coefficient of a series, of a theory. */
       readonly kind: 'theory';
       readonly log: boolean;
       readonly what: Name;
+      /** Orders of a coefficient, one for each gauge group: `instanton(1, 2)`. */
+      readonly orders?: readonly number[];
       readonly theory: Name;
       readonly span: Span;
     }

@@ -135,6 +135,8 @@ const requests = {
   'subject-missing': (d) => `A name is missing after \`${d.after}\`: that of a theory or a spectrum of this notebook.`,
   'special-function-unknown': (d) => `There is no function \`${d.name}\` to ask for; known are ${quoted(SIGNATURES)}.`,
   'argument-count': (d) => `\`${d.name}\` is written \`${d.signature}\`; the number of arguments here is ${d.count}.`,
+  'order-expected': (d) =>
+    `Orders are whole numbers below 100, one for each gauge group, as in \`instanton(1, 2)\`; found \`${d.word}\`.`,
   'prescription-unknown': (d) =>
     `A determinant is regularised ${PRESCRIPTIONS.map((word) => `\`by ${word}\``).join(' or ')}${d.word ? `, not by \`${d.word}\`` : ''}.`,
   'formula-form-unknown': (d) =>

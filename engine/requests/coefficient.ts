@@ -4,25 +4,27 @@ import type { Gaussian } from '../exact/gaussian';
 import type { ValueRequest } from '../language/tree';
 import { formLatex } from '../latex/form';
 import { evaluateCoefficient } from '../numeric/coefficient';
-import type { Sphere } from '../spheres/sphere';
+import type { SeriesOrder, Sphere } from '../spheres/sphere';
 import type { Theory } from '../theory/theory';
 import { agreedDigits } from './agreement';
 import type { Analysis } from './analysis';
 import { type Answer, failure } from './answer';
 import { resolvePoint } from './point';
 import type { ValueResult } from './result';
+import type { Asked } from './subject';
 
-/** The order that a quantity such as `instanton2` asks for; null for other quantities. */
-export function coefficientOrder({ series }: Sphere, what: string): number | null {
-  const found = /^([A-Za-z]+)([1-9]\d?)$/.exec(what);
+/** The order that a quantity such as `instanton2` or `instanton(1, 2)` asks for; null for other quantities. */
+export function coefficientOrder({ series }: Sphere, { what, orders }: Asked): SeriesOrder | null {
+  if (orders !== undefined) return what.name === series?.name ? orders : null;
+  const found = /^([A-Za-z]+)([1-9]\d?)$/.exec(what.name);
   return series !== undefined && found?.[1] === series.name ? Number(found[2]) : null;
 }
 
-/** `value instanton1 of ...`: a coefficient of a series, exact where the point is. */
+/** `value instanton1 of ...`, `value instanton(1, 2) of ...`: a coefficient of a series, exact where the point is. */
 export function runCoefficient(
   analysis: Analysis,
   { sphere, theory }: { readonly sphere: Sphere; readonly theory: Theory },
-  { at, log, order, digits }: Pick<ValueRequest, 'at'> & { log: boolean; order: number; digits: number },
+  { at, log, order, digits }: Pick<ValueRequest, 'at'> & { log: boolean; order: SeriesOrder; digits: number },
 ): Answer {
   const of = theory.name;
   const { series } = sphere;

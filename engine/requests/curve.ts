@@ -20,7 +20,7 @@ import { functionProduct } from './function-value';
 import { resolvePoint } from './point';
 import type { PlotAxis } from './result';
 import { sayRemark, unreadableSpectrum } from './spectrum-card';
-import { theoryQuantity, unknownQuantity, unreadable } from './subject';
+import { askedText, theoryQuantity, unknownQuantity, unreadable } from './subject';
 import { isValueFunction } from './value-function';
 
 /** Logarithm of a quantity in doubles: -Infinity in re at zeros, +Infinity at poles, NaN where there is no value. */
@@ -66,7 +66,7 @@ type Of<K extends Quantity['kind']> = Extract<Quantity, { kind: K }>;
 
 function theoryCurve(
   analysis: Analysis,
-  { theory: { name }, what }: Of<'theory'>,
+  { theory: { name }, ...asked }: Of<'theory'>,
   axes: readonly PlotAxis[],
   at: readonly Assignment[],
 ): Curve | string {
@@ -75,11 +75,12 @@ function theoryCurve(
   if (problem !== null || !entry?.built?.theory || !entry.sphere) return problem ?? '';
   const { sphere } = entry;
   const { theory } = entry.built;
-  const raw = theoryQuantity(entry, what.name);
-  if (raw === null && coefficientOrder(entry.sphere, what.name) !== null) {
-    return `\`${what.name}\` is a coefficient, which has no curve here; ask for its \`value\` at points.`;
+  const { what } = asked;
+  const raw = theoryQuantity(entry, asked);
+  if (raw === null && coefficientOrder(entry.sphere, asked) !== null) {
+    return `\`${askedText(asked)}\` is a coefficient, which has no curve here; ask for its \`value\` at points.`;
   }
-  if (raw === null) return unknownQuantity(entry, what.name);
+  if (raw === null) return unknownQuantity(entry, asked);
   const free = axes.map((axis) => ({ name: axis.name, span: what.span }));
   const resolved = resolvePoint(analysis, sphere, theory, at, free, 'zero', namesIn(theory, raw));
   if (resolved.kind === 'failure') return resolved.message;

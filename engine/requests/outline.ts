@@ -6,6 +6,7 @@ import { type Analysis, isRequest, realNumber, subjects } from './analysis';
 import { requestKey, requestText } from './request-text';
 import type { Card, Outline, ParameterCard, Problem, RequestCard } from './result';
 import { spectrumCard } from './spectrum-card';
+import { askedText } from './subject';
 import { theoryCard } from './theory-card';
 
 /** The notebook as cards in the order of the text. `notation` gives the notation chosen for a theory, by its name. */
@@ -123,7 +124,7 @@ function quantityText(quantity: Quantity): string {
   const log = quantity.log ? 'log ' : '';
   switch (quantity.kind) {
     case 'theory':
-      return `${log}${quantity.what.name} of ${quantity.theory.name}`;
+      return `${log}${askedText(quantity)} of ${quantity.theory.name}`;
     case 'determinant':
       return `${log}determinant of ${quantity.spectrum.name} by ${quantity.prescription}`;
     case 'function':

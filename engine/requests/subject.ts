@@ -11,15 +11,24 @@ export function unreadable(entry: TheoryEntry | undefined, name: string): string
   return null;
 }
 
-export function theoryQuantity(entry: TheoryEntry, what: string): TheoryProduct | null {
-  if (entry.sphere === null || !entry.built?.theory) return null;
-  return quantity(entry.sphere, entry.built.theory, what);
+/** What is asked of a theory. */
+export type Asked = Pick<Extract<Quantity, { kind: 'theory' }>, 'what' | 'orders'>;
+
+/** The product that is asked for; null where it is none, or not known. */
+export function theoryQuantity(entry: TheoryEntry, { what, orders }: Asked): TheoryProduct | null {
+  if (entry.sphere === null || !entry.built?.theory || orders !== undefined) return null;
+  return quantity(entry.sphere, entry.built.theory, what.name);
 }
 
-export function unknownQuantity(entry: TheoryEntry, what: string): string {
+/** As typed: `one-loop`, `instanton(1, 2)`. */
+export function askedText({ what, orders }: Asked): string {
+  return orders === undefined ? what.name : `${what.name}(${orders.join(', ')})`;
+}
+
+export function unknownQuantity(entry: TheoryEntry, asked: Asked): string {
   const series = entry.sphere?.series === undefined ? [] : [`${entry.sphere.series.name}1`];
   const names = [...QUANTITIES, ...series, ...(entry.built?.theory?.multiplets ?? []).map(({ name }) => name)];
-  return `\`${what}\` is no quantity of \`${entry.block.name.name}\`; there are ${names.map((n) => `\`${n}\``).join(', ')}.`;
+  return `\`${askedText(asked)}\` is no quantity of \`${entry.block.name.name}\`; there are ${names.map((n) => `\`${n}\``).join(', ')}.`;
 }
 
 /** Name of the theory, spectrum or function that a quantity is of. */

@@ -29,12 +29,12 @@ export function runValue(analysis: Analysis, request: ValueRequest, surroundings
   if (problem !== null || !entry?.built?.theory || !entry.sphere) return failure(of, problem ?? '');
   const { sphere } = entry;
   const { theory } = entry.built;
-  const raw = theoryQuantity(entry, quantity.what.name);
-  const order = raw === null ? coefficientOrder(sphere, quantity.what.name) : null;
+  const raw = theoryQuantity(entry, quantity);
+  const order = raw === null ? coefficientOrder(sphere, quantity) : null;
   if (order !== null) {
     return runCoefficient(analysis, { sphere, theory }, { at: request.at, log: quantity.log, order, digits });
   }
-  if (raw === null) return failure(of, unknownQuantity(entry, quantity.what.name));
+  if (raw === null) return failure(of, unknownQuantity(entry, quantity));
   const resolved = resolvePoint(analysis, sphere, theory, request.at, [], 'error', namesIn(theory, raw));
   if (resolved.kind === 'failure') return failure(of, resolved.message);
   const simple = elementary(sphere, theory, raw, new Map()).product;

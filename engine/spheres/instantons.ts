@@ -1,53 +1,101 @@
 import { Form } from '../exact/form';
-import { Rational } from '../exact/rational';
-import type { Group } from '../lie/group';
-import { Representation } from '../lie/representation';
-import { gaugeGroups, type Multiplet, type Theory, type TheoryGroup } from '../theory/theory';
-import { matterWeights } from '../theory/weights';
+import { gaugeGroups, type Theory, type TheoryGroup } from '../theory/theory';
+import { type InstantonMatter, instantonMatter } from './instanton-matter';
 import { type InstantonData, nekrasovTerms } from './nekrasov';
-import type { CoefficientSum } from './sphere';
+import type { CoefficientSum, SeriesOrder } from './sphere';
 
 const b = Form.symbol('@b');
 const inverseB = b.inverse();
-const halfQ = b.add(inverseB).mul(Form.ratio(1, 2));
 
 /**
- * Coefficient of q^order in the instanton factor at one pole of the four-sphere, for one gauge group U(n) or SU(n) with
- * fundamental, antifundamental, adjoint and neutral hypers: a = i sigma, e1 = b, e2 = 1/b, and a mass m enters as
- * Q/2 + i m. SU(n) is U(n) at traceless a, its U(1) factor kept.
+ * Coefficient of q_1^k_1 q_2^k_2 .. in the instanton factor at one pole of the four-sphere, a power for each gauge group
+ * in the order of the text, or of q^k with one q for all of them. The groups are U(n) and SU(n), hypers fundamental,
+ * antifundamental, bifundamental, adjoint and neutral: a = i sigma, e1 = b, e2 = 1/b, and a mass m enters as Q/2 + i m.
+ * SU(n) is U(n) at traceless a, its U(1) factor kept.
  */
-export function instantonCoefficient(theory: Theory, order: number, exchanged = false): CoefficientSum {
-  const [gauge, ...more] = gaugeGroups(theory);
-  if (!gauge || more.length > 0) {
-    return refused(`Instantons are counted for one gauge group; this theory has ${more.length + (gauge ? 1 : 0)}.`);
+export function instantonCoefficient(theory: Theory, order: SeriesOrder, exchanged = false): CoefficientSum {
+  const gauge = gaugeGroups(theory);
+  if (gauge.length === 0) return refused('There are no instantons: this theory has no gauge group.');
+  if (typeof order !== 'number' && order.length !== gauge.length) {
+    const names = gauge.map(({ group }) => group.name).join(', ');
+    return refused(
+      `\`instanton\` takes one order for each gauge group, here ${gauge.length} (${names}); ${order.length} are given.`,
+    );
   }
-  const colours = coloursOf(gauge.group);
-  if (colours === null) {
-    return refused(`Instantons are counted for U(n) and SU(n); ${gauge.group.group.name} needs other formulas.`);
-  }
-  const fundamental: Form[] = [];
-  const adjoint: Form[] = theory.supersymmetry === 4 ? [inverseB] : [];
-  for (const multiplet of theory.multiplets) {
-    const found = massesOf(theory, multiplet, gauge.index);
-    if (found === null) {
-      const { name } = multiplet;
-      return refused(
-        `Instantons are counted with fundamental, antifundamental and adjoint hypers; the multiplet \`${name}\` is none.`,
-      );
-    }
-    fundamental.push(...found.fundamental);
-    adjoint.push(...found.adjoint);
-  }
-  const [epsilon1, epsilon2] = exchanged ? [inverseB, b] : [b, inverseB];
-  const data: InstantonData = { colours, epsilon1, epsilon2, fundamental, adjoint };
-  const terms = nekrasovTerms(data, order);
-  return terms === null
-    ? refused(`There are too many Young diagrams with ${order} boxes; ask for a smaller instanton number.`)
-    : { kind: 'sum', terms };
+  const read = dataOf(theory, exchanged);
+  if (typeof read === 'string') return refused(read);
+  const terms = nekrasovTerms(read, typeof order === 'number' ? compositions(order, gauge.length) : [order]);
+  if (terms !== null) return { kind: 'sum', terms };
+  const boxes = typeof order === 'number' ? order : order.reduce((sum, k) => sum + k, 0);
+  return refused(`There are too many Young diagrams with ${boxes} boxes; ask for a smaller instanton number.`);
+}
+
+/** Conventions beside a coefficient, and what is known of the U(1) factor in it. */
+export function instantonNotes(theory: Theory): readonly string[] {
+  const gauge = gaugeGroups(theory);
+  const data = dataOf(theory, false);
+  const traceless = gauge.filter(({ group }) => group.group.family !== 'U').map(({ group }) => group.name);
+  return [
+    `Coefficient of ${gauge.length < 2 ? '$q^k$' : '$q_1^{k_1}q_2^{k_2}\\cdots$'} at one pole, with $a=i\\sigma$, ` +
+      '$\\epsilon_1=b$, $\\epsilon_2=b^{-1}$ and masses entering as $Q/2+im$; at the other pole it is the complex conjugate.',
+    ...(typeof data !== 'string' && data.bifundamental.length > 0
+      ? [
+          'A bifundamental of mass $m$ gives $E-Q/2+im$ for each box of the group of its fundamental, $E-Q/2-im$ for each ' +
+            'box of the other: to either group it is so many flavours, and no sign of $q$ changes.',
+        ]
+      : []),
+    ...(traceless.length === 0
+      ? []
+      : [
+          `It is that of $U(n)$ at traceless $a$${gauge.length < 2 ? '' : ` for ${traceless.join(', ')}`}: the factor of ` +
+            `the $U(1)$ is not divided out.${typeof data !== 'string' && isFourFlavours(theory, data) ? FOUR_FLAVOURS : ''}`,
+        ]),
+  ];
+}
+
+/** L. F. Alday, D. Gaiotto, Y. Tachikawa, arXiv:0906.3219, section 3.3: (1 - q)^{2 m0 (Q - m1)}. */
+const FOUR_FLAVOURS =
+  ' With $M_f=Q/2+im_f$ it is $(1-q)^{(M_1+M_2)(M_3+M_4)/2}$ for any split of the four flavours into pairs, and what it ' +
+  'leaves is the Virasoro block of that split.';
+
+/** SU(2) with four hypers in the fundamental and no other matter. */
+function isFourFlavours(theory: Theory, { nodes }: InstantonData): boolean {
+  const [node, ...more] = nodes;
+  const isUnitary = gaugeGroups(theory).some(({ group }) => group.group.family === 'U');
+  if (!node || more.length > 0 || isUnitary) return false;
+  return node.colours.length === 2 && node.fundamental.length === 4 && node.adjoint.length === 0;
 }
 
 function refused(message: string): CoefficientSum {
   return { kind: 'refused', message };
+}
+
+/** A string says in words why there is none. */
+function dataOf(theory: Theory, exchanged: boolean): InstantonData | string {
+  const colours: Form[][] = [];
+  for (const { group } of gaugeGroups(theory)) {
+    const own = coloursOf(group);
+    if (own === null) return `Instantons are counted for U(n) and SU(n); ${group.group.name} needs other formulas.`;
+    colours.push(own);
+  }
+  const matter: InstantonMatter[] = [];
+  for (const multiplet of theory.multiplets) {
+    const result = instantonMatter(theory, multiplet);
+    if (result.kind === 'refused') return result.message;
+    matter.push(result.matter);
+  }
+  const partner = theory.supersymmetry === 4 ? [inverseB] : [];
+  const [epsilon1, epsilon2] = exchanged ? [inverseB, b] : [b, inverseB];
+  return {
+    nodes: colours.map((own, n) => ({
+      colours: own,
+      fundamental: matter.flatMap(({ nodes }) => nodes[n]?.fundamental ?? []),
+      adjoint: [...partner, ...matter.flatMap(({ nodes }) => nodes[n]?.adjoint ?? [])],
+    })),
+    bifundamental: matter.flatMap(({ bifundamental }) => bifundamental),
+    epsilon1,
+    epsilon2,
+  };
 }
 
 /** i sigma_1 .. i sigma_n; null for other groups. */
@@ -59,67 +107,13 @@ function coloursOf({ group, coordinates, dependent }: TheoryGroup): Form[] | nul
   return doublet && only && more.length === 0 ? [only, only.neg()] : null;
 }
 
-type Masses = Pick<InstantonData, 'fundamental' | 'adjoint'>;
-
-/** Null where the multiplet is in another representation. */
-function massesOf(theory: Theory, multiplet: Multiplet, index: number): Masses | null {
-  const own = multiplet.representations[index] as Representation;
-  if (own.isTrivial) return { fundamental: [], adjoint: [] };
-  const { group } = own;
-  const masses = flavourWeights(theory, multiplet, index);
-  const fundamental: Form[] = [];
-  const adjoint: Form[] = [];
-  for (const { labels, charge, multiplicity } of own.irreps) {
-    const kind = kindOf(group, labels, charge);
-    if (kind === null || (multiplet.kind === 'halfhyper' && !(kind === 'fundamental' && group.rank === 1))) return null;
-    if (kind === 'neutral') continue;
-    const copies = Array.from({ length: multiplicity }, () => masses).flat();
-    const whole = multiplet.kind === 'halfhyper' ? onePerPair(copies) : copies;
-    if (whole === null) return null;
-    const entered = whole.map((mass) => halfQ.add(Form.i.mul(kind === 'antifundamental' ? mass.neg() : mass)));
-    (kind === 'adjoint' ? adjoint : fundamental).push(...entered);
+/** All ways to write a number as an ordered sum of non-negative ones. */
+function* compositions(total: number, parts: number): Generator<readonly number[]> {
+  if (parts === 1) {
+    yield [total];
+    return;
   }
-  return { fundamental, adjoint };
-}
-
-/** The whole adjoint of U(n) is an adjoint and a neutral part: together they count like the first. */
-function kindOf(
-  { rank, isAbelian, system }: Group,
-  labels: readonly number[],
-  charge: Rational,
-): 'neutral' | 'fundamental' | 'antifundamental' | 'adjoint' | null {
-  const last = system.rank - 1;
-  const unit = (place: number): boolean => labels.every((label, k) => label === (k === place ? 1 : 0));
-  const of = (n: number): boolean => charge.isZero() || charge.equals(Rational.of(n));
-  if (labels.every((label) => label === 0)) {
-    if (charge.isZero()) return 'neutral';
-    if (!isAbelian) return null;
-    return charge.equals(Rational.one) ? 'fundamental' : charge.equals(Rational.of(-1)) ? 'antifundamental' : null;
+  for (let first = 0; first <= total; first++) {
+    for (const rest of compositions(total - first, parts - 1)) yield [first, ...rest];
   }
-  if (unit(0) && of(1)) return 'fundamental';
-  if (unit(last) && of(-1)) return 'antifundamental';
-  const ends = labels.every((label, k) => label === (k === 0 ? 1 : 0) + (k === last ? 1 : 0));
-  return ends && charge.isZero() && rank > 0 ? 'adjoint' : null;
-}
-
-/** The masses of the components under the other groups, with multiplicity. */
-function flavourWeights(theory: Theory, { representations }: Multiplet, index: number): Form[] {
-  const others = representations.map((one, k) => (k === index ? singletOf(one) : one));
-  return matterWeights(theory.groups, others).flatMap(({ weights, multiplicity }) => {
-    const positions = weights === null ? [Form.zero] : weights.weights().map(({ position }) => position);
-    return positions.flatMap((position) => new Array<Form>(multiplicity).fill(position));
-  });
-}
-
-function singletOf({ group, irreps }: Representation): Representation {
-  const labels = irreps[0]?.labels.map(() => 0) ?? [];
-  return new Representation(group, [{ labels, charge: Rational.zero, multiplicity: 1 }]);
-}
-
-/** One of each pair m, -m; null where zero is left over. */
-function onePerPair(masses: readonly Form[]): Form[] | null {
-  const zeros = masses.filter((mass) => mass.isZero());
-  if (zeros.length % 2 !== 0) return null;
-  const chosen = masses.filter((mass) => mass.terms[0]?.coefficient.re.sign() === 1);
-  return [...chosen, ...zeros.slice(0, zeros.length / 2)];
 }

@@ -2,6 +2,7 @@ import { Form } from '../exact/form';
 import { WEIGHT } from '../product/factor';
 import { gaugeGroups, type Theory } from '../theory/theory';
 import { matterWeights, rootWeights } from '../theory/weights';
+import { chiralPairs, vectorPairs } from './s3-mode-pairs';
 import type { ModeFactor, ModesView, ModeTower } from './sphere';
 
 const n = Form.symbol('n');
@@ -31,6 +32,7 @@ export function s3Modes(theory: Theory): ModesView {
         start: 1,
         prefactor: w.mul(w),
         factors: vectorModes(w),
+        pairs: vectorPairs(w),
         from: ['vector'],
       }),
     ),
@@ -39,8 +41,10 @@ export function s3Modes(theory: Theory): ModesView {
   const matter = theory.multiplets.flatMap(({ kind, name, rCharge, representations }) =>
     matterWeights(theory.groups, representations).flatMap(({ weights, multiplicity }) =>
       (kind === 'hyper' ? [w, w.neg()] : [w]).map((weight): ModeTower => {
-        const factors = chiralModes(rCharge, weights === null ? Form.zero : weight);
-        return { weights, half: false, power: multiplicity, start: 0, prefactor: null, factors, from: [name] };
+        const at = weights === null ? Form.zero : weight;
+        const factors = chiralModes(rCharge, at);
+        const pairs = chiralPairs(rCharge, at);
+        return { weights, half: false, power: multiplicity, start: 0, prefactor: null, factors, pairs, from: [name] };
       }),
     ),
   );
@@ -57,8 +61,15 @@ function adjointTowers(theory: Theory, index: number): ModeTower[] {
       weights,
       power: 1,
       factors: chiralModes(one, w),
+      pairs: chiralPairs(one, w),
     })),
-    { ...common, weights: null, power: rank, factors: chiralModes(one, Form.zero) },
+    {
+      ...common,
+      weights: null,
+      power: rank,
+      factors: chiralModes(one, Form.zero),
+      pairs: chiralPairs(one, Form.zero),
+    },
   ];
 }
 

@@ -4,7 +4,7 @@ import { fourSphereConditions } from '../theory/checks/four-sphere';
 import { gaugeGroups, type Multiplet, type Theory } from '../theory/theory';
 import { matterWeights, rootWeights, type TheoryWeights, type WeightedSet } from '../theory/weights';
 import { exponential, quadratic } from './classical';
-import { instantonCoefficient } from './instantons';
+import { instantonCoefficient, instantonNotes } from './instantons';
 import type { Sphere, TheoryProduct } from './sphere';
 
 const w = Form.symbol(WEIGHT);
@@ -73,7 +73,11 @@ export const s4: Sphere = {
       ? ['The adjoint hypermultiplet has the mass $\\frac{i}{2}(b-b^{-1})$.']
       : []),
     'The instanton factor $|Z_{\\text{inst}}|^2$ multiplies the integrand and is not included; for $U(n)$ and $SU(n)$ its ' +
-      'coefficients can be asked for as values: instanton1, instanton2, ...',
+      `coefficients can be asked for as values: ${
+        gaugeGroups(theory).length < 2
+          ? 'instanton1, instanton2, ...'
+          : 'instanton(1, 0, ...) with one order for each gauge group, instanton1 for the sum of all at order 1, ...'
+      }`,
     "$1/|W|$, the measure, and the constants $\\Upsilon(Q/2)$ and $\\Upsilon'(0)$ are not included.",
   ],
   conditions: fourSphereConditions,
@@ -82,13 +86,7 @@ export const s4: Sphere = {
   series: {
     name: 'instanton',
     coefficient: instantonCoefficient,
-    notes: (theory) => [
-      'Coefficient of $q^k$ at one pole, with $a=i\\sigma$, $\\epsilon_1=b$, $\\epsilon_2=b^{-1}$ and masses entering as ' +
-        '$Q/2+im$; at the other pole it is the complex conjugate.',
-      ...(gaugeGroups(theory).every(({ group }) => group.group.family === 'U')
-        ? []
-        : ['It is that of $U(n)$ at traceless $a$: the factor of the $U(1)$ is not divided out.']),
-    ],
+    notes: instantonNotes,
   },
   sources: [
     { key: 'Pestun-2007', text: 'V. Pestun, arXiv:0712.2824 (2007)' },

@@ -37,17 +37,20 @@ export interface Sphere extends SphereRules {
   readonly specialFunction: FunctionName;
   /**
    * Coefficients of a series that multiplies the integrand, by what they are called (`instanton2` for the second of
-   * `instanton`); absent where a sphere has none.
+   * `instanton`, `instanton(1, 2)` for one order a gauge group); absent where a sphere has none.
    */
   readonly series?: {
     readonly name: string;
     /** `exchanged`: the same coefficient by different terms, for a check. */
-    readonly coefficient: (theory: Theory, order: number, exchanged: boolean) => CoefficientSum;
+    readonly coefficient: (theory: Theory, order: SeriesOrder, exchanged: boolean) => CoefficientSum;
     /** Conventions to say beside a value. */
     readonly notes: (theory: Theory) => readonly string[];
   };
   readonly sources: readonly Source[];
 }
+
+/** Powers of the variables of a series, one for each gauge group in the order of the text; a number is their sum. */
+export type SeriesOrder = number | readonly number[];
 
 /**
  * A coefficient as a sum of products of closed forms; refused in words where it cannot be had. Single terms may diverge
@@ -73,6 +76,23 @@ export interface ModeFactor {
   readonly multiplicity: Form;
 }
 
+/** Modes of one field at level n, an irreducible representation of SU(2)_L x SU(2)_R; everything a form in `n`. */
+export interface FieldModes {
+  readonly field: string;
+  readonly left: Form;
+  readonly right: Form;
+  /** Their number, (2 left + 1)(2 right + 1). */
+  readonly multiplicity: Form;
+}
+
+/** Bosonic and fermionic modes that share a linear factor and the spin of SU(2)_L, for each level n >= start. */
+export interface ModePair {
+  readonly eigenvalue: Form;
+  readonly start: number;
+  readonly boson: FieldModes;
+  readonly fermion: FieldModes;
+}
+
 /** Modes for each weight of a set and each level n >= start. */
 export interface ModeTower {
   readonly weights: TheoryWeights | null;
@@ -82,6 +102,8 @@ export interface ModeTower {
   /** A factor outside the product over levels. */
   readonly prefactor: Form | null;
   readonly factors: readonly ModeFactor[];
+  /** The same modes in pairs related by supersymmetry. */
+  readonly pairs: readonly ModePair[];
   readonly from: readonly string[];
 }
 

@@ -41,6 +41,14 @@ describe('requests', () => {
       'value',
       { quantity: one('theory', 'one-loop', 'A', true), at: [{ name: 'x', value: '1/2 + i' }], digits: { value: 12 } },
     ],
+    'value instanton(1, 0) of A at m = 2': [
+      'value',
+      {
+        quantity: { ...one('theory', 'instanton', 'A'), orders: [1, 0] },
+        at: [{ name: 'm', value: '2' }],
+        digits: null,
+      },
+    ],
     "value q' of A": ['value', { quantity: one('theory', "q'", 'A'), at: [], digits: null }],
     'value log determinant of dirac by operator, 40 digits': [
       'value',

@@ -33,4 +33,47 @@ test('what cannot be had is said', () => {
   const three = theory('sphere S3', 'gauge G = SU(2)');
   expect(at('value instanton1 of t at sigma = 1', three)).toContain('`instanton1` is no quantity of `t`');
   expect(at('value instanton60 of t at sigma = 1')).toContain('too many Young diagrams with 60 boxes');
+  expect(at('value instanton(1, 2) of t at sigma = 1')).toBe(
+    '`instanton` takes one order for each gauge group, here 1 (G); 2 are given.',
+  );
+  expect(at('value vector(1) of t at sigma = 1')).toContain('`vector(1)` is no quantity of `t`; there are');
+  expect(at('plot instanton(1) of t over sigma = 0 .. 1')).toContain('`instanton(1)` is a coefficient');
+});
+
+const QUIVER = [
+  ...['sphere S4, b = 3/4', 'gauge G = SU(2)', 'gauge H = SU(2), coulomb tau', 'flavor A = U(1)'],
+  ...['matter G H A', 'hyper y fund fund 1'],
+];
+
+// A contour integral gives the value: test/fixtures/spheres/quivers.py.
+test('coefficients of a quiver by the order of each group, and of all together', () => {
+  const at = 'at sigma = -2i/7, tau = -i/5, m = -i/3, 30 digits';
+  const value = (what: string) => {
+    const result = answer(...theory(...QUIVER), `value ${what} of t ${at}`);
+    if (result.kind !== 'value') throw new Error(failureOf(result));
+    return result;
+  };
+  const both = value('instanton(1, 1)');
+  const [numerator, denominator] = (row('quiver-SU2-SU2-11').exact ?? '').split('/');
+  expect(both.notes[0]).toBe(`Exactly $\\frac{${numerator}}{${denominator}}$.`);
+  expect(both.crossCheck?.agrees).toBe('30 digits');
+  expect(both.notes.join(' ')).toContain('Coefficient of $q_1^{k_1}q_2^{k_2}\\cdots$ at one pole');
+  expect(both.notes.join(' ')).toContain('A bifundamental of mass $m$ gives');
+  expect(both.notes.join(' ')).toContain('traceless $a$ for G, H: the factor of the $U(1)$ is not divided out');
+  const parts = ['instanton(2, 0)', 'instanton(1, 1)', 'instanton(0, 2)'].map((what) => Number(value(what).value.re));
+  const whole = Number(value('instanton2').value.re);
+  expect(Math.abs(whole - parts.reduce((sum, part) => sum + part, 0))).toBeLessThan(1e-13 * Math.abs(whole));
+});
+
+// L. F. Alday, D. Gaiotto, Y. Tachikawa, arXiv:0906.3219: test/spheres/quiver-instantons.test.ts works it out.
+test('the factor of the U(1) is named where it is known', () => {
+  const notes = (group: string, flavours: number) =>
+    answer(
+      ...theory(`gauge G = ${group}`, `flavor F = U(${flavours})`, 'matter G F', 'hyper q fund fund', 'sphere S4'),
+      `value instanton1 of t at ${group.startsWith('U(') ? 'sigma1 = 1, sigma2 = 2' : 'sigma = 1'}`,
+    ).notes.join(' ');
+  expect(notes('SU(2)', 4)).toContain('it is $(1-q)^{(M_1+M_2)(M_3+M_4)/2}$');
+  expect(notes('SU(2)', 3)).not.toContain('(1-q)');
+  expect(notes('SU(2)', 3)).toContain('is not divided out');
+  expect(notes('U(2)', 4)).not.toContain('divided out');
 });

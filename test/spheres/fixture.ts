@@ -10,13 +10,15 @@ export interface Row {
   readonly how: string;
 }
 
-const file: { rows: readonly Row[] } = JSON.parse(
-  readFileSync(new URL('../fixtures/spheres/spheres.json', import.meta.url), 'utf8'),
-);
+const rows: readonly Row[] = ['spheres', 'quivers'].flatMap((name): readonly Row[] => {
+  const text = readFileSync(new URL(`../fixtures/spheres/${name}.json`, import.meta.url), 'utf8');
+  const file: { rows: readonly Row[] } = JSON.parse(text);
+  return file.rows;
+});
 
-/** A row of the reference file; throws where there is none. */
+/** A row of the reference files; throws where there is none. */
 export function row(id: string): Row {
-  const found = file.rows.find((candidate) => candidate.id === id);
+  const found = rows.find((candidate) => candidate.id === id);
   if (!found) throw new Error(`No row ${id}.`);
   return found;
 }
