@@ -1,16 +1,23 @@
 import { Form } from '../exact/form';
-import { type Factor, substitute, WEIGHT } from '../product/factor';
 import { fourSphereConditions } from '../theory/checks/four-sphere';
-import { gaugeGroups, type Multiplet, type Theory } from '../theory/theory';
-import { matterWeights, rootWeights, type TheoryWeights, type WeightedSet } from '../theory/weights';
+import { gaugeGroups } from '../theory/theory';
 import { exponential, quadratic } from './classical';
+import { hyperFactors, type RoundFunction, vectorFactors } from './eight-supercharges';
 import { instantonCoefficient, instantonNotes } from './instantons';
-import type { Sphere, TheoryProduct } from './sphere';
+import type { Sphere } from './sphere';
 
-const w = Form.symbol(WEIGHT);
 const b = Form.symbol('@b');
-const Q = Form.symbol('@Q');
-const half = Form.ratio(1, 2);
+
+const upsilon: RoundFunction = {
+  name: 'upsilon',
+  parameters: [b],
+  center: Form.symbol('@Q').mul(Form.ratio(1, 2)),
+  partner: b.inverse(),
+  round: new Map([
+    ['@b', Form.one],
+    ['@Q', Form.number(2)],
+  ]),
+};
 
 /**
  * The four-sphere, round or the ellipsoid with b > 0, four-dimensional N = 2 theories, without instantons.
@@ -47,16 +54,8 @@ export const s4: Sphere = {
     (name) => (name === '@Q' ? b.add(b.inverse()) : null),
     (name) => theory.geometry.get(name) ?? null,
   ],
-  vector: (theory) =>
-    gaugeGroups(theory).flatMap(({ group, index }) => {
-      const roots = rootWeights(theory, index).map(({ weights }) => ({ weights, multiplicity: 1 }));
-      const vectors = upsilons(roots, () => Form.i.mul(w), 1, 'vector');
-      if (theory.supersymmetry !== 4) return onRound(theory, vectors);
-      const adjoint = [...roots, { weights: null, multiplicity: group.group.rank }];
-      const hyper = upsilons(adjoint, (position) => b.inverse().add(Form.i.mul(position)), -1, 'vector');
-      return onRound(theory, [...vectors, ...hyper]);
-    }),
-  multiplet: (theory, multiplet) => onRound(theory, hypers(theory, multiplet)),
+  vector: (theory) => vectorFactors(theory, upsilon, theory.supersymmetry === 4),
+  multiplet: (theory, multiplet) => hyperFactors(theory, upsilon, multiplet),
   classical: (theory) =>
     gaugeGroups(theory).flatMap(({ group }) => {
       if (group.coupling === null) return [];
@@ -93,40 +92,3 @@ export const s4: Sphere = {
     { key: 'Hama-Hosomichi-2012', text: 'N. Hama, K. Hosomichi, arXiv:1206.6359 (2012)' },
   ],
 };
-
-/** Upsilon_b(argument(w))^(+-1) over sets of weights; the zero weight has position 0. */
-function upsilons(
-  sets: readonly WeightedSet[],
-  argument: (position: Form) => Form,
-  power: 1 | -1,
-  from: string,
-): TheoryProduct {
-  return sets.map(
-    ({ weights, multiplicity }): Factor<TheoryWeights> => ({
-      name: 'upsilon',
-      argument: argument(weights === null ? Form.zero : w),
-      parameters: [b],
-      power: power * multiplicity,
-      weights,
-      half: false,
-      from: [from],
-    }),
-  );
-}
-
-/** A half-hyper takes one of each pair of weights: its factor is even in the weight, so that any choice will do. */
-function hypers(theory: Theory, { kind, name, representations }: Multiplet): TheoryProduct {
-  const sets = matterWeights(theory.groups, representations);
-  const full = upsilons(sets, (position) => Q.mul(half).add(Form.i.mul(position)), -1, name);
-  if (kind === 'hyper') return full;
-  return full.map((factor) =>
-    factor.weights === null ? { ...factor, power: factor.power / 2 } : { ...factor, half: true },
-  );
-}
-
-/** On the round sphere b = 1 and Q = 2 from the start. */
-function onRound(theory: Theory, product: TheoryProduct): TheoryProduct {
-  if (!theory.round) return product;
-  const values = (name: string): Form | null => (name === '@b' ? Form.one : name === '@Q' ? Form.number(2) : null);
-  return substitute(product, values);
-}

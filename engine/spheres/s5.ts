@@ -1,17 +1,21 @@
 import { Form } from '../exact/form';
-import { type Factor, substitute, WEIGHT } from '../product/factor';
 import { fiveSphereConditions } from '../theory/checks/five-sphere';
-import { gaugeGroups, type Multiplet, type Theory, type TheoryGroup } from '../theory/theory';
-import { matterWeights, rootWeights, type TheoryWeights, type WeightedSet } from '../theory/weights';
+import { gaugeGroups, type TheoryGroup } from '../theory/theory';
 import { cubicTrace, exponential, quadratic } from './classical';
-import type { Sphere, TheoryProduct } from './sphere';
+import { hyperFactors, onRound, type RoundFunction, vectorFactors } from './eight-supercharges';
+import type { Sphere } from './sphere';
 
-const w = Form.symbol(WEIGHT);
-/** Sum of the periods, |omega|. */
-const total = Form.symbol('@W');
-const periods = ['@w1', '@w2', '@w3'].map((name) => Form.symbol(name));
-const last = Form.symbol('@w3');
-const half = Form.ratio(1, 2);
+const names = ['@w1', '@w2', '@w3'];
+const periods = names.map((name) => Form.symbol(name));
+
+const tripleSine: RoundFunction = {
+  name: 'tripleSine',
+  parameters: periods,
+  // Half the sum of the periods, |omega|/2.
+  center: Form.symbol('@W').mul(Form.ratio(1, 2)),
+  partner: Form.symbol('@w3'),
+  round: new Map([['@W', Form.number(3)], ...names.map((name) => [name, Form.one] as const)]),
+};
 
 /**
  * The five-sphere, round or squashed with periods w1, w2, w3, five-dimensional N = 1 theories, perturbative part.
@@ -48,22 +52,14 @@ export const s5: Sphere = {
     (name) => (name === '@W' ? Form.sum(periods) : null),
     (name) => theory.geometry.get(name) ?? null,
   ],
-  vector: (theory) =>
-    gaugeGroups(theory).flatMap(({ group, index }) => {
-      const roots = rootWeights(theory, index).map(({ weights }) => ({ weights, multiplicity: 1 }));
-      const vectors = tripleSines(roots, (position) => Form.i.mul(position), 1, 'vector');
-      if (theory.supersymmetry !== 2) return onRound(theory, vectors);
-      const adjoint = [...roots, { weights: null, multiplicity: group.group.rank }];
-      const hyper = tripleSines(adjoint, (position) => last.add(Form.i.mul(position)), -1, 'vector');
-      return onRound(theory, [...vectors, ...hyper]);
-    }),
-  multiplet: (theory, multiplet) => onRound(theory, hypers(theory, multiplet)),
+  vector: (theory) => vectorFactors(theory, tripleSine, theory.supersymmetry === 2),
+  multiplet: (theory, multiplet) => hyperFactors(theory, tripleSine, multiplet),
   classical: (theory) =>
     gaugeGroups(theory).flatMap(({ group }) => {
       const exponent = classicalExponent(group);
       if (exponent.isZero()) return [];
       const volume = periods.reduce((product, period) => product.mul(period));
-      return onRound(theory, [exponential(exponent.neg().div(volume))]);
+      return onRound(theory, tripleSine, [exponential(exponent.neg().div(volume))]);
     }),
   modes: () => ({
     kind: 'refused',
@@ -96,42 +92,4 @@ function classicalExponent(group: TheoryGroup): Form {
   if (group.coupling !== null) terms.push(Form.pi.pow(3).scale(4).div(group.coupling.pow(2)).mul(quadratic(group)));
   if (group.level !== null) terms.push(Form.pi.mul(Form.ratio(1, 3)).mul(group.level).mul(cubicTrace(group)));
   return Form.sum(terms);
-}
-
-function tripleSines(
-  sets: readonly WeightedSet[],
-  argument: (position: Form) => Form,
-  power: 1 | -1,
-  from: string,
-): TheoryProduct {
-  return sets.map(
-    ({ weights, multiplicity }): Factor<TheoryWeights> => ({
-      name: 'tripleSine',
-      argument: argument(weights === null ? Form.zero : w),
-      parameters: periods,
-      power: power * multiplicity,
-      weights,
-      half: false,
-      from: [from],
-    }),
-  );
-}
-
-/** A half-hyper takes one of each pair of weights: its factor is even in the weight, so that any choice will do. */
-function hypers(theory: Theory, { kind, name, representations }: Multiplet): TheoryProduct {
-  const sets = matterWeights(theory.groups, representations);
-  const full = tripleSines(sets, (position) => total.mul(half).add(Form.i.mul(position)), -1, name);
-  if (kind === 'hyper') return full;
-  return full.map((factor) =>
-    factor.weights === null ? { ...factor, power: factor.power / 2 } : { ...factor, half: true },
-  );
-}
-
-/** On the round sphere all periods are 1 from the start. */
-function onRound(theory: Theory, product: TheoryProduct): TheoryProduct {
-  if (!theory.round) return product;
-  return substitute(product, (name) => {
-    if (name === '@W') return Form.number(3);
-    return name.startsWith('@w') && name !== WEIGHT ? Form.one : null;
-  });
 }
