@@ -56,7 +56,11 @@ export function farPoint(at: FixedComplex, bits: number): FarPoint {
  * shortens the series.
  */
 export function stepsToFarPoint(a: DoubleComplex, order: number, bits: number): number {
-  const reach = 0.14 * bits + 8 + order;
+  return stepsToReach(a, 0.14 * bits + 8 + order);
+}
+
+/** The least number of unit steps after which |W| cos(arg W/2) >= reach and Re W >= 1. */
+export function stepsToReach(a: DoubleComplex, reach: number): number {
   const far = (steps: number): boolean => {
     const re = a.re + steps;
     const size = Math.hypot(re, a.im);

@@ -16,6 +16,7 @@ import { Rational } from '../exact/rational';
 import { bernoulliNumber } from './bernoulli';
 import { bernoulliTail, type Estimate, type FarPoint, farPoint, stepsToFarPoint, ulpsOf } from './euler-maclaurin';
 import { factorial } from './factorial';
+import { halfLogTwoPi, logGammaByShifts } from './log-gamma-precise';
 
 /**
  * W^-k zeta'(-k, W) at a far point, k >= 0, with log W given: Euler-Maclaurin (DLMF 25.11.28 differentiated, 2.10(i)).
@@ -85,9 +86,13 @@ export function scaledHurwitz(point: FarPoint, s: number, logarithm: FixedComple
  * zeta'(-k, a) = d/ds zeta(s, a) at s = -k for an integer k >= 0 and any complex a that is not 0, -1, -2, ..., with
  * `bits` fraction bits; the imaginary part is that of the continuation along Re a -> +infinity, with principal
  * logarithms (DLMF 25.11.18 for k = 0). Method: shift to a far point, Euler-Maclaurin there. The error
- * does not include that of `a`. Domain: a may need |Re a| steps; negative real parts beyond -10^5 take seconds.
+ * does not include that of `a`. For k = 0 it is log Gamma(a) - log(2 pi)/2. Domain: a may need |Re a| steps; negative real parts beyond -10^5 take seconds.
  */
 export function hurwitzZetaDerivative(k: number, a: FixedComplex, bits: number): Estimate {
+  if (k === 0) {
+    const { value, error } = logGammaByShifts(a, bits);
+    return { value: { re: value.re - halfLogTwoPi(bits), im: value.im }, error: error + 1n };
+  }
   const approximate = { re: numberFromFixed(a.re, bits), im: numberFromFixed(a.im, bits) };
   const steps = stepsToFarPoint(approximate, k, bits);
   const size = Math.hypot(approximate.re + steps, approximate.im) + Math.abs(approximate.re) + 2;

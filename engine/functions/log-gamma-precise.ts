@@ -1,17 +1,21 @@
 import { numberFromFixed, shiftRounded } from '../arithmetic/fixed';
-import { type FixedComplex, logComplex, oneComplex } from '../arithmetic/fixed-complex';
+import { type FixedComplex, logComplex, multiplyComplex } from '../arithmetic/fixed-complex';
 import { piFixed } from '../arithmetic/fixed-constants';
 import { logFixed } from '../arithmetic/fixed-log';
-import { type Estimate, farPoint, stepsToFarPoint } from './euler-maclaurin';
-import { scaledHurwitzDerivative } from './hurwitz-derivative';
+import { memoiseBounded } from '../arithmetic/memo';
+import { type Estimate, stepsToReach } from './euler-maclaurin';
 import { logTwoSinh } from './hyperbolic-precise';
-import { LogProduct } from './log-product';
+import { RisingProduct } from './rising-product';
 import type { PreciseLog } from './special-function';
+import { stirlingReach, stirlingSeries } from './stirling-series';
+
+/** More guard bits than any argument below 10^9 needs. */
+const SPARE = 40;
 
 /**
  * log Gamma(z), on the branch that is analytic off the negative axis (there the limit from above).
  * Re z < 1/2: reflection (DLMF 5.5.3). Else shifts, multiplied out so that one logarithm serves all, and Stirling's
- * series with its remainder bound (DLMF 5.11.1, 5.11(ii)): log Gamma(z) = zeta'(0, z) + log(2 pi)/2.
+ * series with its remainder bound (DLMF 5.11.1, 5.11(ii)).
  * The error covers rounding, remainder and one unit in each part of z; 'indistinct' within 4 units of a pole.
  */
 export function logGammaPrecise(z: FixedComplex, bits: number): PreciseLog {
@@ -34,34 +38,52 @@ export function logGammaPrecise(z: FixedComplex, bits: number): PreciseLog {
       error: sine.error + other.error + 4n,
     };
   }
-  const { value, error } = logGammaRight(z, bits);
+  const { value, error } = logGammaByShifts(z, bits);
   // |psi(z)| <= |log z| + 2 for Re z >= 1/2.
   const slope = Math.abs(Math.log(Math.hypot(numberFromFixed(z.re, bits), numberFromFixed(z.im, bits)))) + 4;
   return { kind: 'value', re: value.re, im: value.im, error: error + BigInt(Math.ceil(1.5 * slope)) };
 }
 
-/** log Gamma(z) for Re z >= 1/2, exactly given; the error covers rounding and the remainder. */
-export function logGammaRight(z: FixedComplex, bits: number): Estimate {
+/**
+ * log Gamma(z) for an exactly given z that is not 0, -1, -2, ...: the continuation along Re z -> +infinity with principal
+ * logarithms of z, z + 1, .... The error covers rounding and the remainder.
+ */
+export function logGammaByShifts(z: FixedComplex, bits: number): Estimate {
   const approximate = { re: numberFromFixed(z.re, bits), im: numberFromFixed(z.im, bits) };
-  const steps = stepsToFarPoint(approximate, 0, bits);
-  const size = Math.max(2, Math.hypot(approximate.re + steps, approximate.im));
-  const guard = Math.ceil(Math.log2(size) + Math.log2(Math.log2(size) + 4) + Math.log2(steps + 2)) + 12;
+  // The guard bits lengthen the series by little: the reach of eight more holds for any of them.
+  const steps = stepsToReach(approximate, stirlingReach(bits + SPARE));
+  const size = Math.hypot(approximate.re + steps, approximate.im);
+  // 3 units a step and 2 |Z|, see below: all is brought under an eighth of a unit. Fours, so that tables serve many points.
+  const guard = 4 * Math.ceil((Math.log2(3 * steps + 2 * size + 32) + 3) / 4);
   const working = bits + guard;
-  const one = oneComplex(working).re;
-  let at: FixedComplex = { re: z.re << BigInt(guard), im: z.im << BigInt(guard) };
-  const product = new LogProduct(working);
-  for (let k = 0; k < steps; k++) {
-    product.multiply(at);
-    at = { re: at.re + one, im: at.im };
-  }
-  const point = farPoint(at, working);
-  const far = scaledHurwitzDerivative(point, 0, logComplex(at, working), 0);
+  const exact = { re: z.re << BigInt(guard), im: z.im << BigInt(guard) };
+  const product = new RisingProduct(working);
+  product.multiplyRising(exact, steps);
   const below = product.logarithm();
-  const re = far.value.re + shiftRounded(logFixed(2n * piFixed(working), working), 1) - below.value.re;
-  const im = far.value.im - below.value.im;
-  const rounding = far.error + below.error + 4n;
+  const far = stirlingAt({ re: exact.re + (BigInt(steps) << BigInt(working)), im: exact.im }, working);
   return {
-    value: { re: shiftRounded(re, guard), im: shiftRounded(im, guard) },
-    error: (rounding >> BigInt(guard)) + 2n,
+    value: {
+      re: shiftRounded(far.value.re + halfLogTwoPi(working) - below.value.re, guard),
+      im: shiftRounded(far.value.im - below.value.im, guard),
+    },
+    error: ((far.error + below.error + 2n) >> BigInt(guard)) + 2n,
   };
 }
+
+/** (Z - 1/2) log Z - Z and Stirling's series, at a far point: the logarithm errs by sqrt 2, times |Z|, the product by 2. */
+export function stirlingAt(z: FixedComplex, bits: number): Estimate {
+  const series = stirlingSeries(z, bits);
+  const half = { re: z.re - (1n << BigInt(bits - 1)), im: z.im };
+  const log = z.im === 0n ? { re: logFixed(z.re, bits), im: 0n } : logComplex(z, bits);
+  const lead = multiplyComplex(half, log, bits);
+  const size = Math.hypot(numberFromFixed(z.re, bits), numberFromFixed(z.im, bits));
+  return {
+    value: { re: lead.re - z.re + series.value.re, im: lead.im - z.im + series.value.im },
+    error: series.error + BigInt(Math.ceil(1.42 * size) + 3),
+  };
+}
+
+/** log(2 pi)/2, |error| <= 1 unit. */
+export const halfLogTwoPi: (bits: number) => bigint = memoiseBounded(32, (bits: number) =>
+  shiftRounded(logFixed(piFixed(bits + 4) << 1n, bits + 4), 5),
+);
