@@ -4,6 +4,7 @@ import { numbered } from '../state/numbered';
 import { useSession } from '../state/session';
 import { useSelected } from '../state/store';
 import styles from './formula.module.css';
+import { ModePairing } from './mode-pairing';
 import { ScrollBox } from './scroll-box';
 import { Says, Tex } from './tex';
 import { useWrapMarks } from './use-wrap-marks';
@@ -31,6 +32,7 @@ export const Formula = memo(function Formula({ formula, theory }: FormulaProps) 
           <Says text={note} />
         </p>
       ))}
+      {formula.pairing ? <ModePairing tables={formula.pairing.tables} /> : null}
     </>
   );
 });

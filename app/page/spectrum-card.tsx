@@ -45,7 +45,14 @@ export function SpectrumCard({ card }: { readonly card: SpectrumCardData }) {
             >
               {tower.kind}
             </button>
-            <Tex tex={tower.latex} />
+            <span>
+              <Tex tex={tower.latex} />
+              {tower.spins === null ? null : (
+                <span className={styles.spins}>
+                  spins <Tex tex={tower.spins} /> on <Tex tex="S^3" />
+                </span>
+              )}
+            </span>
           </li>
         ))}
       </ul>

@@ -30,7 +30,7 @@ function towerLatex(tower: ModeTower, weight: Form): string {
 }
 
 /** The Vandermonde factor as the square of the weight. */
-function prefactorLatex(prefactor: Form, weight: Form): string {
+export function prefactorLatex(prefactor: Form, weight: Form): string {
   if (!prefactor.equals(weight.mul(weight))) return formInParentheses(prefactor);
   // A single coordinate is squared as it stands; in braces, since its name may carry a prime.
   const [term, ...others] = weight.terms;
@@ -52,7 +52,7 @@ function modes(factors: readonly ModeFactor[], at: (form: Form) => Form): string
 }
 
 /** n + 2 - z with the level in front. */
-function levelFirst(form: Form): string {
+export function levelFirst(form: Form): string {
   const { rest } = form.linearPart('n');
   const text = formLatex(rest);
   if (rest.isZero()) return 'n';

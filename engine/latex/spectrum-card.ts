@@ -3,7 +3,8 @@ import type { Span, TowerKind } from '../language/tree';
 import { isRemark } from '../spectrum/analyse';
 import type { ModeClass, Pairing } from '../spectrum/pairing';
 import type { SeveralClass } from '../spectrum/pairing-several';
-import { addPolynomials, type Polynomial, shiftPolynomial } from '../spectrum/polynomial';
+import { addPolynomials, type Polynomial, polynomialIn, shiftPolynomial } from '../spectrum/polynomial';
+import { spinsOnThreeSphere } from '../spectrum/sphere-spins';
 import type { Remark, WrittenTower } from '../spectrum/tower';
 import type { SpectrumView } from '../spectrum/view';
 import { closedPieces } from './closed-form';
@@ -11,6 +12,7 @@ import { indexPolynomialLatex, multiplicityLatex, sumLatex } from './polynomial'
 import { displayLatex, type Piece } from './product';
 import { indexLetters, niceStart, productPieces, severalFactorLatex, towerLatex, unpairedPieces } from './spectrum';
 import { closedNotes, type SpectrumCheck, spectrumChecks, unpairedNotes } from './spectrum-notes';
+import { symbolLatex } from './symbol';
 
 /** A formula to show, or why there is none (worded by `language/`). */
 export type SpectrumFormula =
@@ -31,7 +33,13 @@ export interface PairingLine {
 }
 
 export interface SpectrumPieces {
-  readonly towers: readonly { readonly kind: TowerKind; readonly latex: string; readonly span: Span }[];
+  readonly towers: readonly {
+    readonly kind: TowerKind;
+    readonly latex: string;
+    readonly span: Span;
+    /** Spins of its modes where they are those of a field on S^3; else null. */
+    readonly spins: string | null;
+  }[];
   readonly pairing: readonly PairingLine[];
   readonly formulas: {
     readonly product: SpectrumFormula;
@@ -47,7 +55,12 @@ const LEAD = 'Z=';
 export function spectrumPieces(view: SpectrumView): SpectrumPieces {
   const { spectrum, prepared, closed } = view;
   const { towers } = spectrum;
-  const shown = towers.map((tower) => ({ kind: tower.kind, latex: towerLatex(tower), span: tower.spans.row }));
+  const shown = towers.map((tower, place) => ({
+    kind: tower.kind,
+    latex: towerLatex(tower),
+    span: tower.spans.row,
+    spins: spinsLatex(towers, place),
+  }));
   const product = formula(productPieces(towers), []);
   if (isRemark(prepared)) {
     const refused: SpectrumFormula = { kind: 'refused', remark: prepared };
@@ -67,6 +80,20 @@ export function spectrumPieces(view: SpectrumView): SpectrumPieces {
     },
     checks: spectrumChecks(view),
   };
+}
+
+/** Of two equal towers of spinors the second is taken to be that of the other sign. */
+function spinsLatex(towers: readonly WrittenTower[], place: number): string | null {
+  const tower = towers[place] as WrittenTower;
+  const text = towerLatex(tower);
+  const before = towers.slice(0, place).filter((other) => towerLatex(other) === text).length;
+  const letter = symbolLatex(tower.ranges[0]?.name ?? 'n');
+  const half = (spin: Form): string => {
+    const twice = polynomialIn(spin.scale(2), tower.ranges[0]?.name ?? 'n') ?? [];
+    return `\\tfrac{${indexPolynomialLatex(twice, letter)}}{2}`;
+  };
+  const labels = spinsOnThreeSphere(tower, before % 2 === 1);
+  return labels?.map(({ left, right }) => `\\left(${half(left)},${half(right)}\\right)`).join('\\oplus') ?? null;
 }
 
 function formula(pieces: readonly Piece[], notes: readonly string[]): SpectrumFormula {

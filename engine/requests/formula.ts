@@ -2,6 +2,7 @@ import { FormError } from '../exact/form';
 import { functions } from '../functions/table';
 import type { FormulaForm } from '../language/tree';
 import { formLatex } from '../latex/form';
+import { pairingLatex, pairingTables } from '../latex/mode-pairing';
 import { modesLatex } from '../latex/modes';
 import { displayLatex, type Piece, productLatex } from '../latex/product';
 import { symbolLatex } from '../latex/symbol';
@@ -59,7 +60,11 @@ function definedView(printable: Printable, form: FormulaForm): FormulaView {
   if (made === null) {
     const modes = sphere.modes(theory);
     if (modes.kind === 'refused') return { kind: 'refused', message: modes.message };
-    return view(printable, modesLatex(theory.groups, modes.towers), notes);
+    const shown = view(printable, modesLatex(theory.groups, modes.towers), notes);
+    const tables = pairingTables(theory.groups, modes.towers);
+    return shown.kind === 'refused' || tables.length === 0
+      ? shown
+      : { ...shown, pairing: { tables, latex: pairingLatex(tables) } };
   }
   const style = form === 'unpaired' ? ({ kind: 'modes' } as const) : ({ kind: 'function', notation } as const);
   const key = `${style.kind}|${made.product.map(factorKey).join('|')}`;

@@ -1,3 +1,4 @@
+import type { PairingTable } from '../latex/mode-pairing';
 import type { Analysis } from './analysis';
 import { isRequest } from './analysis';
 import type { Surroundings } from './answer';
@@ -19,6 +20,8 @@ export interface Report {
     /** Why a form has no LaTeX, by form; empty when all have. */
     readonly refused: Readonly<Record<string, string>>;
     readonly checks: readonly Check[];
+    /** Which bosonic and fermionic modes pair, where all modes are known. */
+    readonly pairing?: readonly PairingTable[];
   }[];
   readonly spectra: readonly {
     readonly name: string;
@@ -50,7 +53,7 @@ export function report(analysis: Analysis, surroundings: Surroundings): { output
       const refusal: FormulaView = { kind: 'refused', message: unreadable(entry, name) ?? '' };
       const views = FORMS.map((form) => [form, theory === null ? refusal : formulaView(theory, form)] as const);
       const { line } = analysis.lines.place(entry.block.span.from);
-      return { name, line, ...latexOf(views), checks: theoryChecks(entry) };
+      return { name, line, ...latexOf(views), checks: theoryChecks(entry), ...pairingOf(views) };
     }),
     spectra: [...analysis.spectra.values()].map(({ block }) => {
       const card = spectrumCard(analysis, block);
@@ -71,6 +74,13 @@ function latexOf(views: readonly (readonly [string, FormulaView])[]): {
   const latex = views.map(([form, view]) => [form, view.kind === 'formula' ? view.latex : null] as const);
   const refused = views.flatMap(([form, view]) => (view.kind === 'refused' ? [[form, view.message] as const] : []));
   return { latex: Object.fromEntries(latex), refused: Object.fromEntries(refused) };
+}
+
+function pairingOf(views: readonly (readonly [string, FormulaView])[]): { pairing?: readonly PairingTable[] } {
+  for (const [, view] of views) {
+    if (view.kind === 'formula' && view.pairing !== undefined) return { pairing: view.pairing.tables };
+  }
+  return {};
 }
 
 /** A result without the tag that only the page needs; notes only where there are some. */

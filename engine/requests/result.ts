@@ -1,4 +1,5 @@
 import type { FormulaForm, Severity, Span } from '../language/tree';
+import type { PairingTable } from '../latex/mode-pairing';
 
 /**
  * What the engine answers with: plain data that crosses to the page, to the batch command and into files unchanged.
@@ -59,6 +60,8 @@ export interface TheoryCard extends CardBase {
   readonly multipletKinds: readonly string[];
   /** Where a new row goes (offset of the end of the last row or of the header), and the indentation to use. */
   readonly insertRowAt: number | null;
+  /** Where a line for a new group goes. */
+  readonly insertGroupAt: number | null;
   readonly indent: string;
   readonly checks: readonly Check[];
   readonly formulas: Readonly<Record<FormulaForm, FormulaView>>;
@@ -77,6 +80,10 @@ export interface TheoryColumn {
   readonly role: 'gauge' | 'flavor' | 'R';
   /** Normalised group name (`SU(3)`), for the representation chooser; null for R. */
   readonly group: string | null;
+  /** Where the column's name stands in the header of the table. */
+  readonly headSpan: Span;
+  /** The group as typed, and where; null for R and for names of no group. */
+  readonly typed: { readonly text: string; readonly span: Span } | null;
 }
 
 export interface TheoryRow {
@@ -118,6 +125,8 @@ export type FormulaView =
       readonly latex: string;
       /** Remarks in words below the formula (`$...$` allowed). */
       readonly notes: readonly string[];
+      /** Of all modes, where it is known: which bosons and fermions pair; and the tables as one LaTeX array. */
+      readonly pairing?: { readonly tables: readonly PairingTable[]; readonly latex: string };
     }
   | { readonly kind: 'refused'; readonly message: string };
 
@@ -132,7 +141,13 @@ export interface FormulaPiece {
 export interface SpectrumCard extends CardBase {
   readonly kind: 'spectrum';
   readonly name: string;
-  readonly towers: readonly { readonly kind: string; readonly latex: string; readonly span: Span }[];
+  readonly towers: readonly {
+    readonly kind: string;
+    readonly latex: string;
+    readonly span: Span;
+    /** Spins of SU(2) x SU(2), LaTeX, where the modes are those of a field on S^3. */
+    readonly spins: string | null;
+  }[];
   readonly pairing: readonly {
     /** Class of linear factors, LaTeX, and the net multiplicity left, LaTeX. */
     readonly factor: string;
