@@ -31,8 +31,8 @@ export function severalSumOnce(
 
 /**
  * multiplicity times the regularised sum of log(w.n + shift), that is -multiplicity log Gamma_N(shift|periods). When
- * all periods point to the left, log(-1) = i pi is taken out. The error is the difference of two values with different
- * numbers of steps, besides rounding.
+ * all periods point to the left, log(-1) = i pi is taken out. The error is proved for positive periods; else it is the
+ * difference of two values with different numbers of steps, besides rounding.
  */
 export function severalSum(
   shift: Form,
@@ -52,7 +52,7 @@ export function severalSum(
   const factor = estimateOf(multiplicity, working);
   if (x === null || factor === null || !w.every((p) => p !== null)) return 'spectrum-undefined';
   const first = logBarnesGamma(x, w, working, further);
-  const second = twice ? logBarnesGamma(x, w, working, further + FURTHER_STEPS) : first;
+  const second = twice && !first?.proved ? logBarnesGamma(x, w, working, further + FURTHER_STEPS) : first;
   if (first === null || second === null) return 'spectrum-too-far';
   const gap = sizeOf(difference(first.value, second.value));
   const value = { value: negative(second.value), error: first.error + second.error + gap };

@@ -2,12 +2,13 @@
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
 import { numberFromFixed } from '../../engine/arithmetic/fixed';
-import type { FixedComplex } from '../../engine/arithmetic/fixed-complex';
+import { absoluteComplex, type FixedComplex, subtractComplex } from '../../engine/arithmetic/fixed-complex';
 import { formFixed } from '../../engine/arithmetic/form-fixed';
 import { logBarnesGamma } from '../../engine/functions/barnes-gamma';
 import { barnesGammaDouble } from '../../engine/functions/barnes-gamma-double';
 import fixture from '../fixtures/spectra/mpmath.json';
 import { parseForm } from '../spectrum/parse-form';
+import { arbitraryFixed } from './arbitrary-fixed';
 import { decimalFixed } from './decimal-fixed';
 
 const BITS = 160;
@@ -70,5 +71,35 @@ describe('log Gamma_N', () => {
     const many = logGamma(x, periods, 6);
     expect(Math.abs(Number(few.value.re - many.value.re))).toBeLessThan(Number(few.error + many.error));
     expect(Math.abs(Number(few.value.im - many.value.im))).toBeLessThan(Number(few.error + many.error));
+  });
+
+  test('errs by no more than stated: the same point with twice the bits', () => {
+    const real = fc.tuple(arbitraryFixed(1, 6), fc.constantFrom(0n, 1n)).map(
+      ([x, narrow]) =>
+        (bits: number) =>
+          x(bits) >> narrow,
+    );
+    fc.assert(
+      fc.property(
+        arbitraryFixed(-8, 20),
+        arbitraryFixed(-20, 20),
+        fc.array(real, { minLength: 1, maxLength: 2 }),
+        fc.integer({ min: 60, max: 200 }),
+        (re, im, w, bits) => {
+          const x = { re: re(bits), im: im(bits) };
+          // Off the real line, no lattice point is met.
+          if (x.re < 1n && -8n < x.im && x.im < 8n) return;
+          const periods = w.map((period) => ({ re: period(bits), im: 0n }));
+          const coarse = logBarnesGamma(x, periods, bits);
+          const lift = (z: FixedComplex): FixedComplex => ({ re: z.re << BigInt(bits), im: z.im << BigInt(bits) });
+          const fine = logBarnesGamma(lift(x), periods.map(lift), 2 * bits);
+          if (coarse === null || fine === null) throw new Error('too many points');
+          expect(coarse.proved).toBe(true);
+          const gap = absoluteComplex(subtractComplex(lift(coarse.value), fine.value));
+          expect(gap).toBeLessThanOrEqual((coarse.error << BigInt(bits)) + fine.error);
+        },
+      ),
+      { numRuns: 30 },
+    );
   });
 });
