@@ -22,7 +22,16 @@ function shared(before: unknown, after: unknown): unknown {
 }
 
 /** Where things stand in the text; it changes with every keystroke above them and draws nothing. */
-const places: ReadonlySet<string> = new Set(['span', 'lineSpan', 'nameSpan', 'valueSpan', 'insertRowAt', 'line']);
+const places: ReadonlySet<string> = new Set([
+  'span',
+  'lineSpan',
+  'nameSpan',
+  'valueSpan',
+  'headSpan',
+  'insertRowAt',
+  'insertGroupAt',
+  'line',
+]);
 
 /** Whether two values of plain data differ in nothing but their places in the text. */
 export function sameButForPlace(left: unknown, right: unknown): boolean {

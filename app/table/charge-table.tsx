@@ -9,8 +9,11 @@ import { useSession } from '../state/session';
 import { useSelected } from '../state/store';
 import { Cell } from './cell';
 import styles from './charge-table.module.css';
+import { addedGroup, changedGroup } from './group-edits';
 import { RepresentationDialog } from './representation-dialog';
 import { addedRow, cellChange, copiedRow, movedRow, removedRow } from './row-edits';
+
+const GROUPS = ['gauge', 'flavor'] as const;
 
 interface Choosing {
   readonly row: number;
@@ -56,9 +59,18 @@ export function ChargeTable({ card }: { readonly card: TheoryCard }) {
               <th scope="col">
                 <span className="heard">multiplet</span>
               </th>
-              {card.columns.map((column) => (
+              {card.columns.map((column, index) => (
                 <th key={column.name} scope="col" title={column.name}>
-                  <Tex tex={column.latex} />
+                  {column.typed ? (
+                    <Cell
+                      label={`Group ${column.name}`}
+                      text={column.typed.text}
+                      latex={column.latex}
+                      onChange={(group) => edit((text, here) => changedGroup(text, here, index, group))}
+                    />
+                  ) : (
+                    <Tex tex={column.latex} />
+                  )}
                 </th>
               ))}
               <th className={styles.toolsHead}>
@@ -81,23 +93,26 @@ export function ChargeTable({ card }: { readonly card: TheoryCard }) {
           </tbody>
         </table>
       </div>
-      {card.insertRowAt === null ? null : (
-        <p className={styles.adders}>
-          {card.multipletKinds.map((kind) => (
-            <WordButton
-              key={kind}
-              onClick={() =>
-                edit((text, here) => {
-                  const change = addedRow(text, here, kind);
-                  return change && [change];
-                })
-              }
-            >
-              + {kind}
-            </WordButton>
-          ))}
-        </p>
-      )}
+      <p className={styles.adders}>
+        {(card.insertRowAt === null ? [] : card.multipletKinds).map((kind) => (
+          <WordButton
+            key={kind}
+            onClick={() =>
+              edit((text, here) => {
+                const change = addedRow(text, here, kind);
+                return change && [change];
+              })
+            }
+          >
+            + {kind}
+          </WordButton>
+        ))}
+        {(card.insertGroupAt === null ? [] : GROUPS).map((role) => (
+          <WordButton key={role} onClick={() => edit((text, here) => addedGroup(text, here, role))}>
+            + {role} group
+          </WordButton>
+        ))}
+      </p>
       {choosing ? (
         <RepresentationDialog
           group={choosing.group}

@@ -39,6 +39,15 @@ export class TheoryCard {
     await expect(this.field(multiplet, column)).toHaveCount(0);
   }
 
+  /** Another group in the place of a column's. */
+  async editGroup(column: string, group: string): Promise<void> {
+    await this.root.getByRole('button', { name: `Group ${column}:` }).click();
+    const field = this.root.getByRole('textbox', { name: `Group ${column}` });
+    await field.fill(group);
+    await this.page.keyboard.press('Enter');
+    await expect(field).toHaveCount(0);
+  }
+
   /** The formula's LaTeX as the typeset pieces carry it for assistive technology. */
   async formula(): Promise<string> {
     return (await this.pieces.locator('annotation').allTextContents()).join(' ');

@@ -66,6 +66,31 @@ test('multiplets are added, copied, moved and removed', async ({ page }) => {
   await expect.poll(() => notebook.text()).toBe(text);
 });
 
+test('groups are added and changed', async ({ page }) => {
+  const notebook = new NotebookPage(page);
+  await notebook.openText(text);
+  const theory = notebook.theory('gauge2');
+  await theory.word('+ flavor group').click();
+  await expect.poll(() => notebook.text()).toBe(`# Table
+
+theory gauge2
+  sphere  S3
+  gauge   G = SU(2)
+  flavor  F = U(1)
+  matter      G      F   R
+  chiral  q   fund   0   1/2
+  chiral  p   fund   0   1/3
+`);
+  await theory.edit('q', 'F', '1');
+  await theory.editGroup('G', 'SU(3)');
+  await expect.poll(async () => line(await notebook.text(), 5)).toBe('  gauge   G = SU(3)');
+  await expect.poll(() => theory.formula()).toContain('-m');
+  await theory.word('+ gauge group').click();
+  await expect.poll(async () => line(await notebook.text(), 7)).toBe('  gauge   H = U(1)');
+  for (let step = 0; step < 4; step += 1) await notebook.undo();
+  await expect.poll(() => notebook.text()).toBe(text);
+});
+
 test('a representation is chosen from the list', async ({ page }) => {
   const notebook = new NotebookPage(page);
   await notebook.openText(text.replace('SU(2)', 'SU(3)'));

@@ -1,6 +1,6 @@
 import { FormError } from '../exact/form';
 import { functions } from '../functions/table';
-import type { FormulaForm, MultipletRow, Span, TheoryBlock } from '../language/tree';
+import type { FormulaForm, MultipletRow, Name, Span, TheoryBlock } from '../language/tree';
 import { formLatex } from '../latex/form';
 import { printer } from '../latex/product';
 import { representationLatex } from '../latex/representation';
@@ -34,7 +34,7 @@ export function theoryCard(
     nameSpan: block.name.span,
     sphereLatex: theory && sphere ? caption(sphere, own) : (block.sphere?.sphere.name ?? ''),
     supersymmetry: `N = ${block.supersymmetry?.value ?? sphere?.minimalSupersymmetry ?? 2}`,
-    columns: (block.header?.columns ?? []).map(({ name }) => column(name, groups)),
+    columns: (block.header?.columns ?? []).map((head) => column(head, block, groups)),
     rows: block.multiplets.map((row) =>
       tableRow(
         analysis.text,
@@ -43,7 +43,8 @@ export function theoryCard(
       ),
     ),
     multipletKinds: sphere?.multiplets ?? [],
-    insertRowAt: insertion(analysis.text, block),
+    insertRowAt: lineAfter(analysis.text, block.multiplets.at(-1) ?? block.header),
+    insertGroupAt: lineAfter(analysis.text, block.groups.at(-1) ?? block.sphere),
     indent: indentOf(analysis.text, block),
     checks: theory && sphere ? checks(own) : [],
     formulas: formulas(printable, own ? unreadable(own, block.name.name) : SAME_NAME),
@@ -62,13 +63,16 @@ function caption(sphere: Sphere, entry: TheoryEntry | undefined): string {
   return [sphere.latex(theory), ...squashing].join(',\\ ');
 }
 
-function column(name: string, groups: readonly TheoryGroup[]): TheoryColumn {
-  if (name === 'R') return { name, latex: 'R', role: 'R', group: null };
+function column({ name, span }: Name, block: TheoryBlock, groups: readonly TheoryGroup[]): TheoryColumn {
+  const line = block.groups.find((candidate) => candidate.name.name === name);
+  const typed = line ? { text: line.group.text, span: line.group.span } : null;
+  const place = { name, headSpan: span, typed };
+  if (name === 'R') return { ...place, latex: 'R', role: 'R', group: null };
   const group = groups.find((candidate) => candidate.name === name);
-  if (!group) return { name, latex: symbolLatex(name), role: 'flavor', group: null };
+  if (!group) return { ...place, latex: symbolLatex(name), role: 'flavor', group: null };
   const levels = [group.level, group.abelianLevel].filter((level) => level !== null).map(formLatex);
   const subscript = levels.length === 0 ? '' : `_{${levels.join(',')}}`;
-  return { name, latex: group.group.latex + subscript, role: group.role, group: group.group.name };
+  return { ...place, latex: group.group.latex + subscript, role: group.role, group: group.group.name };
 }
 
 function tableRow(text: string, row: MultipletRow, read: ReadRow | undefined): TheoryRow {
@@ -98,9 +102,8 @@ function wholeLine(text: string, span: Span): Span {
   return { from, to };
 }
 
-function insertion(text: string, block: TheoryBlock): number | null {
-  const last = block.multiplets.at(-1) ?? block.header;
-  return last ? wholeLine(text, last.span).to : null;
+function lineAfter(text: string, part: { readonly span: Span } | null | undefined): number | null {
+  return part ? wholeLine(text, part.span).to : null;
 }
 
 function indentOf(text: string, block: TheoryBlock): string {

@@ -32,6 +32,7 @@ function card(text: string): TheoryCard {
       cells: words.slice(2),
     };
   });
+  const headSpan = { from: 0, to: 0 };
   const refused = { kind: 'refused', message: '' } as const;
   return {
     kind: 'theory',
@@ -43,13 +44,14 @@ function card(text: string): TheoryCard {
     sphereLatex: '',
     supersymmetry: '',
     columns: [
-      { name: 'G', latex: 'G', role: 'gauge', group: 'SU(3)' },
-      { name: 'F', latex: 'F', role: 'flavor', group: 'SU(2)' },
-      { name: 'R', latex: 'R', role: 'R', group: null },
+      { name: 'G', latex: 'G', role: 'gauge', group: 'SU(3)', headSpan, typed: null },
+      { name: 'F', latex: 'F', role: 'flavor', group: 'SU(2)', headSpan, typed: null },
+      { name: 'R', latex: 'R', role: 'R', group: null, headSpan, typed: null },
     ],
     rows,
     multipletKinds: ['chiral'],
     insertRowAt: text.length,
+    insertGroupAt: null,
     indent: '  ',
     checks: [],
     formulas: { modes: refused, unpaired: refused, functions: refused, elementary: refused },
