@@ -85,7 +85,7 @@ function theoryCurve(
   const resolved = resolvePoint(analysis, sphere, theory, at, free, 'zero', namesIn(theory, raw));
   if (resolved.kind === 'failure') return resolved.message;
   const { values, notes } = resolved.point;
-  return productCurve(what.name, elementary(sphere, theory, raw, new Map()).product, axes, values, notes);
+  return productCurve(what.name, elementary(sphere, theory, raw).product, axes, values, notes);
 }
 
 function productCurve(

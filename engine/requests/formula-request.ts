@@ -3,6 +3,7 @@ import type { FormulaRequest } from '../language/tree';
 import { type ElementaryProduct, elementary, isOpen, quantity } from '../spheres/quantity';
 import type { Analysis } from './analysis';
 import { type Answer, failure } from './answer';
+import { fixedValues } from './fixed-values';
 import { formulaView, type Printable } from './formula';
 import type { FormulaResult } from './result';
 import { spectrumFormula } from './spectrum-card';
@@ -41,11 +42,7 @@ export function preferredForm(printable: Printable): 'elementary' | 'functions' 
 export function printableTheory(analysis: Analysis, name: string, notation: number): Printable | null {
   const entry = analysis.theories.get(name);
   if (!entry?.sphere || !entry.built?.theory) return null;
-  const fixed = new Map(
-    [...analysis.parameters].flatMap(([parameter, { value, range }]) =>
-      value === null || range !== null ? [] : [[parameter, value] as const],
-    ),
-  );
+  const fixed = fixedValues(analysis, entry);
   const { sphere } = entry;
   const { theory } = entry.built;
   const oneLoop = quantity(sphere, theory, 'one-loop') ?? [];

@@ -148,7 +148,7 @@ function fillUnset(
   const couplings = open(settable.couplings);
   if (couplings.length > 0)
     return `The coupling has no value: add \`at ${couplings.map((name) => `${name} = 1`).join(', ')}\`.`;
-  const masses = open(settable.masses);
+  const masses = open(settable.masses).filter((name) => !settable.parameters.includes(name));
   const backgrounds = open(settable.backgrounds);
   for (const name of [...needed, ...masses, ...backgrounds]) set.set(name, Form.zero);
   if (needed.length > 0) notes.push(`Not set, taken as zero: ${needed.join(', ')}.`);

@@ -37,7 +37,7 @@ export function runValue(analysis: Analysis, request: ValueRequest, surroundings
   if (raw === null) return failure(of, unknownQuantity(entry, quantity));
   const resolved = resolvePoint(analysis, sphere, theory, request.at, [], 'error', namesIn(theory, raw));
   if (resolved.kind === 'failure') return failure(of, resolved.message);
-  const simple = elementary(sphere, theory, raw, new Map()).product;
+  const simple = elementary(sphere, theory, raw).product;
   const report = (says: string) => (done: number, of: number) => {
     if (!surroundings.progress({ done, of, says })) throw new Unwanted();
   };

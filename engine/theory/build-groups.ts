@@ -15,7 +15,7 @@ export function buildGroups(
   const groups: TheoryGroup[] = [];
   const backgrounds = new Set<string>();
   const couplings = new Set<string>();
-  const taken = new Set<string>(parameters.keys());
+  const taken = new Set<string>();
   const count = { gauge: 0, flavor: 0 };
   for (const line of lines) {
     const read = parseGroup(line.group.text);
@@ -28,7 +28,11 @@ export function buildGroups(
     const values = readOptions(line, group, parameters, rules, { backgrounds, couplings }, report);
     const stem = values.symbol ?? (line.role === 'gauge' ? 'sigma' : 'm') + "'".repeat(place);
     const coordinates = coordinateNames(stem, group);
-    const clash = coordinates.find((name) => taken.has(name));
+    const dependent = dependentForms(group, coordinates);
+    // A parameter may give a mass its value, but no coordinate that is integrated over or follows from others.
+    const clash = coordinates.find(
+      (name) => taken.has(name) || (parameters.has(name) && (line.role === 'gauge' || dependent.has(name))),
+    );
     if (clash !== undefined) {
       report(problem('coordinate-taken', line.span, { name: clash, group: line.name.name, role: line.role }));
       continue;
@@ -40,7 +44,7 @@ export function buildGroups(
       group,
       coordinates,
       fluxes: coordinateNames(`flux${"'".repeat(place)}`, group),
-      dependent: dependentForms(group, coordinates),
+      dependent,
       level: values.level ?? null,
       abelianLevel: values.abelian ?? null,
       fi: values.fi ?? null,
@@ -49,7 +53,8 @@ export function buildGroups(
       span: line.span,
     });
   }
-  const free = (names: ReadonlySet<string>): string[] => [...names].filter((name) => !taken.has(name));
+  const free = (names: ReadonlySet<string>): string[] =>
+    [...names].filter((name) => !taken.has(name) && !parameters.has(name));
   return { groups, backgrounds: free(backgrounds), couplings: free(couplings) };
 }
 

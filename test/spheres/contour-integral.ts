@@ -31,7 +31,7 @@ export function partitionFunction(
   // On the real line as it is plotted: simplified, and in real variables.
   const { re, im } =
     angle === 0
-      ? realProgram(elementary(s3, theory, product, new Map()).product, names, values)(points)
+      ? realProgram(elementary(s3, theory, product).product, names, values)(points)
       : complexProgram(product, names, values).at(turned(Math.cos(angle)), turned(-Math.sin(angle)));
   const measure = gauge.reduce(
     (product, { group }) => (product * group.unitMeasure.toNumber()) / Number(group.weylOrder),
