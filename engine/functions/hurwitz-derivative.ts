@@ -17,6 +17,7 @@ import { bernoulliNumber } from './bernoulli';
 import { bernoulliTail, type Estimate, type FarPoint, farPoint, stepsToFarPoint, ulpsOf } from './euler-maclaurin';
 import { factorial } from './factorial';
 import { halfLogTwoPi, logGammaByShifts } from './log-gamma-precise';
+import { canWeigh, powerWeightedLogarithms } from './weighted-logarithms';
 
 /**
  * W^-k zeta'(-k, W) at a far point, k >= 0, with log W given: Euler-Maclaurin (DLMF 25.11.28 differentiated, 2.10(i)).
@@ -100,23 +101,42 @@ export function hurwitzZetaDerivative(k: number, a: FixedComplex, bits: number):
   const guard = Math.ceil((k + 1) * Math.log2(size) + Math.log2(Math.log2(size) + 4)) + 16;
   const working = bits + guard;
   const exact = { re: a.re << BigInt(guard), im: a.im << BigInt(guard) };
-  let sum = zeroComplex;
-  let z = exact;
-  for (let n = 0; n < steps; n++) {
-    sum = addComplex(sum, multiplyComplex(integerPowerComplex(z, k, working), logComplex(z, working), working));
-    z = { re: z.re + (1n << BigInt(working)), im: z.im };
-  }
+  const below = canWeigh(steps, k)
+    ? powerWeightedLogarithms(exact, steps, k, working)
+    : singleLogarithms(exact, steps, k, working);
+  const z = { re: exact.re + (BigInt(steps) << BigInt(working)), im: exact.im };
   const point = farPoint(z, working);
   const power = integerPowerComplex(z, k, working);
   const weight = k * point.log2Size;
   const tail = scaledHurwitzDerivative(point, k, logComplex(z, working), weight);
-  const total = subtractComplex(multiplyComplex(power, tail.value, working), sum);
-  const rounding =
-    (tail.error << BigInt(Math.ceil(weight) + 1)) + ulpsOf(Math.log2(8 * (steps + 2)) + guard - 16 - working, working);
+  const total = subtractComplex(multiplyComplex(power, tail.value, working), below.value);
+  // The power errs by 3 k |z|^(k-1) units, next to a tail of |z| log |z|.
+  const powerError = ulpsOf(
+    Math.log2(4 * (k + 1) * (Math.log2(size) + 4)) + weight + Math.log2(size) - working,
+    working,
+  );
+  const rounding = (tail.error << BigInt(Math.ceil(weight) + 1)) + below.error + powerError;
   return {
     value: { re: total.re >> BigInt(guard), im: total.im >> BigInt(guard) },
     error: (rounding >> BigInt(guard)) + 2n,
   };
+}
+
+/** The same sum as powerWeightedLogarithms, term by term. */
+function singleLogarithms(a: FixedComplex, steps: number, k: number, bits: number): Estimate {
+  let value = zeroComplex;
+  let error = 0;
+  let z = a;
+  for (let n = 0; n < steps; n++) {
+    const power = integerPowerComplex(z, k, bits);
+    const log = logComplex(z, bits);
+    value = addComplex(value, multiplyComplex(power, log, bits));
+    const size = numberFromFixed(absoluteComplex(z), bits) + 1;
+    // The power errs by 3 k max(1, |z|^k) units, the logarithm by 1.5.
+    error += 3 * (k + 1) * size ** k * (numberFromFixed(absoluteComplex(log), bits) + 1) + 1.5;
+    z = { re: z.re + (1n << BigInt(bits)), im: z.im };
+  }
+  return { value, error: BigInt(Math.ceil(error)) };
 }
 
 function negative(z: FixedComplex): FixedComplex {

@@ -2,9 +2,20 @@
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
 import { numberFromFixed } from '../../engine/arithmetic/fixed';
-import { integerPowerComplex, logComplex, multiplyComplex } from '../../engine/arithmetic/fixed-complex';
+import {
+  absoluteComplex,
+  addComplex,
+  type FixedComplex,
+  integerPowerComplex,
+  logComplex,
+  multiplyComplex,
+  subtractComplex,
+  zeroComplex,
+} from '../../engine/arithmetic/fixed-complex';
 import { hurwitzZetaDerivative } from '../../engine/functions/hurwitz-derivative';
+import { powerWeightedLogarithms } from '../../engine/functions/weighted-logarithms';
 import fixture from '../fixtures/spectra/mpmath.json';
+import { arbitraryFixed } from './arbitrary-fixed';
 import { decimalFixed } from './decimal-fixed';
 
 const BITS = 120;
@@ -41,6 +52,57 @@ describe("zeta'(-k, a)", () => {
         expect(Math.abs(gap(here.value.im, next.value.im, term.im))).toBeLessThanOrEqual(allowed);
       }),
       { numRuns: 25 },
+    );
+  });
+
+  test('errs by no more than stated: the same point with twice the bits', () => {
+    fc.assert(
+      fc.property(
+        fc.integer({ min: 0, max: 7 }),
+        arbitraryFixed(-12, 30),
+        arbitraryFixed(-20, 20),
+        fc.integer({ min: 60, max: 220 }),
+        (k, re, im, bits) => {
+          const a = { re: re(bits), im: im(bits) };
+          if (a.re <= 0n && a.im === 0n && BigInt.asUintN(bits, a.re) === 0n) return;
+          const lift = (z: FixedComplex): FixedComplex => ({ re: z.re << BigInt(bits), im: z.im << BigInt(bits) });
+          const coarse = hurwitzZetaDerivative(k, a, bits);
+          const fine = hurwitzZetaDerivative(k, lift(a), 2 * bits);
+          const gap = absoluteComplex(subtractComplex(lift(coarse.value), fine.value));
+          expect(gap).toBeLessThanOrEqual((coarse.error << BigInt(bits)) + fine.error);
+        },
+      ),
+      { numRuns: 60 },
+    );
+  });
+
+  test('logarithms weighted by powers: products and single terms agree', () => {
+    const bits = 150;
+    fc.assert(
+      fc.property(
+        fc.integer({ min: 1, max: 4 }),
+        fc.integer({ min: 0, max: 30 }),
+        arbitraryFixed(-12, 30),
+        arbitraryFixed(-20, 20),
+        (k, steps, re, im) => {
+          const a = { re: re(bits), im: im(bits) };
+          const points = Array.from({ length: steps }, (_, n) => ({
+            re: a.re + (BigInt(n) << BigInt(bits)),
+            im: a.im,
+          }));
+          if (points.some((z) => z.re === 0n && z.im === 0n)) return;
+          const { value, error } = powerWeightedLogarithms(a, steps, k, bits);
+          const fine = bits + 100;
+          let sum = zeroComplex;
+          for (const point of points) {
+            const z = { re: point.re << 100n, im: point.im << 100n };
+            const term = multiplyComplex(integerPowerComplex(z, k, fine), logComplex(z, fine), fine);
+            sum = addComplex(sum, term);
+          }
+          const gap = absoluteComplex(subtractComplex({ re: value.re << 100n, im: value.im << 100n }, sum));
+          expect(gap >> 100n).toBeLessThanOrEqual(error);
+        },
+      ),
     );
   });
 });
