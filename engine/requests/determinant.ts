@@ -18,6 +18,7 @@ const ROUTES = {
   rootless: 'the zeta function of each whole eigenvalue, without its roots',
   roots: 'each eigenvalue by its roots',
   closed: 'the closed form, each function by its own routine',
+  contour: 'each multiple Gamma function by a contour integral',
   further: 'the same sums from further steps',
 } as const;
 
@@ -59,16 +60,19 @@ export function runDeterminant(
 
 /** Cut-offs at which the product is shown, and the digits it is computed to. */
 const CUTOFFS = [10, 30, 100, 300, 1000];
+/** In several indices the number of factors grows with a power of the cut-off. */
+const CUTOFFS_EACH = [5, 10, 20, 40, 80];
 const CONVERGENCE_DIGITS = 16;
 
-/** Regulated partial products beside their limit; nothing where they are not defined (towers in several indices). */
+/** Regulated partial products beside their limit; nothing where they are not defined. */
 function convergence(
   spectrum: Spectrum,
   { prescription }: DeterminantQuantity,
   values: ReadonlyMap<string, Form>,
   limit: Ball,
 ): Pick<ValueResult, 'convergence'> {
-  const products = partialProducts(spectrum, prescription, values, CUTOFFS, CONVERGENCE_DIGITS);
+  const cutoffs = spectrum.towers.some(({ ranges }) => ranges.length > 1) ? CUTOFFS_EACH : CUTOFFS;
+  const products = partialProducts(spectrum, prescription, values, cutoffs, CONVERGENCE_DIGITS);
   if (isRemark(products)) return {};
   return {
     convergence: products.map(({ cutoff, sum, counterterms, regulated }) => {

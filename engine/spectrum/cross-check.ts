@@ -23,12 +23,12 @@ import { polynomialRoots } from './polynomial-roots';
 import type { Prepared } from './prepare';
 import { recognise } from './recognise';
 import { type Prescription, rootlessSum } from './rootless-sum';
-import { severalSumOnce } from './several-sum';
+import { severalSumByContour, severalSumFurther } from './several-sum';
 import { estimateOf, scaleEstimate, sumOf } from './total';
 import type { Tower, TowerFactor } from './tower';
 
 /** How a second value was found. */
-export type CheckRoute = 'rootless' | 'roots' | 'closed' | 'further';
+export type CheckRoute = 'rootless' | 'roots' | 'closed' | 'contour' | 'further';
 
 export interface CheckValue {
   readonly route: CheckRoute;
@@ -38,7 +38,8 @@ export interface CheckValue {
 /**
  * log det by a way of its own. By factors, where the paired spectrum has a closed form in sines, that one, by the
  * routines of its functions. Else tower by tower and without pairing: eigenvalues of linear and quadratic factors as one polynomial
- * without its roots, those with other factors by their roots, several indices by further steps of the recursion.
+ * without its roots, those with other factors by their roots, several indices by a contour integral, or by further steps
+ * of the recursion where that is out of reach.
  */
 export function checkValue(
   { towers, pairing }: Prepared,
@@ -62,7 +63,7 @@ export function checkValue(
     routes.add(found.route);
   }
   // The weakest way names the whole.
-  const route = (['further', 'roots', 'rootless'] as const).find((r) => routes.has(r)) ?? 'rootless';
+  const route = (['further', 'contour', 'roots', 'rootless'] as const).find((r) => routes.has(r)) ?? 'rootless';
   return { route, estimate: fewerBits(sumOf(parts), 16) };
 }
 
@@ -170,12 +171,14 @@ function withScales(
 function severalCheck(tower: Tower, prescription: Prescription, bits: number): CheckValue | SumFailure {
   const parts: Estimate[] = [];
   const constants: Form[] = [];
+  let route: CheckRoute = 'rootless';
   for (const factor of tower.factors) {
     if (factor.kind !== 'linear') return 'spectrum-undefined';
     for (const { shift, periods, multiplicity } of barnesTerms(tower, factor)) {
-      const value = termCheck(shift, periods, multiplicity.scale(factor.power), bits);
-      if (isFailure(value)) return value;
-      parts.push(value);
+      const found = termCheck(shift, periods, multiplicity.scale(factor.power), bits);
+      if (isFailed(found)) return found;
+      parts.push(found.estimate);
+      if (found.route !== 'rootless' && route !== 'further') route = found.route;
       const count = barnesZetaAtZero(shift, periods).mul(multiplicity).scale(factor.power);
       for (const { base, weight } of factor.scale) constants.push(logarithmOf(base).mul(count).scale(weight));
     }
@@ -185,17 +188,22 @@ function severalCheck(tower: Tower, prescription: Prescription, bits: number): C
   parts.push(constant);
   const numbers = exactNumbers([{ ...tower, exponent: Rational.one }], prescription);
   const anomaly = prescription === 'operator' ? estimateOf(numbers?.anomaly ?? Form.zero, bits) : null;
-  return { route: 'further', estimate: sumOf(anomaly === null ? parts : [...parts, anomaly]) };
+  return { route, estimate: sumOf(anomaly === null ? parts : [...parts, anomaly]) };
 }
 
-/** Equal periods are a tower in one index, w (n + x/w) with a binomial multiplicity. */
-function termCheck(shift: Form, periods: readonly Form[], multiplicity: Form, bits: number): Estimate | SumFailure {
+/** Equal periods are a tower in one index, w (n + x/w) with a binomial multiplicity; others go by the contour. */
+function termCheck(shift: Form, periods: readonly Form[], multiplicity: Form, bits: number): CheckValue | SumFailure {
   const w = periods[0] as Form;
-  if (!periods.every((p) => p.equals(w))) return severalSumOnce(shift, periods, multiplicity, bits, FURTHER);
+  if (!periods.every((p) => p.equals(w))) {
+    const integral = severalSumByContour(shift, periods, multiplicity, bits);
+    if (!isFailure(integral)) return { route: 'contour', estimate: integral };
+    const further = severalSumFurther(shift, periods, multiplicity, bits);
+    return isFailure(further) ? further : { route: 'further', estimate: further };
+  }
   const q = [quotient(shift, w), Form.one];
   const m = scalePolynomial(risingBinomial(periods.length - 1), multiplicity);
   const value = rootlessSum(q, m, { from: 0, to: null }, bits, 'factors', FURTHER);
   if (isFailure(value)) return value;
   const scale = estimateOf(logarithmOf(w).mul(regularisedCount(q, m, { from: 0, to: null })), bits);
-  return scale === null ? 'spectrum-undefined' : sumOf([value, scale]);
+  return scale === null ? 'spectrum-undefined' : { route: 'rootless', estimate: sumOf([value, scale]) };
 }

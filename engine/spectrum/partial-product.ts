@@ -16,9 +16,11 @@ import { Form } from '../exact/form';
 import { Rational } from '../exact/rational';
 import { bernoulliNumber } from '../functions/bernoulli';
 import { isRemark } from './analyse';
-import { scaleLogarithm, towerAnomaly } from './anomaly';
+import { scaleLogarithm } from './anomaly';
+import { exactNumbers } from './exact-numbers';
 import { fixedCoefficients, fixedMultiplicity } from './explicit-sum';
 import { guarded } from './guard';
+import { type CutOff, cutOffSeveral, pointsBelow } from './partial-several';
 import { type Polynomial, polynomialIn, scalePolynomial, shiftPolynomial, zeroPolynomial } from './polynomial';
 import { polynomialRoots } from './polynomial-roots';
 import { prepare, type Values, withAllValues } from './prepare';
@@ -36,6 +38,9 @@ export interface PartialProduct {
   readonly regulated: Ball;
 }
 
+/** Most factors of towers in several indices that a cut-off may take. */
+const MAXIMAL_POINTS = 12_000;
+
 /** Largest cut-off. */
 export const MAXIMAL_CUTOFF = 20_000;
 
@@ -43,7 +48,8 @@ export const MAXIMAL_CUTOFF = 20_000;
  * Regulated partial products. For a factor alpha (n + a), W = cutoff + 1/2 + a and d = sum_k c_k (n + a)^k, what is
  * added is sum_k c_k (-d/ds + log alpha) of those terms of zeta(s - k, W + 1/2) ~ sum_j B_j(1/2)/j! (s-k)_(j-1)
  * W^(1-s+k-j) that do not vanish as W grows, j <= k + 1 (DLMF 25.11.43 about the midpoint); each linear factor in its
- * own W. By operator the exact anomaly is added. Towers in one index only.
+ * own W. Towers in several indices are cut off in each of them (partial-several.ts), at those cut-offs that do not take
+ * too many factors. By operator the exact anomaly is added.
  */
 export function partialProducts(
   spectrum: Spectrum,
@@ -69,28 +75,49 @@ function computed(
   if (isRemark(written)) return written;
   const prepared = prepare(written);
   if (isRemark(prepared)) return prepared;
-  const several = prepared.towers.find(({ indices }) => indices.length > 1);
-  if (several)
-    return remark('tower-several-indices', several.place, 'eigenvalue', {
-      factor: '',
-      index: several.indices.join(', '),
-    });
+  const several = prepared.towers.filter(({ indices }) => indices.length > 1);
+  const single = prepared.towers.filter(({ indices }) => indices.length === 1);
+  const points = (cutoff: number): number => several.reduce((sum, tower) => sum + pointsBelow(tower, cutoff), 0);
+  const reached = cutoffs.filter((cutoff) => points(cutoff) <= MAXIMAL_POINTS);
   const degree = Math.max(
     0,
-    ...prepared.towers.map((t) => polynomialIn(t.degeneracy, t.indices[0] as string)?.length ?? 0),
+    ...prepared.towers.flatMap((t) => t.indices.map((name) => (polynomialIn(t.degeneracy, name)?.length ?? 0) + 1)),
   );
   const bits = Math.ceil(digits * Math.log2(10) + (degree + 1) * Math.log2(largest + 4)) + 40;
   const pieces: Piece[] = [];
-  for (const tower of prepared.towers) {
+  for (const tower of single) {
     const found = piecesOf(tower, written[tower.place] as WrittenTower, bits);
     if (found === null) return remark('spectrum-undefined', tower.place, 'eigenvalue');
     pieces.push(...found);
   }
   const anomaly =
-    prescription === 'operator' ? Form.sum(prepared.towers.map((t) => towerAnomaly(t).scale(t.exponent))) : Form.zero;
+    prescription === 'operator' ? (exactNumbers(prepared.towers, 'operator')?.anomaly ?? null) : Form.zero;
+  if (anomaly === null) return remark('operator-periods', null, 'row');
   const constant = formFixed(anomaly, bits);
   if (constant === null) return remark('spectrum-undefined', null, 'row');
-  return run(pieces, constant, cutoffs, bits);
+  const products = run(pieces, constant, reached, bits);
+  for (const tower of several) {
+    for (const [k, cutoff] of reached.entries()) {
+      const part = cutOffSeveral(tower, cutoff, bits);
+      if (part === null) return remark('spectrum-undefined', tower.place, 'eigenvalue');
+      products[k] = added(products[k] as PartialProduct, part, bits);
+    }
+  }
+  return products;
+}
+
+function added(product: PartialProduct, part: CutOff, bits: number): PartialProduct {
+  const slip = BigInt(Math.ceil(4 * part.error)) + 16n;
+  const plus = (ball: Ball, z: FixedComplex): Ball => ({
+    bits,
+    re: ball.re + z.re,
+    im: ball.im + z.im,
+    error: ball.error + slip,
+  });
+  const sum = plus(product.sum, part.sum);
+  const counterterms = plus(product.counterterms, part.counterterms);
+  const both = addComplex(part.sum, part.counterterms);
+  return { cutoff: product.cutoff, sum, counterterms, regulated: plus(product.regulated, both) };
 }
 
 /** One linear factor of one tower. */
@@ -134,7 +161,7 @@ function run(
   bits: number,
 ): PartialProduct[] {
   const wanted = new Set(cutoffs);
-  const lowest = Math.min(...pieces.map(({ first }) => first));
+  const lowest = Math.min(0, ...pieces.map(({ first }) => first));
   const found = new Map<number, PartialProduct>();
   let sum = zeroComplex;
   let count = 0;

@@ -1,8 +1,9 @@
 import type { FixedComplex } from '../arithmetic/fixed-complex';
 import { formFixed } from '../arithmetic/form-fixed';
 import { Form } from '../exact/form';
-import { logBarnesGamma } from '../functions/barnes-gamma';
+import { type BarnesEstimate, logBarnesGamma } from '../functions/barnes-gamma';
 import type { Estimate } from '../functions/euler-maclaurin';
+import { logBarnesByContour } from './barnes-contour';
 import { barnesZetaAtZero } from './barnes-polynomial';
 import type { SumFailure } from './linear-sum';
 import { estimateOf, scaleEstimate, sizeOf, sumOf } from './total';
@@ -10,66 +11,110 @@ import { estimateOf, scaleEstimate, sizeOf, sumOf } from './total';
 /** Bits beyond those asked for: errors of shift and periods grow with the number of lattice points used. */
 const GUARD = 48;
 
-/** Further steps of the second value that the error is taken from. */
+/** Further steps of a second value. */
 const FURTHER_STEPS = 5;
 
-interface Steps {
-  readonly further: number;
-  readonly twice: boolean;
-}
-
-/** One value with more steps, without the error that a second one would give; for cross-checks. */
-export function severalSumOnce(
-  shift: Form,
-  periods: readonly Form[],
-  multiplicity: Form,
-  bits: number,
-  further: number,
-): Estimate | SumFailure {
-  return severalSum(shift, periods, multiplicity, bits, { further, twice: false });
-}
+/** log Gamma_N of a shift and periods in the right half plane, at `working` bits. */
+type LogGamma = (shift: Form, periods: readonly Form[], working: number) => Estimate | SumFailure;
 
 /**
  * multiplicity times the regularised sum of log(w.n + shift), that is -multiplicity log Gamma_N(shift|periods). When
- * all periods point to the left, log(-1) = i pi is taken out. The error is proved for positive periods; else it is the
- * difference of two values with different numbers of steps, besides rounding.
+ * all periods point to the left, log(-1) = i pi is taken out. For positive periods the error is proved; for others it
+ * holds the difference of two values with different numbers of steps.
  */
 export function severalSum(
   shift: Form,
   periods: readonly Form[],
   multiplicity: Form,
   bits: number,
-  { further, twice }: Steps = { further: 0, twice: true },
 ): Estimate | SumFailure {
-  const working = bits + GUARD;
-  const rough = periods.map((w) => formFixed(w, 64));
-  if (rough.some((w) => w === null)) return 'spectrum-undefined';
-  if (rough.every((w) => w !== null && w.re < 0n)) {
-    return turned(shift, periods, multiplicity, bits, { further, twice });
-  }
+  return timesLogGamma(bySteps, shift, periods, multiplicity, bits);
+}
+
+/** The same by a contour integral, for a cross-check; null where the integral is out of reach. */
+export function severalSumByContour(
+  shift: Form,
+  periods: readonly Form[],
+  multiplicity: Form,
+  bits: number,
+): Estimate | SumFailure {
+  return timesLogGamma(byContour, shift, periods, multiplicity, bits);
+}
+
+/** One value with further steps, for a cross-check where nothing else is at hand. */
+export function severalSumFurther(
+  shift: Form,
+  periods: readonly Form[],
+  multiplicity: Form,
+  bits: number,
+): Estimate | SumFailure {
+  return timesLogGamma(
+    (x, w, working) => estimateAt(x, w, working, 2 * FURTHER_STEPS),
+    shift,
+    periods,
+    multiplicity,
+    bits,
+  );
+}
+
+function bySteps(shift: Form, periods: readonly Form[], working: number): Estimate | SumFailure {
+  const first = estimateAt(shift, periods, working, 0);
+  if (isFailed(first) || first.proved) return first;
+  const second = estimateAt(shift, periods, working, FURTHER_STEPS);
+  if (isFailed(second)) return second;
+  return { value: second.value, error: first.error + second.error + sizeOf(difference(first.value, second.value)) };
+}
+
+function estimateAt(
+  shift: Form,
+  periods: readonly Form[],
+  working: number,
+  further: number,
+): BarnesEstimate | SumFailure {
   const x = formFixed(shift, working);
   const w = periods.map((p) => formFixed(p, working));
+  if (x === null || !w.every((p) => p !== null)) return 'spectrum-undefined';
+  return logBarnesGamma(x, w, working, further) ?? 'spectrum-too-far';
+}
+
+function byContour(shift: Form, periods: readonly Form[], working: number): Estimate | SumFailure {
+  const value = logBarnesByContour(shift, periods, working);
+  return value === null ? 'spectrum-too-far' : { value, error: 0n };
+}
+
+function isFailed(found: Estimate | SumFailure): found is SumFailure {
+  return typeof found === 'string';
+}
+
+function timesLogGamma(
+  logGamma: LogGamma,
+  shift: Form,
+  periods: readonly Form[],
+  multiplicity: Form,
+  bits: number,
+): Estimate | SumFailure {
+  const rough = periods.map((w) => formFixed(w, 64));
+  if (rough.some((w) => w === null)) return 'spectrum-undefined';
+  if (rough.every((w) => w !== null && w.re < 0n)) return turned(logGamma, shift, periods, multiplicity, bits);
+  const working = bits + GUARD;
   const factor = estimateOf(multiplicity, working);
-  if (x === null || factor === null || !w.every((p) => p !== null)) return 'spectrum-undefined';
-  const first = logBarnesGamma(x, w, working, further);
-  const second = twice && !first?.proved ? logBarnesGamma(x, w, working, further + FURTHER_STEPS) : first;
-  if (first === null || second === null) return 'spectrum-too-far';
-  const gap = sizeOf(difference(first.value, second.value));
-  const value = { value: negative(second.value), error: first.error + second.error + gap };
-  const total = scaleEstimate(value, factor, working);
+  if (factor === null) return 'spectrum-undefined';
+  const found = logGamma(shift, periods, working);
+  if (isFailed(found)) return found;
+  const total = scaleEstimate({ value: negative(found.value), error: found.error }, factor, working);
   const by = BigInt(GUARD);
   return { value: { re: total.value.re >> by, im: total.value.im >> by }, error: (total.error >> by) + 2n };
 }
 
 function turned(
+  logGamma: LogGamma,
   shift: Form,
   periods: readonly Form[],
   multiplicity: Form,
   bits: number,
-  steps: Steps,
 ): Estimate | SumFailure {
   const mirrored = periods.map((w) => w.neg());
-  const rest = severalSum(shift.neg(), mirrored, multiplicity, bits, steps);
+  const rest = timesLogGamma(logGamma, shift.neg(), mirrored, multiplicity, bits);
   const phase = estimateOf(Form.pi.mul(Form.i).mul(multiplicity).mul(barnesZetaAtZero(shift.neg(), mirrored)), bits);
   if (typeof rest === 'string' || phase === null) return typeof rest === 'string' ? rest : 'spectrum-undefined';
   return sumOf([rest, phase]);
