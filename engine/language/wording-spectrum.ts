@@ -71,8 +71,7 @@ export const spectrumWording = {
     'The exact expressions grow beyond all bounds. Give numbers to some parameters, or lower the degrees.',
   'spectrum-digits': (d) => `Between 1 and ${d.limit} digits can be had.`,
   'closed-zero-mode': () => 'An eigenvalue vanishes, so the determinant is 0 or infinite and has no closed form.',
-  'closed-unknown': () =>
-    'No closed form is known here: some eigenvalue has roots that are not written with square roots, or a long finite range.',
+  'closed-unknown': () => 'No closed form is known here: some eigenvalue has a long finite range.',
   'closed-unconfirmed': () =>
     'A closed form was found, but it did not agree with the values of the product, or there was no point to compare at; it is ' +
     'not shown.',

@@ -4,7 +4,7 @@ import type { FunctionName } from '../functions/special-function';
 import { functions } from '../functions/table';
 import type { ClosedConstant, ClosedForm, ClosedFunction } from '../spectrum/closed-form';
 import { formLatex } from './form';
-import { sumLatex } from './polynomial';
+import { indexPolynomialLatex, sumLatex } from './polynomial';
 import { type Piece, printer } from './product';
 
 /** A closed form as one fraction: numbers and functions by the sign of their power, constants in an exponential. */
@@ -91,10 +91,21 @@ function functionLatex(of: ClosedFunction): string {
       return of.periods.length === 3
         ? inTable('tripleSine', x, of.periods)
         : withPeriods(`S_{${of.periods.length}}`, x, of.periods);
+    case 'overRoots':
+      return overRootsLatex(of);
     case 'doubleSine':
     case 'upsilon':
       return inTable(of.name, x, [of.b]);
   }
+}
+
+/** A product over the roots of a polynomial; \Gamma_1(x|1) is written as \Gamma(x)/\sqrt{2\pi}. */
+function overRootsLatex({ argument, order, polynomial }: Extract<ClosedFunction, { name: 'overRoots' }>): string {
+  const over = `\\prod_{\\rho:\\,${indexPolynomialLatex(polynomial, '\\rho ').replaceAll('\\rho ^', '\\rho^')}=0}`;
+  const x = argument.isZero() ? '-\\rho' : `${sumLatex(argument)}-\\rho`;
+  if (order === 1) return `${over}\\frac{\\Gamma\\left(${x}\\right)}{\\sqrt{2\\pi}}`;
+  const ones = Array.from({ length: order }, () => '1').join(',');
+  return `${over}\\Gamma_{${order}}\\left(${x}\\,\\middle|\\,${ones}\\right)`;
 }
 
 /** sinh \pi a, but sinh(\pi (a + b)). */

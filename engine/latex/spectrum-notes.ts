@@ -31,7 +31,12 @@ export function closedNotes({ functions: special, exponent, numbers }: ClosedFor
         `$S_N(x\\,|\\,\\omega)=\\Gamma_N(x\\,|\\,\\omega)^{-1}\\,\\Gamma_N(|\\omega|-x\\,|\\,\\omega)^{(-1)^N}$`,
       );
     } else if (of.name === 'barnesG') notes.add('$G(x+1)=\\Gamma(x)\\,G(x)$, $G(1)=1$ (Barnes).');
-    if (of.name === 'multipleGamma' || (of.name === 'multipleSine' && of.periods.length !== 3)) {
+    if (of.name === 'overRoots') notes.add('The product runs over the roots $\\rho$, each as often as it occurs.');
+    if (
+      of.name === 'multipleGamma' ||
+      (of.name === 'overRoots' && of.order > 1) ||
+      (of.name === 'multipleSine' && of.periods.length !== 3)
+    ) {
       notes.add(
         '$\\log\\Gamma_N(x\\,|\\,\\omega)=\\partial_s\\sum_{n\\ge0}(x+n\\cdot\\omega)^{-s}\\big|_{s=0}$ (Barnes).',
       );

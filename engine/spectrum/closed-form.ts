@@ -2,6 +2,7 @@ import { type Atom, Form } from '../exact/form';
 import { Gaussian } from '../exact/gaussian';
 import { Rational } from '../exact/rational';
 import { reduceRoots } from './form-division';
+import { type Polynomial, polynomialKey } from './polynomial';
 
 /** A function in a closed form, of an exact argument. */
 export type ClosedFunction =
@@ -21,6 +22,13 @@ export type ClosedFunction =
       readonly name: 'doubleSine' | 'upsilon';
       readonly argument: Form;
       readonly b: Form;
+    }
+  | {
+      /** Product of Gamma_order(argument - rho|1, ..., 1) over the roots rho of a polynomial. */
+      readonly name: 'overRoots';
+      readonly argument: Form;
+      readonly order: number;
+      readonly polynomial: Polynomial;
     };
 
 /** A number in the exponent. */
@@ -157,6 +165,7 @@ function primesOf(value: Rational): [Rational, number][] {
 }
 
 function functionKey(of: ClosedFunction): string {
+  if (of.name === 'overRoots') return `${of.name} ${of.argument.key} ${of.order} ${polynomialKey(of.polynomial)}`;
   const parameters = 'periods' in of ? of.periods.map(({ key }) => key).join(';') : 'b' in of ? of.b.key : '';
   return `${of.name} ${of.argument.key} ${parameters}`;
 }

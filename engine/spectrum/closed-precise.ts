@@ -51,6 +51,7 @@ function functionLog(of: ClosedFunction, bits: number): Estimate | null {
       if (of.periods.length === 3) return fromTable('tripleSine', x, of.periods, bits);
       return of.periods.length === 2 ? doubleSineOf(x, of.periods as [Form, Form], bits) : null;
     case 'multipleGamma':
+    case 'overRoots':
     case 'barnesG':
       return null;
   }

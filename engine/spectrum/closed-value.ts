@@ -10,6 +10,7 @@ import type { FunctionName } from '../functions/special-function';
 import { functions } from '../functions/table';
 import { logarithmOf } from './anomaly';
 import type { ClosedConstant, ClosedForm, ClosedFunction } from './closed-form';
+import { complexRoots } from './complex-roots';
 
 type Lookup = (name: string) => DoubleComplex | null;
 
@@ -54,6 +55,13 @@ function functionValue(of: ClosedFunction, value: Value): DoubleComplex {
       const logGamma = barnesGammaDouble(periods);
       const opposite = logGamma(subtract(periods.reduce(add), x));
       return subtract(periods.length % 2 === 0 ? opposite : negate(opposite), logGamma(x));
+    }
+    case 'overRoots': {
+      const logGamma = barnesGammaDouble(Array.from({ length: of.order }, () => ONE));
+      return complexRoots(of.polynomial.map(value)).reduce<DoubleComplex>(
+        (sum, root) => add(sum, logGamma(subtract(x, root))),
+        { re: 0, im: 0 },
+      );
     }
     case 'doubleSine':
     case 'upsilon':

@@ -13,14 +13,18 @@ const WRITTEN_MODES = 64;
 /**
  * The determinant by factors in known functions, exactly: elementary numbers for whole and half-integer roots, sines,
  * multiple sines and polylogarithms for pairs of classes that complement each other, Gamma, Barnes G and multiple
- * Gamma functions for the rest. Null where a class is an irreducible polynomial of degree above 2 or a long finite run.
+ * Gamma functions for the rest; over the roots of an irreducible polynomial of degree above 2, which have no names.
+ * Null for a long finite run.
  */
 export function recognise(pairing: Pairing): ClosedForm | null {
   const sum = new ClosedSum();
   const ladders: Ladder[] = [];
   for (const found of pairing.classes) {
     const shifts = shiftsOf(found);
-    if (shifts === null) return null;
+    if (shifts === null) {
+      if (!addOverRoots(sum, found)) return null;
+      continue;
+    }
     for (const shift of shifts) {
       for (const stretch of found.left) {
         if (stretch.to !== null && stretch.to - stretch.from >= WRITTEN_MODES) return null;
@@ -33,6 +37,27 @@ export function recognise(pairing: Pairing): ClosedForm | null {
   addSeveral(sum, pairing.several);
   for (const { base, exponent } of pairing.constants) sum.number(base, exponent);
   return sum.finish();
+}
+
+/**
+ * A class of irreducible polynomials of degree above 2: a ladder from nu = from on, with M(from + j) = sum of q_m
+ * binomial(j + m, m), is the product over the roots rho of Gamma_(m+1)(from - rho|1, ..., 1)^-q_m.
+ */
+function addOverRoots(sum: ClosedSum, { polynomial, left }: ModeClass): boolean {
+  for (const { from, to, multiplicity } of left) {
+    if (to !== null) {
+      if (to - from >= WRITTEN_MODES) return false;
+      for (let nu = from; nu <= to; nu++) {
+        const at = Form.number(nu);
+        sum.number(evaluatePolynomial(polynomial, at), evaluatePolynomial(multiplicity, at));
+      }
+      continue;
+    }
+    binomialCoefficients(shiftPolynomial(multiplicity, Form.number(from))).forEach((q, m) => {
+      sum.function({ name: 'overRoots', argument: Form.number(from), order: m + 1, polynomial }, q.neg());
+    });
+  }
+  return true;
 }
 
 /** The a_j of the class; square roots for irreducible quadratics. */

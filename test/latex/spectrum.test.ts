@@ -137,3 +137,22 @@ describe('sums and multiplicities', () => {
     expect(multiplicityLatex(polynomialIn(parseForm(text), 'n') ?? [], 'n')).toBe(latex);
   });
 });
+
+describe('roots without a name', () => {
+  const closedOf = (line: string): string => latexOf(pieces([line]), 'closed');
+
+  test('a cubic eigenvalue is a product of Gamma functions over its roots, confirmed by the series', () => {
+    const shown = pieces(['power(1) n^3+n+1 for n >= 1']);
+    expect(latexOf(shown, 'closed')).toBe(
+      'Z=\\frac{1}{\\prod_{\\rho:\\,\\rho^{3}+\\rho +1=0}\\frac{\\Gamma\\left(1-\\rho\\right)}{\\sqrt{2\\pi}}}',
+    );
+    expect(shown.checks.find(({ id }) => id === 'closed-form')?.verdict).toBe('holds');
+  });
+
+  test.each(['power(1) n^3+2 times (n+1)^2 for n >= 0', 'power(-1) n^4+n+a times n for n >= 1'])('%s', (line) => {
+    const latex = closedOf(line);
+    expect(latex).toContain('\\Gamma_{2}');
+    expect(() => katex.renderToString(latex, { throwOnError: true })).not.toThrow();
+    expect(pieces([line]).checks.find(({ id }) => id === 'closed-form')?.verdict).toBe('holds');
+  });
+});
