@@ -7,6 +7,8 @@ import type { ExactParameter, PreciseLog } from './special-function';
 import { logTripleSineRound } from './triple-sine-closed';
 import { tripleSineByContour } from './triple-sine-contour';
 import { logTripleSine } from './triple-sine-precise';
+import { logUpsilonByMidpoint } from './upsilon-midpoint';
+import { logUpsilon } from './upsilon-precise';
 
 /** A second value of a logarithm and how it was found. */
 export interface SecondRoute {
@@ -24,7 +26,7 @@ const centers = memoiseByKey<Estimate | null>(16);
  * log Upsilon_b(x) = 2 log Gamma_2(Q/2) - log Gamma_2(x) - log Gamma_2(Q - x) with the double Gamma function of periods b
  * and 1/b by steps and asymptotic series; imaginary part up to multiples of 2 pi.
  */
-export function upsilonSecondRoute(x: FixedComplex, b: ExactParameter, bits: number): SecondRoute | null {
+export function upsilonByDoubleGamma(x: FixedComplex, b: ExactParameter, bits: number): SecondRoute | null {
   if (b.approx.im !== 0 || !(b.approx.re > 0)) return null;
   const working = bits + 16;
   const exact = b.value(working).re;
@@ -51,6 +53,19 @@ export function upsilonSecondRoute(x: FixedComplex, b: ExactParameter, bits: num
     error: (error >> 16n) + 2n + share,
   };
   return { route: 'double Gamma functions', log: value };
+}
+
+/** Bits from which the midpoint rule for Upsilon, whose nodes grow with their square, is slower than other lattice sums. */
+const MIDPOINT_BITS = 800;
+/** Share by which the far points of the second lattice sum are moved out. */
+const STRETCH = 1.3;
+
+/** The integral by the midpoint rule; for many digits, far arguments and complex b the lattice product with other far points. */
+export function upsilonSecondRoute(x: FixedComplex, b: ExactParameter, bits: number): SecondRoute | null {
+  if (!(b.approx.re > 0)) return null;
+  const integral = bits <= MIDPOINT_BITS ? logUpsilonByMidpoint(x, b, bits) : null;
+  if (integral !== null) return { route: 'midpoint rule', log: integral };
+  return { route: 'lattice product with other far points', log: logUpsilon(x, b, bits, STRETCH) };
 }
 
 /** Bits up to which the contour, whose nodes grow with the square of the bits, is worth its time. */

@@ -66,6 +66,7 @@ function hyperbolicSeries(v: FixedComplex, bits: number): FixedComplex[] {
 }
 
 function productOf(a: readonly FixedComplex[], b: readonly FixedComplex[], bits: number): FixedComplex[] {
+  if ([...a, ...b].every(({ im }) => im === 0n)) return realProduct(a, b, bits);
   const shift = BigInt(bits);
   return a.map((_, k) => {
     let re = 0n;
@@ -77,5 +78,23 @@ function productOf(a: readonly FixedComplex[], b: readonly FixedComplex[], bits:
       im += x.re * y.im + x.im * y.re;
     }
     return { re: re >> shift, im: im >> shift };
+  });
+}
+
+/**
+ * The same for real periods, where the coefficients of 1/sinh alternate in sign: their sizes as the digits of two long
+ * numbers, multiplied at once (Kronecker's substitution; von zur Gathen and Gerhard, Modern Computer Algebra, 8.4).
+ */
+function realProduct(a: readonly FixedComplex[], b: readonly FixedComplex[], bits: number): FixedComplex[] {
+  // Sizes are below 4, and fewer than 2^20 products are added up. Four bits make a digit.
+  const width = Math.ceil((2 * bits + 24) / 4);
+  const packed = (list: readonly FixedComplex[]): bigint => {
+    const digits = list.map(({ re }) => (re < 0n ? -re : re).toString(16).padStart(width, '0'));
+    return BigInt(`0x${digits.reverse().join('')}`);
+  };
+  const text = (packed(a) * packed(b)).toString(16).padStart((a.length + b.length) * width, '0');
+  return a.map((_, k) => {
+    const size = BigInt(`0x${text.slice(text.length - (k + 1) * width, text.length - k * width)}`) >> BigInt(bits);
+    return { re: k % 2 === 0 ? size : -size, im: 0n };
   });
 }

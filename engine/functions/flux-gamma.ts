@@ -108,5 +108,6 @@ function quotient(
   if (below.kind === 'value') {
     return { kind: 'value', re: above.re - below.re, im: above.im - below.im, error: above.error + below.error };
   }
-  return below.kind === 'indistinct' ? below : { kind: below.kind === 'pole' ? 'zero' : 'pole', order: below.order };
+  if (below.kind === 'indistinct' || below.kind === 'unreachable') return below;
+  return { kind: below.kind === 'pole' ? 'zero' : 'pole', order: below.order };
 }

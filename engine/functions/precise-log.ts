@@ -15,3 +15,19 @@ export function isIndistinct(distance: FixedComplex): boolean {
 export function argumentError(distance: FixedComplex, bits: number): bigint {
   return (3n << BigInt(bits)) / absoluteComplex(distance) + 1n;
 }
+
+/**
+ * Squared distances l^2 - z^2 up to this many units of 2^-(bits + further) count as none, where z has `bits` bits, |z| is
+ * about `size` and a unit in each part of z is not known.
+ */
+export function closestSquare(size: number, further: number): bigint {
+  return BigInt(Math.ceil(8 * size) + 1) << BigInt(further);
+}
+
+/**
+ * Error in units from one unit in each part of the argument, for a derivative bounded by `slope` there, and from rounding:
+ * within sqrt(2) of at least 4 units around a point next to a zero the derivative grows by less than 1.55.
+ */
+export function argumentShare(slope: number): bigint {
+  return BigInt(Math.ceil(2.2 * slope)) + 3n;
+}

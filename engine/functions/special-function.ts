@@ -42,12 +42,14 @@ export interface ExactParameter {
 
 /**
  * A logarithm in the precise tier: a value within `error` units of 2^-bits (an upper bound that includes one unit of
- * error in the argument); or an exact zero or pole; or a refusal where the precision cannot tell the argument from one.
+ * error in the argument); or an exact zero or pole; or a refusal where the precision cannot tell the argument from one, or
+ * where no number of bits helps, with the reason in words.
  */
 export type PreciseLog =
   | { readonly kind: 'value'; readonly re: bigint; readonly im: bigint; readonly error: bigint }
   | { readonly kind: 'zero' | 'pole'; readonly order: number }
-  | { readonly kind: 'indistinct' };
+  | { readonly kind: 'indistinct' }
+  | { readonly kind: 'unreachable'; readonly says: string };
 
 /** Evaluates log f on arrays in doubles for fixed parameters; tables are built when it is made. */
 export interface DoubleKernel {

@@ -1,105 +1,95 @@
-import { divideFixed, multiplyFixed, numberFromFixed, shiftRounded } from '../arithmetic/fixed';
+import { numberFromFixed, shiftRounded } from '../arithmetic/fixed';
 import {
   absoluteComplex,
+  addComplex,
   divideComplex,
   type FixedComplex,
   logComplex,
   multiplyComplex,
+  oneComplex,
+  scaleComplex,
   squareComplex,
+  zeroComplex,
 } from '../arithmetic/fixed-complex';
-import { piFixed } from '../arithmetic/fixed-constants';
-import { logBarnesGamma } from './barnes-gamma';
-import { memoiseByKey } from './kernel-memo';
-import { liftPoint } from './kernel-nodes';
-import type { ExactParameter } from './special-function';
-import { kernelSeries } from './upsilon-corrections';
+import { type BarnesSeries, barnesSeries } from './barnes-series';
+import { doubleSine } from './double-sine';
+import { latticeRadius, latticeReach, latticeTable, TOO_MANY_POINTS } from './lattice-table';
+import { argumentShare } from './precise-log';
+import type { ExactParameter, PreciseLog } from './special-function';
 
-/** True where the asymptotic series in 1/z^2 reaches the bits: its smallest term is about e^{-2 pi min(b, 1/b) |Im z|}. */
-export function isFarUp(x: FixedComplex, b: ExactParameter, bits: number): boolean {
-  const height = Math.abs(numberFromFixed(x.im, bits));
-  return 2 * Math.PI * Math.min(b.approx.re, 1 / b.approx.re) * height > (bits + 40) * Math.LN2;
-}
+type Periods = readonly [ExactParameter, ExactParameter];
 
-interface FarTable {
-  readonly half: bigint;
-  /** 2 log Gamma_2(Q/2 | b, 1/b). */
-  readonly constant: bigint;
-  /** (b^2 + b^-2)/12. */
-  readonly logarithmic: bigint;
-  /** (2 pi small)^2. */
-  readonly square: bigint;
-  readonly series: readonly bigint[];
-}
-
-const tables = memoiseByKey<FarTable | null>(8);
-
-/**
- * log Upsilon_b(Q/2 + z) for Im z > 0 far up, from the expansion of the double Gamma function (Ruijsenaars 2000, Adv. Math.
- * 156, 107):
- *   z^2 (log(-iz) - 3/2) - ((b^2 + b^-2)/12) log(-iz) + 2 log Gamma_2(Q/2) - sum_{m>=2} d_m (2m-3)!/(2 (2z)^{2m-2}),
- * sum d_m t^{2m} = t^2/(sinh bt sinh t/b). Error below 4 units where `isFarUp` holds; null where the constant is out of reach.
- */
-export function farUpsilon(x: FixedComplex, b: ExactParameter, bits: number): FixedComplex | null {
-  const size = Math.log2(numberFromFixed(absoluteComplex(x), bits) + 2);
-  const working = bits + 32 * Math.ceil((2 * size + Math.log2(size + 2) + 16) / 32);
-  const table = farTable(b, working);
-  if (table === null) return null;
-  const lifted = liftPoint(x, bits, working);
-  const z = { re: lifted.re - table.half, im: lifted.im };
-  const square = squareComplex(z, working);
-  const log = logComplex({ re: z.im, im: -z.re }, working);
-  const threeHalves = 3n << BigInt(working - 1);
-  const lead = multiplyComplex(square, { re: log.re - threeHalves, im: log.im }, working);
-  const y = {
-    re: multiplyFixed(table.square, square.re, working),
-    im: multiplyFixed(table.square, square.im, working),
-  };
-  // Terms -(1/2) rho^-2 (delta_m (2m-3)!)/y^{m-1}, rho = pi small, y = (2 rho z)^2.
-  let power = divideComplex({ re: 1n << BigInt(working), im: 0n }, y, working);
-  let tailRe = 0n;
-  let tailIm = 0n;
-  for (let m = 2; m < table.series.length; m++) {
-    const coefficient = table.series[m] as bigint;
-    const re = multiplyFixed(coefficient, power.re, working);
-    const im = multiplyFixed(coefficient, power.im, working);
-    tailRe += re;
-    tailIm += im;
-    if (re >> 2n === 0n && im >> 2n === 0n) break;
-    const next = divideComplex(power, y, working);
-    const factor = BigInt((2 * m - 2) * (2 * m - 1));
-    power = { re: next.re * factor, im: next.im * factor };
-  }
-  const scale = divideFixed(2n << BigInt(working), table.square, working);
-  const re =
-    lead.re -
-    multiplyFixed(table.logarithmic, log.re, working) +
-    table.constant -
-    multiplyFixed(scale, tailRe, working);
-  const im = lead.im - multiplyFixed(table.logarithmic, log.im, working) - multiplyFixed(scale, tailIm, working);
-  return { re: shiftRounded(re, working - bits), im: shiftRounded(im, working - bits) };
-}
-
-function farTable(b: ExactParameter, working: number): FarTable | null {
-  const exact = b.value(working).re;
-  return tables(`${working}|${exact}`, () => {
-    const inverse = divideFixed(1n << BigInt(working), exact, working);
-    const constant = logBarnesGamma({ re: (exact + inverse) >> 1n, im: 0n }, [real(exact), real(inverse)], working);
-    if (constant === null) return null;
-    const periods = exact < inverse ? [exact, inverse] : [inverse, exact];
-    const rho = multiplyFixed(piFixed(working), periods[0] as bigint, working);
-    const squares = multiplyFixed(exact, exact, working) + multiplyFixed(inverse, inverse, working);
-    // The terms fall until 2m = 2 rho |2z|, which is more than the bits.
-    const count = Math.ceil((working * Math.LN2) / 2) + 8;
-    return {
-      half: (exact + inverse) >> 1n,
-      constant: 2n * constant.value.re,
-      logarithmic: squares / 12n,
-      square: 4n * multiplyFixed(rho, rho, working),
-      series: kernelSeries(periods, count, working),
-    };
+/** True where the expansion of Gamma_2 at infinity reaches the bits; z with Re z >= 0. */
+export function isFarOut(z: FixedComplex, periods: Periods, bits: number): boolean {
+  const re = numberFromFixed(z.re, bits);
+  const im = numberFromFixed(z.im, bits);
+  const needed = latticeReach(bits + 64);
+  return periods.every(({ approx: p }) => {
+    const norm = p.re * p.re + p.im * p.im;
+    const ratio = (re * p.re + im * p.im) / norm;
+    const size = Math.hypot(re, im) / Math.sqrt(norm);
+    // |z/p| cos(arg/2), as for the far points of the table.
+    return ratio > -size / 2 && size * (size + ratio) >= 2 * needed * needed;
   });
 }
 
-function real(value: bigint): FixedComplex {
-  return { re: value, im: 0n };
+/**
+ * log Upsilon_b(Q/2 + z) far out, Re z >= 0, from the expansion of the double Gamma function (Ruijsenaars 2000, Adv. Math.
+ * 156, 107) and the double sine Gamma_2(Q - x)/Gamma_2(x) = s_b(iz):
+ *   log Upsilon = 2 log Gamma_2(Q/2) - 2 log Gamma_2(Q/2 + z) - log s_b(iz),
+ *   log Gamma_2(Q/2 + z) = (3/2 - log z) z^2/2 - d_1 log z + sum_{i>=2} d_i (2i-3)! z^{2-2i},
+ * sum d_i t^{2i} = (t/2)^2/(sinh(bt/2) sinh(t/2b)). `offset` gives z with any number of fraction bits.
+ */
+export function farUpsilon(offset: (bits: number) => FixedComplex, periods: Periods, bits: number): PreciseLog {
+  const rough = offset(bits);
+  const [b, inverse] = periods;
+  const sine = doubleSine.precise({ re: -rough.im, im: rough.re }, [b], bits);
+  if (sine.kind === 'pole') return { kind: 'zero', order: sine.order };
+  if (sine.kind !== 'value') return sine.kind === 'zero' ? { kind: 'indistinct' } : sine;
+  const size = numberFromFixed(absoluteComplex(rough), bits);
+  const log2Size = Math.log2(size + 2);
+  const working = bits + 32 * Math.ceil((2 * log2Size + Math.log2(log2Size + 2) + 20) / 32);
+  const total = { re: b.approx.re + inverse.approx.re, im: b.approx.im + inverse.approx.im };
+  const table = latticeTable(periods, latticeRadius(0, Math.hypot(total.re, total.im)), working);
+  if (table === null) return { kind: 'unreachable', says: TOO_MANY_POINTS };
+  const center = table.center();
+  const values = periods.map((w) => w.value(working));
+  const sorted = values.sort((v, w) => (absoluteComplex(v) < absoluteComplex(w) ? 1 : -1));
+  const gamma = farDoubleGamma(offset(working), barnesSeries(sorted, working), working);
+  const fine = { re: center.re >> BigInt(table.bits - working), im: center.im >> BigInt(table.bits - working) };
+  const difference = (part: 're' | 'im'): bigint => shiftRounded(2n * (fine[part] - gamma[part]), working - bits);
+  return {
+    kind: 'value',
+    re: difference('re') - sine.re,
+    im: difference('im') - sine.im,
+    // z is rounded once more than x.
+    error: 2n * sine.error + argumentShare(4 * size * (Math.log(size + 2) + 2)),
+  };
+}
+
+/** log Gamma_2(|w|/2 + z) for two periods with product 1. */
+function farDoubleGamma(z: FixedComplex, { coefficients, unit }: BarnesSeries, bits: number): FixedComplex {
+  const log = logComplex(z, bits);
+  const square = squareComplex(z, bits);
+  const bracket = { re: (3n << BigInt(bits - 1)) - log.re, im: -log.im };
+  const lead = multiplyComplex(square, bracket, bits);
+  const second = multiplyComplex(scaleComplex(coefficients[1] as FixedComplex, unit, bits), log, bits);
+  // Terms d_i (2i-3)! z^{2-2i} with scaled d_i: (W/2 pi)^2 times powers of (W/(2 pi z))^2.
+  const step = divideComplex({ re: unit, im: 0n }, square, bits);
+  let power = scaleComplex(step, unit, bits);
+  let sum = zeroComplex;
+  let smallest = absoluteComplex(oneComplex(bits)) << 64n;
+  for (let i = 2; i < coefficients.length; i++) {
+    const size = absoluteComplex(power);
+    if (size <= 1n || size > smallest) break;
+    smallest = size;
+    sum = addComplex(sum, multiplyComplex(coefficients[i] as FixedComplex, power, bits));
+    const next = multiplyComplex(power, step, bits);
+    const factor = BigInt((2 * i - 2) * (2 * i - 1));
+    power = { re: next.re * factor, im: next.im * factor };
+  }
+  return {
+    re: (lead.re >> 1n) - second.re + sum.re,
+    im: (lead.im >> 1n) - second.im + sum.im,
+  };
 }

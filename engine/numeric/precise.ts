@@ -22,7 +22,8 @@ export type PreciseValue =
   | { readonly kind: 'unset'; readonly names: readonly string[] }
   /** A function has no value there; `why` says it in words. */
   | { readonly kind: 'outside'; readonly why: string }
-  | { readonly kind: 'unreachable' };
+  /** `why` says it in words where there is more to say than that. */
+  | { readonly kind: 'unreachable'; readonly why: string | null };
 
 /** Which algorithm evaluates the functions: their main one, or the independent second one where there is one. */
 export type Route = 'main' | 'second';
@@ -56,7 +57,7 @@ export function evaluatePrecise(
     const at = formDouble(argument, () => null);
     return at === null || isTooFar(name, at, periods);
   });
-  if (far) return { kind: 'unreachable' };
+  if (far) return { kind: 'unreachable', why: null };
   for (const { name, argument } of entries) {
     const why = functions[name].outside?.(argument) ?? null;
     if (why !== null) return { kind: 'outside', why };
@@ -121,7 +122,9 @@ function sumLogs(found: readonly Entry[], digits: number, route: Route, report: 
       const excess = log.error.toString(2).length - guard;
       if (excess <= 0) {
         const value = expBall(log, needed + 16);
-        return value === null ? { kind: 'unreachable' } : { kind: 'value', value, log, route: attempt.route };
+        return value === null
+          ? { kind: 'unreachable', why: null }
+          : { kind: 'value', value, log, route: attempt.route };
       }
       guard += excess + 8;
     } else guard *= 2;
@@ -141,13 +144,15 @@ function logAt(entries: readonly Shared[], bits: number, route: Route, report: R
   for (const [done, entry] of entries.entries()) {
     report(done, entries.length);
     const argument = formFixed(entry.argument, bits);
-    if (argument === null) return { kind: 'refused', why: { kind: 'unreachable' } };
+    if (argument === null) return { kind: 'refused', why: { kind: 'unreachable', why: null } };
     const parameters = entry.parameters.map(exactParameter);
     const declared = functions[entry.name];
     const second = route === 'second' ? (declared.crossCheck?.(argument, parameters, bits) ?? null) : null;
-    if (second) used = second.route;
-    const log: PreciseLog = second ? second.log : declared.precise(argument, parameters, bits);
+    const confirmed = second !== null && second.log.kind !== 'unreachable';
+    if (confirmed) used = second.route;
+    const log: PreciseLog = confirmed ? second.log : declared.precise(argument, parameters, bits);
     if (log.kind === 'indistinct') return { kind: 'again' };
+    if (log.kind === 'unreachable') return { kind: 'refused', why: { kind: 'unreachable', why: log.says } };
     if (log.kind !== 'value') {
       return { kind: 'refused', why: { kind: log.kind, order: log.order * Math.abs(entry.power) } };
     }
@@ -175,5 +180,5 @@ export function exactParameter(form: Form): ExactParameter {
 
 function stuck(entries: readonly Entry[]): PreciseValue {
   const near = entries.find(({ name }) => functions[name].zeros.length > 0);
-  return near ? { kind: 'indistinct', argument: near.argument.key } : { kind: 'unreachable' };
+  return near ? { kind: 'indistinct', argument: near.argument.key } : { kind: 'unreachable', why: null };
 }

@@ -75,6 +75,9 @@ export function functionValue(analysis: Analysis, quantity: FunctionQuantity, di
     case 'outside':
       return failure(of, `${value.why}.`);
     case 'unreachable':
-      return failure(of, 'The value is out of reach: an argument is undefined, or outside the domain of the function.');
+      return failure(
+        of,
+        `The value is out of reach: ${value.why ?? 'an argument is undefined, or outside the domain of the function'}.`,
+      );
   }
 }

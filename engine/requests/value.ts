@@ -85,7 +85,7 @@ function nonValue(of: string, value: Exclude<PreciseValue, { kind: 'value' }>, l
     case 'unreachable':
       return failure(
         of,
-        'The value is out of reach: too large or too small to be written down, or its argument is undefined.',
+        `The value is out of reach: ${value.why ?? 'too large or too small to be written down, or its argument is undefined'}.`,
       );
   }
 }
