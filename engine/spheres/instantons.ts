@@ -48,22 +48,27 @@ export function instantonNotes(theory: Theory): readonly string[] {
       ? []
       : [
           `It is that of $U(n)$ at traceless $a$${gauge.length < 2 ? '' : ` for ${traceless.join(', ')}`}: the factor of ` +
-            `the $U(1)$ is not divided out.${typeof data !== 'string' && isFourFlavours(theory, data) ? FOUR_FLAVOURS : ''}`,
+            `the $U(1)$ is not divided out.${typeof data === 'string' ? '' : unitaryFactor(theory, data)}`,
         ]),
   ];
 }
 
-/** L. F. Alday, D. Gaiotto, Y. Tachikawa, arXiv:0906.3219, section 3.3: (1 - q)^{2 m0 (Q - m1)}. */
-const FOUR_FLAVOURS =
-  ' With $M_f=Q/2+im_f$ it is $(1-q)^{(M_1+M_2)(M_3+M_4)/2}$ for any split of the four flavours into pairs, and what it ' +
-  'leaves is the Virasoro block of that split.';
-
-/** SU(2) with four hypers in the fundamental and no other matter. */
-function isFourFlavours(theory: Theory, { nodes }: InstantonData): boolean {
+/** What is known of the U(1) factor of SU(2): L. F. Alday, D. Gaiotto, Y. Tachikawa, arXiv:0906.3219, sections 3.3 and 5. */
+function unitaryFactor(theory: Theory, { nodes }: InstantonData): string {
   const [node, ...more] = nodes;
-  const isUnitary = gaugeGroups(theory).some(({ group }) => group.group.family === 'U');
-  if (!node || more.length > 0 || isUnitary) return false;
-  return node.colours.length === 2 && node.fundamental.length === 4 && node.adjoint.length === 0;
+  const hasUnitary = gaugeGroups(theory).some(({ group }) => group.group.family === 'U');
+  if (!node || more.length > 0 || hasUnitary || node.colours.length !== 2) return '';
+  if (node.fundamental.length === 4 && node.adjoint.length === 0) {
+    return (
+      ' With $M_f=Q/2+im_f$ it is $(1-q)^{(M_1+M_2)(M_3+M_4)/2}$ for any split of the four flavours into pairs, and what ' +
+      'it leaves is the Virasoro block of that split.'
+    );
+  }
+  if (node.fundamental.length > 0 || node.adjoint.length !== 1) return '';
+  return (
+    ' With $M=Q/2+im$ it is $\\prod_{n\\ge1}(1-q^n)^{2M(Q-M)-1}$, and what it leaves is the Virasoro block of one point on the ' +
+    'torus.'
+  );
 }
 
 function refused(message: string): CoefficientSum {

@@ -64,7 +64,7 @@ export function run(): JobRow[] {
       [
         `${name}: 50 digits, confirmed`,
         request(text, `value one-loop of ${theory} at sigma = 0.37, ${flux}m = 0.3, 50 digits`),
-        1000,
+        50,
       ],
     ];
   });

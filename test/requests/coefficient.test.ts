@@ -76,4 +76,7 @@ test('the factor of the U(1) is named where it is known', () => {
   expect(notes('SU(2)', 3)).not.toContain('(1-q)');
   expect(notes('SU(2)', 3)).toContain('is not divided out');
   expect(notes('U(2)', 4)).not.toContain('divided out');
+  const star = ['sphere S4', 'gauge G = SU(2)', 'flavor A = U(1)', 'matter G A', 'hyper a adj 1'];
+  const adjoint = answer(...theory(...star), 'value instanton1 of t at sigma = 1').notes.join(' ');
+  expect(adjoint).toContain('it is $\\prod_{n\\ge1}(1-q^n)^{2M(Q-M)-1}$');
 });

@@ -106,6 +106,14 @@ describe('closed values', () => {
     }
   });
 
+  test.each([1, 2, 3])('adjoint matter of U(2) against a conformal block on the torus, %i instantons', (k) => {
+    const of = theory('sphere S4, b = 3/4', 'gauge G = U(2)', 'flavor A = U(1)', 'matter G A', 'hyper x adj 1');
+    const { sigma1, sigma2, m } = { sigma1: i('-2/7'), sigma2: i('2/7'), m: mass('3/8') };
+    expect(exactly(of, k, { sigma1, sigma2, m })).toBe(row(`nekrasov-U2-star-${k}`).exact);
+    const special = theory('sphere S4, b = 3/4', 'gauge G = SU(2)', 'flavor A = U(1)', 'matter G A', 'hyper x adj 1');
+    expect(exactly(special, k, { sigma: sigma1, m })).toBe(row(`nekrasov-U2-star-${k}`).exact);
+  });
+
   test('SU(2) x SU(2) against a contour integral', () => {
     for (const groups of [
       ['SU(2)', 'SU(2)'],
