@@ -6,6 +6,7 @@ import { memoiseByKey } from './kernel-memo';
 import type { ExactParameter, PreciseLog } from './special-function';
 import { logTripleSineRound } from './triple-sine-closed';
 import { tripleSineByContour } from './triple-sine-contour';
+import { logTripleSineByLattice } from './triple-sine-lattice';
 import { logTripleSine } from './triple-sine-precise';
 import { logUpsilonByMidpoint } from './upsilon-midpoint';
 import { logUpsilon } from './upsilon-precise';
@@ -76,13 +77,26 @@ export const CLOSED_FORM_BITS = 400;
 /** Bits up to which the quadrature is worth its time as a second route. */
 const QUADRATURE_BITS = 1200;
 
-/** For equal periods the one of quadrature and closed form that is not the main route, else the quadrature on another contour. */
+/** Bits up to which the lattice product, whose points grow with the cube of the bits, is quicker than the contour. */
+const LATTICE_BITS = 360;
+
+/**
+ * For equal periods the one of quadrature and closed form that is not the main route; else the lattice product, for many
+ * digits the quadrature on another contour. Complex periods: the lattice product with other far points.
+ */
 export function tripleSineSecondRoute(x: FixedComplex, w: readonly ExactParameter[], bits: number): SecondRoute | null {
-  if (w.length !== 3 || !w.every(({ approx }) => approx.im === 0 && approx.re > 0)) return null;
+  if (!w.every(({ approx }) => approx.im === 0 && approx.re > 0)) {
+    const log = logTripleSineByLattice(x, w, bits, STRETCH);
+    return { route: 'lattice product with other far points', log };
+  }
   const closed = logTripleSineRound(x, w, bits);
   if (closed !== null) {
     if (bits <= CLOSED_FORM_BITS) return { route: 'closed form in polylogarithms', log: closed };
     return bits > QUADRATURE_BITS ? null : { route: 'midpoint rule', log: logTripleSine(x, w, bits) };
+  }
+  if (bits <= LATTICE_BITS) {
+    const log = logTripleSineByLattice(x, w, bits);
+    if (log.kind !== 'unreachable') return { route: 'lattice product', log };
   }
   if (bits > CONTOUR_BITS) return null;
   return { route: 'midpoint rule off the real line', log: logTripleSine(x, w, bits, tripleSineByContour) };

@@ -47,13 +47,24 @@ const MAXIMAL_LATTICE_POINTS = 400_000;
 /** Why there is no table, in words. */
 export const TOO_MANY_POINTS = `more than ${MAXIMAL_LATTICE_POINTS} lattice points would be needed`;
 /** Products spent on the power sums of further points, so that these need not be factors. */
-const ABSORBING = 120_000;
+const ABSORBING = 200_000;
 /** Points further out than so many radii may be left to the power series. */
 const FACTORS_REACH = 6;
 
-/** How far out, in periods, the expansion of a sum at infinity starts: its smallest term is e^{-2 pi reach}. */
+/** What expansions leave out is below 2^-(bits + this). */
+const SPARE_BITS = 32;
+
+/**
+ * How far out, in periods, the expansion of a sum at infinity starts, in order to be right to `bits` bits: its smallest term
+ * is about e^{-2 pi reach}, and term i, (2i)!/(2 pi reach)^{2i}, must be small before the 0.2 `bits` + 16 terms end that
+ * `barnesSeries` has.
+ */
 export function latticeReach(bits: number): number {
-  return 0.125 * bits + 6;
+  const target = bits + SPARE_BITS;
+  const last = 2 * Math.floor(0.2 * target + 16);
+  // Stirling's formula for the root of (2i)!.
+  const root = (last / Math.E) * (2 * Math.PI * last) ** (1 / (2 * last));
+  return Math.max(0.1104 * target + 2, (root * 2 ** (target / last)) / (2 * Math.PI));
 }
 
 /** A class of radii that holds |z|: ratios of the root of 2, not below a quarter of the sum of the periods. */
@@ -76,7 +87,7 @@ export function latticeTable(
 ): LatticeTable | null {
   const approx = periods.map(({ approx }) => approx);
   const sizes = approx.map(({ re, im }) => Math.hypot(re, im));
-  const reach = latticeReach(bits + 64) * stretch;
+  const reach = latticeReach(bits) * stretch;
   const out = reach * Math.max(...sizes) + radius;
   const volume = sizes.reduce((sum, size) => sum + Math.max(0, Math.log2(out / size)), 0);
   const working = bits + 32 * Math.ceil((volume + Math.log2(Math.log2(out + 2) + 2) + 34) / 32);

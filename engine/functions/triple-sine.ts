@@ -5,6 +5,7 @@ import { outsideDomain } from './outside-domain';
 import type { FunctionAt, Printer, SpecialFunction } from './special-function';
 import { logTripleSineRound } from './triple-sine-closed';
 import { tripleSineKernel } from './triple-sine-double';
+import { logTripleSineByLattice } from './triple-sine-lattice';
 import { logTripleSine } from './triple-sine-precise';
 
 const HALF = Form.ratio(1, 2);
@@ -13,7 +14,7 @@ const HALF = Form.ratio(1, 2);
  * The triple sine S_3(x | w1, w2, w3) = prod_{n>=0} (n.w + x)(n.w + |w| - x), zeta-regularised (no further constant).
  * Zeros at -n.w and |w| + n.w; S_3(|w| - x) = S_3(x); S_3(x + w_i) = S_3(x)/S_2(x | w_j, w_k) with
  * S_2(x | u, v) = s_b(i (x/sqrt(uv) - Q/2)), b = sqrt(u/v); log S_3 -> -(i pi/6) B_33(x | w) for Im x -> +infinity.
- * Parameters: w1, w2, w3 > 0.
+ * Parameters: w1, w2, w3 in an open half plane.
  */
 export const tripleSine: SpecialFunction = {
   name: 'tripleSine',
@@ -61,8 +62,10 @@ export const tripleSine: SpecialFunction = {
     const [w1, w2, w3] = w.map(({ re, im }) => (im === 0 && re > 0 && Number.isFinite(re) ? re : null));
     return w1 && w2 && w3 ? tripleSineKernel(w1, w2, w3) : outsideDomain;
   },
-  precise: (x, w, bits) =>
-    (bits > CLOSED_FORM_BITS ? logTripleSineRound(x, w, bits) : null) ?? logTripleSine(x, w, bits),
+  precise: (x, w, bits) => {
+    if (!w.every(({ approx }) => approx.im === 0 && approx.re > 0)) return logTripleSineByLattice(x, w, bits);
+    return (bits > CLOSED_FORM_BITS ? logTripleSineRound(x, w, bits) : null) ?? logTripleSine(x, w, bits);
+  },
   crossCheck: (x, w, bits) => tripleSineSecondRoute(x, w, bits),
   sources: [
     { key: 'Kurokawa-Koyama-2003', text: 'N. Kurokawa, S. Koyama, Forum Math. 15 (2003) 839: multiple sine functions' },

@@ -23,7 +23,7 @@ type Periods = readonly [ExactParameter, ExactParameter];
 export function isFarOut(z: FixedComplex, periods: Periods, bits: number): boolean {
   const re = numberFromFixed(z.re, bits);
   const im = numberFromFixed(z.im, bits);
-  const needed = latticeReach(bits + 64);
+  const needed = latticeReach(bits);
   return periods.every(({ approx: p }) => {
     const norm = p.re * p.re + p.im * p.im;
     const ratio = (re * p.re + im * p.im) / norm;

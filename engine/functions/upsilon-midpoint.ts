@@ -22,6 +22,8 @@ const MAXIMAL_SHIFTS = 60;
 
 /** More nodes than this are not worth their time as a second route. */
 const MAXIMAL_NODES = 20_000;
+/** Nor are more terms of the correction, whose making takes the square of their number. */
+const MAXIMAL_TERMS = 400;
 
 const INDISTINCT: PreciseLog = { kind: 'indistinct' };
 
@@ -127,6 +129,7 @@ function tableFor(x: FixedComplex, b: ExactParameter, bits: number): UpsilonTabl
   const reach = reachClass(numberFromFixed(x.im, bits) * Math.PI * small);
   // The correction needs (2J)!/rate^{2J} e^{2 reach} < e^-depth; with 2J = depth + 2 reach a rate 1.15 times that does.
   const terms = Math.ceil(((bits + 14) * Math.LN2 + 2 * reach) / 2);
+  if (terms > MAXIMAL_TERMS) return null;
   const plan = planKernel(approx, bits, width, 2.3 * terms);
   if (plan === null || plan.nodes > MAXIMAL_NODES) return null;
   const working = bits + plan.guard + 32 * Math.ceil((2 * reach) / Math.LN2 / 32);
