@@ -1,32 +1,46 @@
+import { loadavg } from 'node:os';
 import { run as accuracy } from './accuracy.bench';
 import { run as arithmetic } from './arithmetic.bench';
 import { run as doubleSine } from './double-sine-precise.bench';
 import { run as jobs } from './engine.bench';
-import { run as functions } from './functions.bench';
+import { run as functions, GROWTH_DIGITS, growth } from './functions.bench';
 import { measureLie } from './lie.bench';
+import { compileArb } from './peers';
 import { run as spectra } from './spectrum.bench';
 import { run as spheres } from './spheres.bench';
-import type { ComparisonRow } from './timing';
+import { type ComparisonRow, mpmathVersion } from './timing';
 
 /**
- * Prints every bench. Comparisons are in processor time, so that other work on the machine does not count; what a person
- * waits for is on the clock.
+ * Prints every bench, or those comparisons whose title holds a word given. Comparisons are in processor time, so that other
+ * work on the machine counts little; what a person waits for is on the clock.
  */
 function main(): void {
   if (process.argv.includes('accuracy')) {
     statedErrors();
     return;
   }
+  const missing = compileArb();
+  if (missing !== null) process.stdout.write(`Arb is left out: ${missing}\n`);
   const comparisons: readonly (readonly [string, () => readonly ComparisonRow[]])[] = [
     ['Arithmetic', arithmetic],
     ['Double sine, precise tier', doubleSine],
     ['Special functions', functions],
     ['Determinants of spectra', spectra],
   ];
+  const [, , word] = process.argv;
+  process.stdout.write(`Load ${loadavg()[0]?.toFixed(1)}; Node ${process.version}; mpmath ${mpmathVersion()}\n`);
   for (const [title, run] of comparisons) {
+    if (word !== undefined && !title.toLowerCase().includes(word)) continue;
     heading(title);
     table(['', 'digits', 'ours', 'peer', 'peer time', 'ratio', 'our error', 'its error'], run().map(comparisonCells));
   }
+  if (word !== undefined && word !== 'digits') return;
+  heading('A call by digits, tables warm');
+  table(
+    ['', ...GROWTH_DIGITS.map(String)],
+    growth().map(([name, times]) => [name, ...times.map(microseconds)]),
+  );
+  if (word !== undefined) return;
   heading('What a keystroke and a slider ask for');
   table(
     ['', 'least, ms', 'median, ms', 'limit', 'limit / least'],
@@ -69,7 +83,7 @@ function comparisonCells(row: ComparisonRow): string[] {
     `${row.digits}`,
     microseconds(row.microseconds),
     row.peer,
-    time === null ? 'absent' : `${microseconds(time)}${row.peerTime === 'recorded' ? ' (recorded)' : ''}`,
+    time === null ? (row.peer === 'none' ? '' : 'absent') : microseconds(time),
     row.ratio === null ? '' : `${row.ratio.toPrecision(3)}x`,
     error(row.log10Error),
     error(row.peerLog10Error),

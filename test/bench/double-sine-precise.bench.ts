@@ -1,13 +1,13 @@
 import Decimal from 'decimal.js';
-import { integerSqrt } from '../../engine/arithmetic/fixed';
+import { fixedFromRatio, integerSqrt } from '../../engine/arithmetic/fixed';
 import type { FixedComplex } from '../../engine/arithmetic/fixed-complex';
-import { doubleSineFrame } from '../../engine/functions/double-sine-frame';
-import { buildNearTable } from '../../engine/functions/double-sine-near-table';
 import type { ExactPeriod } from '../../engine/functions/double-sine-period';
 import { logDoubleSine } from '../../engine/functions/double-sine-precise';
 import fixture from '../fixtures/functions/double-sine-precise.json' with { type: 'json' };
+import { compare } from './functions.bench';
+import { arbPeer, EXTRA, mpmathPeer, pariPeer } from './peers';
 import type { ComparisonRow } from './timing';
-import { calibration, log10Difference, runPython, timeInTurns } from './timing';
+import { log10Difference, timeInTurns } from './timing';
 
 /** b = 2^(1/4): irrational, no double poles. */
 const PERIOD: ExactPeriod = {
@@ -16,46 +16,32 @@ const PERIOD: ExactPeriod = {
   approx: 2 ** 0.25,
 };
 
-const ROUNDS = 5;
+const ROUNDS = 9;
 
-/** mpmath's quadrature is run live up to these digits: 200 take six seconds and more. */
-const LIVE_DIGITS = [15, 50] as const;
-const PYTHON_PATIENCE = 60_000;
-
-/**
- * mpmath 1.2.1 with gmpy, one call of quad in microseconds, measured by `QUADRATURE` below beside the calibration loop of timing.ts on an
- * idle two-core machine; used (scaled) where Python is missing, and for 200 digits.
- */
-const RECORDED = {
-  calibration: 304,
-  quadrature: [
-    { digits: 15, microseconds: 57_000 },
-    { digits: 50, microseconds: 480_000 },
-    { digits: 200, microseconds: 5_700_000 },
-  ],
-};
+/** The point of the fixture, inside the strip, and one where residues alone are summed. */
+const NEAR = [3, 10, 1, 5] as const;
+const FAR = [3, 2, 1, 5] as const;
 
 /** log s_b(0.3 + 0.2i) by quadrature on R + i pi b/2, no cancellation; log s_b(x) = -log s_b(-x) brings Re x below 0. */
-const QUADRATURE = `
-import time, mpmath as mp
-for digits in DIGITS:
-    bits = int(digits * 3.3219281) + 8
-    mp.mp.dps = digits
+const QUADRATURE = `import mpmath as mp
+def double_sine():
     i, b = mp.mpc(0, 1), mp.root(2, 4)
-    x = -mp.mpc(mp.ldexp(mp.nint(mp.ldexp(mp.mpf('0.3'), bits)), -bits), mp.ldexp(mp.nint(mp.ldexp(mp.mpf('0.2'), bits)), -bits))
+    x = -mp.mpc(mp.mpf(3) / 10, mp.mpf(1) / 5)
     a = mp.pi / b / 2
     def integrand(u):
         w = mp.mpc(u, a)
         return mp.exp(-2 * i * x * w) / (4 * w * mp.sinh(b * w) * mp.sinh(w / b))
-    def value():
-        line = mp.quad(integrand, [-mp.inf, 0, mp.inf])
-        return -(-i * mp.pi * x ** 2 / 2 - i * mp.pi * (b ** 2 + b ** -2) / 24 + line)
-    start = time.process_time()
-    v = value()
-    passed = (time.process_time() - start) * 1e6
-    mp.mp.prec += 60
-    print(digits, passed, int(mp.nint(mp.ldexp(v.real, bits + 40))), int(mp.nint(mp.ldexp(v.imag, bits + 40))))
-`;
+    line = mp.quad(integrand, [-mp.inf, 0, mp.inf])
+    return -(-i * mp.pi * x ** 2 / 2 - i * mp.pi * (b ** 2 + b ** -2) / 24 + line)`;
+
+/** The same for PARI, which is told how the integrand decays. */
+const PARI_SETUP = 'b = sqrtn(2, 4); x = -3/10 - I/5; a = Pi/b/2; rate = b + 1/b - 2/5';
+const PARI_QUADRATURE =
+  'I*Pi*x^2/2 + I*Pi*(b^2 + b^-2)/24 - intnum(u = [-oo, rate], [oo, rate], w = u + I*a; exp(-2*I*x*w)/(4*w*sinh(b*w)*sinh(w/b)))';
+
+/** Digits up to which the quadratures are run: beyond, a call takes many seconds. */
+const MPMATH_MOST = 50;
+const PARI_MOST = 200;
 
 function integer(text: string | undefined): bigint {
   if (text === undefined) throw new Error('missing number');
@@ -83,23 +69,6 @@ function referenceFor(digits: number): Reference {
 function worstError(value: FixedComplex, reference: Reference): number {
   const bits = reference.bits + fixture.extra;
   return Math.max(log10Difference(value.re, reference.log.re, bits), log10Difference(value.im, reference.log.im, bits));
-}
-
-interface QuadratureResult {
-  readonly digits: number;
-  readonly microseconds: number;
-  readonly value: FixedComplex;
-}
-
-function askMpmath(): QuadratureResult[] {
-  const output = runPython(QUADRATURE.replace('DIGITS', JSON.stringify(LIVE_DIGITS)), PYTHON_PATIENCE);
-  return (output ?? '')
-    .split('\n')
-    .filter((line) => line !== '')
-    .map((line) => {
-      const [digits = '', microseconds = '', re = '0', im = '0'] = line.split(' ');
-      return { digits: Number(digits), microseconds: Number(microseconds), value: { re: BigInt(re), im: BigInt(im) } };
-    });
 }
 
 /**
@@ -142,52 +111,98 @@ function decimalMidpoint(digits: number): (x: Decimal) => Decimal {
   };
 }
 
-/** Ours against mpmath's quadrature (complex x) and against decimal.js (real x), with the accuracy reached. */
+function point([a, b, c, d]: readonly [number, number, number, number], bits: number): FixedComplex {
+  return {
+    re: fixedFromRatio(BigInt(a), BigInt(b), bits),
+    im: fixedFromRatio(BigInt(c), BigInt(d), bits),
+  };
+}
+
+function logAt(x: FixedComplex, period: ExactPeriod, bits: number): FixedComplex {
+  const log = logDoubleSine(x, period, bits);
+  if (log.kind !== 'value') throw new Error(log.kind);
+  return log;
+}
+
+/** Ours against quadratures and the same sums in C with Arb (complex x), decimal.js (real x), and what tables cost. */
 export function run(): ComparisonRow[] {
-  const speed = calibration() / RECORDED.calibration;
-  const live = askMpmath();
   const rows: ComparisonRow[] = [];
   for (const digits of [15, 50, 200, 1000]) {
     const reference = referenceFor(digits);
-    const { x, bits } = reference;
-    const log = logDoubleSine(x, PERIOD, bits);
-    if (log.kind !== 'value') throw new Error(log.kind);
-    const up = BigInt(fixture.extra);
-    const log10Error = worstError({ re: log.re << up, im: log.im << up }, reference);
-    const [own = Number.NaN] = timeInTurns([() => logDoubleSine(x, PERIOD, bits)], ROUNDS);
-    const measured = live.find((result) => result.digits === digits);
-    const recorded = RECORDED.quadrature.find((entry) => entry.digits === digits);
-    const time = measured?.microseconds ?? (recorded === undefined ? null : recorded.microseconds * speed);
-    rows.push({
-      name: 'log s_b, complex x',
-      digits,
-      microseconds: own,
-      peer: 'mpmath quad',
-      peerMicroseconds: time,
-      ratio: time === null ? null : time / own,
-      peerTime: measured !== undefined ? 'live' : recorded !== undefined ? 'recorded' : 'none',
-      log10Error,
-      peerLog10Error: measured === undefined ? null : worstError(measured.value, reference),
-    });
-    const table = () => {
-      const frame = doubleSineFrame(PERIOD, bits);
-      return frame === null ? null : buildNearTable(frame, frame.q / 4, 1);
-    };
-    const [building = Number.NaN] = timeInTurns([table], digits > 200 ? 1 : ROUNDS);
-    rows.push({
-      name: 'table of one b',
-      digits,
-      microseconds: building,
-      peer: 'none',
-      peerMicroseconds: null,
-      ratio: null,
-      peerTime: 'none',
-      log10Error: null,
-      peerLog10Error: null,
-    });
-    if (digits <= 50) rows.push(againstDecimal(digits, x.re, bits));
+    const { bits } = reference;
+    for (const [name, where, word] of [
+      ['log s_b, complex x', NEAR, 'double-sine-near'],
+      ['log s_b, complex x, Re x > Q/4', FAR, 'double-sine-far'],
+    ] as const) {
+      const x = point(where, bits);
+      const log = logAt(x, PERIOD, bits);
+      const ours = { re: log.re << BigInt(EXTRA), im: log.im << BigInt(EXTRA) };
+      const peers = [arbPeer('same sums, Arb', word, (wanted) => point(where, wanted))];
+      if (where === NEAR && digits <= PARI_MOST) peers.push(pariPeer('PARI intnum', PARI_SETUP, PARI_QUADRATURE));
+      if (where === NEAR && digits <= MPMATH_MOST) peers.push(mpmathPeer('mpmath quad', QUADRATURE, 'double_sine()'));
+      rows.push(...compare(name, digits, bits, () => logDoubleSine(x, PERIOD, bits), ours, peers));
+    }
+    rows.push(...fixtureRow(reference, digits));
+    if (digits <= 200) rows.push(...sharedTables(digits, bits));
+    if (digits <= 50) rows.push(againstDecimal(digits, reference.x.re, bits));
   }
   return rows;
+}
+
+/** The error against mpmath's value of the fixture, as a row without a peer's time. */
+function fixtureRow(reference: Reference, digits: number): ComparisonRow[] {
+  const { x, bits } = reference;
+  const log = logAt(x, PERIOD, bits);
+  const up = BigInt(fixture.extra);
+  const [microseconds = Number.NaN] = timeInTurns([() => logDoubleSine(x, PERIOD, bits)], ROUNDS);
+  const log10Error = worstError({ re: log.re << up, im: log.im << up }, reference);
+  const rest = { peerMicroseconds: null, ratio: null, peerLog10Error: null };
+  return [{ name: 'log s_b, complex x, fixture', digits, microseconds, peer: 'none', log10Error, ...rest }];
+}
+
+/**
+ * A thousand points at a new b beside one point at a new b and 999 sums with its table: the ratio is 1 as far as all points
+ * share the table.
+ */
+function sharedTables(digits: number, bits: number): ComparisonRow[] {
+  const points = Array.from({ length: 1000 }, (_, k) => point([k + 1, 4000, 1, 5], bits));
+  let fresh = 0;
+  const newPeriod = (): ExactPeriod => {
+    // Another b every time, so that no table is there yet.
+    const shift = BigInt(++fresh);
+    return { ...PERIOD, value: (wanted) => PERIOD.value(wanted) + ((shift << BigInt(wanted)) >> 40n) };
+  };
+  const many = (): void => {
+    const period = newPeriod();
+    for (const x of points) logDoubleSine(x, period, bits);
+  };
+  const first = points[0] as FixedComplex;
+  const warm = (): void => {
+    for (let k = 1; k < points.length; k++) logDoubleSine(points[k] as FixedComplex, PERIOD, bits);
+  };
+  const [all = Number.NaN, one = Number.NaN, sums = Number.NaN] = timeInTurns(
+    [many, () => logDoubleSine(first, newPeriod(), bits), warm],
+    3,
+  );
+  const none = { log10Error: null, peerLog10Error: null, digits };
+  return [
+    {
+      name: '1000 points at a new b',
+      microseconds: all,
+      peer: 'one, and 999 sums',
+      peerMicroseconds: one + sums,
+      ratio: (one + sums) / all,
+      ...none,
+    },
+    {
+      name: 'one point at a new b',
+      microseconds: one,
+      peer: '1000 points, each',
+      peerMicroseconds: all / 1000,
+      ratio: all / 1000 / one,
+      ...none,
+    },
+  ];
 }
 
 function againstDecimal(digits: number, re: bigint, bits: number): ComparisonRow {
@@ -210,7 +225,6 @@ function againstDecimal(digits: number, re: bigint, bits: number): ComparisonRow
     peer: 'decimal.js midpoint rule',
     peerMicroseconds: peer,
     ratio: peer / own,
-    peerTime: 'live',
     log10Error: log10Difference(log.im << 60n, fine.im, bits + 60),
     peerLog10Error: log10Difference(decimal, fine.im, bits + 60),
   };

@@ -1,9 +1,11 @@
 import { fixedFromRatio, integerSqrt } from '../../engine/arithmetic/fixed';
 import type { FixedComplex } from '../../engine/arithmetic/fixed-complex';
+import { expFixed } from '../../engine/arithmetic/fixed-exp';
 import { Rational } from '../../engine/exact/rational';
 import type { DoubleKernel, ExactParameter } from '../../engine/functions/special-function';
 import { functions } from '../../engine/functions/table';
 import { valueFunctions } from '../../engine/functions/values';
+import { arbPeer, mpmathPeer, type Peer, pariPeer } from './peers';
 
 /** Values in one call of a kernel in doubles. */
 export const ARRAY = 10_000;
@@ -40,74 +42,134 @@ const ROOT: ExactParameter = {
   approx: { re: Math.SQRT2, im: 0 },
 };
 
-/** A function to any number of digits, and the same in mpmath: an expression in the names of `PRELUDE`. */
+/** A function to any number of digits, and the same elsewhere. */
 export interface PreciseCase {
   readonly name: string;
-  readonly python: string;
-  readonly peer: string;
-  /** Digits up to which the peer is run live; it needs many seconds beyond. */
-  readonly live: number;
   readonly compute: (bits: number) => FixedComplex & { readonly kind: string };
+  readonly peers: readonly CasePeer[];
 }
+
+/** A peer, and the digits up to which it is asked; it needs many seconds beyond. */
+export interface CasePeer {
+  readonly peer: Peer;
+  readonly most: number;
+}
+
+function mpmath(what: string, expression: string, most = 200): CasePeer {
+  return { peer: mpmathPeer(`mpmath ${what}`, PRELUDE, expression), most };
+}
+
+function pari(what: string, expression: string, most = 200): CasePeer {
+  return { peer: pariPeer(`PARI ${what}`, '', expression), most };
+}
+
+function arb(word: string, re: ExactParameter, im: ExactParameter = rational(0)): CasePeer {
+  const argument = (bits: number): FixedComplex => ({ re: re.value(bits).re, im: im.value(bits).re });
+  return { peer: arbPeer('Arb', word, argument), most: 1000 };
+}
+
+const THIRTEEN = rational(13, 10);
+const TWENTY_ONE = rational(21, 10);
 
 export const PRECISE: readonly PreciseCase[] = [
   {
-    name: 'log Gamma',
-    python: 'mp.loggamma(mp.mpc(mp.mpf(13)/10, mp.mpf(21)/10))',
-    peer: 'mpmath loggamma',
-    live: 200,
-    compute: (bits) => log('gamma', [complexArgument(rational(13, 10), rational(21, 10))], bits),
+    name: 'log Gamma, complex z',
+    compute: (bits) => log('gamma', [complexArgument(THIRTEEN, TWENTY_ONE)], bits),
+    peers: [
+      mpmath('loggamma', 'mp.loggamma(mp.mpc(mp.mpf(13)/10, mp.mpf(21)/10))'),
+      arb('log-gamma', THIRTEEN, TWENTY_ONE),
+      pari('lngamma', 'lngamma(13/10 + 21/10*I)'),
+    ],
   },
   {
-    name: 'log s_b, real x',
-    python: 'double_sine(mp.mpf(3)/10, mp.root(2, 4))',
-    peer: 'mpmath quad',
-    live: 50,
-    compute: (bits) => log('doubleSine', [rational(3, 10), GENERIC], bits),
-  },
-  {
-    name: 'log Upsilon_b, on the axis',
-    python: 'upsilon(mp.mpc(0, 1), mp.mpf(4)/5)',
-    peer: 'mpmath quad',
-    live: 50,
-    compute: (bits) => log('upsilon', [complexArgument(rational(41, 40), rational(1)), rational(4, 5)], bits),
-  },
-  {
-    name: 'log S_3, round, on the axis',
-    python: 'triple_sine(mp.mpc(0, 1), [mp.mpf(1)] * 3)',
-    peer: 'mpmath quad',
-    live: 50,
-    compute: (bits) =>
-      log('tripleSine', [complexArgument(rational(3, 2), rational(1)), rational(1), rational(1), rational(1)], bits),
-  },
-  {
-    name: 'log S_3, periods 1, sqrt 2, 2',
-    python: 'triple_sine(mp.mpc(0, 1), [mp.mpf(1), mp.sqrt(2), mp.mpf(2)])',
-    peer: 'mpmath quad',
-    live: 50,
-    compute: (bits) => log('tripleSine', [halfTotal(), rational(1), ROOT, rational(2)], bits),
+    name: 'log Gamma, real z',
+    compute: (bits) => log('gamma', [rational(7, 3)], bits),
+    peers: [
+      mpmath('loggamma', 'mp.loggamma(mp.mpf(7)/3)'),
+      arb('log-gamma', rational(7, 3)),
+      pari('lngamma', 'lngamma(7/3)'),
+    ],
   },
   {
     name: 'dilogarithm',
-    python: 'mp.polylog(2, mp.mpc(mp.mpf(2)/5, mp.mpf(7)/10))',
-    peer: 'mpmath polylog',
-    live: 200,
     compute: (bits) => value('dilog', [complexArgument(rational(2, 5), rational(7, 10))], bits),
+    peers: [
+      mpmath('polylog', 'mp.polylog(2, mp.mpc(mp.mpf(2)/5, mp.mpf(7)/10))'),
+      arb('dilogarithm', rational(2, 5), rational(7, 10)),
+      pari('dilog', 'dilog(2/5 + 7/10*I)'),
+    ],
   },
+  ...[0, 1, 2].map(
+    (k): PreciseCase => ({
+      name: `zeta'(${k === 0 ? '' : '-'}${k}, 7/10)`,
+      compute: (bits) => value('zetaprime', [rational(k), rational(7, 10)], bits),
+      peers: [
+        mpmath('zeta', `mp.zeta(-${k}, mp.mpf(7)/10, 1)`),
+        arb(`zeta-derivative-${k}`, rational(7, 10)),
+        pari('zetahurwitz', `zetahurwitz(-${k}, 7/10, 1)`),
+      ],
+    }),
+  ),
   {
     name: 'zeta(s, a), complex s',
-    python: 'mp.zeta(mp.mpc(mp.mpf(1)/2, 3), mp.mpf(7)/10)',
-    peer: 'mpmath zeta',
-    live: 200,
     compute: (bits) => value('hurwitz', [complexArgument(rational(1, 2), rational(3)), rational(7, 10)], bits),
+    peers: [
+      mpmath('zeta', 'mp.zeta(mp.mpc(mp.mpf(1)/2, 3), mp.mpf(7)/10)'),
+      pari('zetahurwitz', 'zetahurwitz(1/2 + 3*I, 7/10)'),
+    ],
   },
   {
     name: 'log Gamma_2(z | 1, 1)',
-    python: 'mp.zeta(-1, 1, 1) + (mp.mpf(7)/3 - 1)/2*mp.log(2*mp.pi) - mp.log(mp.barnesg(mp.mpf(7)/3))',
-    peer: 'mpmath barnesg',
-    live: 200,
     compute: (bits) => value('barnesgamma', [rational(7, 3), rational(1), rational(1)], bits),
+    peers: [
+      mpmath('barnesg', 'mp.zeta(-1, 1, 1) + (mp.mpf(7)/3 - 1)/2*mp.log(2*mp.pi) - mp.log(mp.barnesg(mp.mpf(7)/3))'),
+      arb('double-gamma', rational(7, 3)),
+    ],
   },
+  {
+    name: 'log s_b, real x',
+    compute: (bits) => log('doubleSine', [rational(3, 10), GENERIC], bits),
+    peers: [mpmath('quad', 'double_sine(mp.mpf(3)/10, mp.root(2, 4))', 50)],
+  },
+  {
+    name: 'log Upsilon_b, on the axis',
+    compute: (bits) => log('upsilon', [complexArgument(rational(41, 40), rational(1)), rational(4, 5)], bits),
+    peers: [mpmath('quad', 'upsilon(mp.mpc(0, 1), mp.mpf(4)/5)', 50)],
+  },
+  {
+    name: 'log S_3, round, on the axis',
+    compute: (bits) =>
+      log('tripleSine', [complexArgument(rational(3, 2), rational(1)), rational(1), rational(1), rational(1)], bits),
+    peers: [mpmath('quad', 'triple_sine(mp.mpc(0, 1), [mp.mpf(1)] * 3)', 50)],
+  },
+  {
+    name: 'log S_3, periods 1, sqrt 2, 2',
+    compute: (bits) => log('tripleSine', [halfTotal(), rational(1), ROOT, rational(2)], bits),
+    peers: [mpmath('quad', 'triple_sine(mp.mpc(0, 1), [mp.mpf(1), mp.sqrt(2), mp.mpf(2)])', 50)],
+  },
+];
+
+/** What the table of growth with the digits shows. */
+export const GROWTH: readonly (readonly [string, (bits: number) => unknown])[] = [
+  ['exp', (bits) => expFixed(fixedFromRatio(1234567n, 987654n, bits), bits)],
+  ['log Gamma, complex z', (bits) => log('gamma', [complexArgument(THIRTEEN, TWENTY_ONE)], bits)],
+  ['dilogarithm', (bits) => value('dilog', [complexArgument(rational(2, 5), rational(7, 10))], bits)],
+  ["zeta'(-1, 7/10)", (bits) => value('zetaprime', [rational(1), rational(7, 10)], bits)],
+  ['log Gamma_2(7/3 | 1, 1)', (bits) => value('barnesgamma', [rational(7, 3), rational(1), rational(1)], bits)],
+  [
+    'log s_b, complex x',
+    (bits) => log('doubleSine', [complexArgument(rational(3, 10), rational(1, 5)), GENERIC], bits),
+  ],
+  [
+    'log Upsilon_b, b = 4/5',
+    (bits) => log('upsilon', [complexArgument(rational(41, 40), rational(1)), rational(4, 5)], bits),
+  ],
+  [
+    'log S_3, round',
+    (bits) =>
+      log('tripleSine', [complexArgument(rational(3, 2), rational(1)), rational(1), rational(1), rational(1)], bits),
+  ],
+  ['log S_3, periods 1, sqrt 2, 2', (bits) => log('tripleSine', [halfTotal(), rational(1), ROOT, rational(2)], bits)],
 ];
 
 /** (1 + sqrt 2 + 2)/2 + i. */
@@ -192,7 +254,7 @@ export const ARRAYS: readonly ArrayCase[] = [
  * log s_b(x) = -log s_b(-x) brings Re x below 0.
  */
 export const PRELUDE = `
-import time, mpmath as mp
+import mpmath as mp
 def double_sine(x, b):
     i, a = mp.mpc(0, 1), mp.pi * min(b, 1 / b) / 2
     def integrand(u):
@@ -212,13 +274,4 @@ def triple_sine(z, w):
         return mp.exp(2 * z * t) / (8 * t * mp.sinh(w[0] * t) * mp.sinh(w[1] * t) * mp.sinh(w[2] * t))
     cubic = (z ** 3 - sum(v * v for v in w) * z / 4) / (w[0] * w[1] * w[2])
     return -mp.mpc(0, 1) * mp.pi * cubic / 6 - mp.quad(integrand, [-mp.inf, -4, 0, 4, mp.inf])
-def clock(f):
-    f()
-    count = 1
-    while True:
-        start = time.process_time()
-        for _ in range(count): f()
-        passed = time.process_time() - start
-        if passed > 0.01: return passed / count * 1e6
-        count *= 2
 `;

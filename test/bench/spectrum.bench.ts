@@ -120,7 +120,6 @@ export function run(): readonly ComparisonRow[] {
         peer: peer ? `mpmath (${peer.backend})` : 'mpmath',
         peerMicroseconds: peer?.microseconds ?? null,
         ratio: peer ? peer.microseconds / microseconds : null,
-        peerTime: peer ? 'live' : 'none',
         log10Error: own && exact !== undefined ? log10Difference(own.re, exact, own.bits) : null,
         peerLog10Error: null,
       }));
@@ -136,7 +135,6 @@ const silent = {
   peer: '',
   peerMicroseconds: null,
   ratio: null,
-  peerTime: 'none',
   log10Error: null,
   peerLog10Error: null,
 } as const;

@@ -9,14 +9,18 @@ export interface ComparisonRow {
   readonly peerMicroseconds: number | null;
   /** Peer's time over ours. */
   readonly ratio: number | null;
-  /** Where the peer's time comes from: measured in this run, or recorded earlier and scaled by the calibration loop. */
-  readonly peerTime: 'live' | 'recorded' | 'none';
   /** log10 of the error relative to max(1, |value|), ours and the peer's; null where it was not measured. */
   readonly log10Error: number | null;
   readonly peerLog10Error: number | null;
 }
 
 const BATCH_MILLISECONDS = 8;
+
+/**
+ * Processor time spent on a task before it is measured: the runtime compiles arithmetic on big integers late, and a task
+ * measured after 20 ms came out three times slower than after 200.
+ */
+const WARM_UP_MILLISECONDS = 250;
 
 /** Processor time in microseconds: other work on the machine does not count; helper threads of the runtime do. */
 function now(): number {
@@ -28,11 +32,13 @@ function now(): number {
 const sink: { last: unknown } = { last: null };
 
 function batchSize(task: () => unknown): number {
-  // Doubling also warms the code up.
-  for (let count = 1; ; count *= 2) {
+  const first = now();
+  for (let count = 1; ; ) {
     const start = now();
     for (let i = 0; i < count; i++) sink.last = task();
-    if (now() - start > BATCH_MILLISECONDS * 1e3) return count;
+    const end = now();
+    if (end - start < BATCH_MILLISECONDS * 1e3) count *= 2;
+    else if (end - first > WARM_UP_MILLISECONDS * 1e3) return count;
   }
 }
 
@@ -50,6 +56,52 @@ export function timeInTurns(tasks: readonly (() => unknown)[], rounds: number): 
   }
   return times.map(median);
 }
+
+/**
+ * Median microseconds a call of a task, measured before, between and after the questions to other programs, whose answers
+ * come beside it: a busy machine slows both sides.
+ */
+export function timeAround<Answer>(
+  task: () => unknown,
+  questions: readonly (() => Answer)[],
+): {
+  readonly microseconds: number;
+  readonly answers: readonly (readonly Answer[])[];
+} {
+  const count = batchSize(task);
+  const times: number[] = [];
+  const batches = (): void => {
+    for (let round = 0; round < 3; round++) {
+      const start = now();
+      for (let k = 0; k < count; k++) sink.last = task();
+      times.push((now() - start) / count);
+    }
+  };
+  const answers = questions.map((): Answer[] => []);
+  batches();
+  for (let turn = 0; turn < QUESTION_TURNS; turn++) {
+    questions.forEach((ask, k) => {
+      (answers[k] as Answer[]).push(ask());
+      batches();
+    });
+  }
+  return { microseconds: median(times), answers };
+}
+
+/** Calls longer than this are measured once, after one to make the tables. */
+const LONG_MICROSECONDS = 300_000;
+
+/** Microseconds a call with tables warm; the median of some batches unless one call is long. */
+export function timeOnce(task: () => unknown): number {
+  sink.last = task();
+  const start = now();
+  sink.last = task();
+  const passed = now() - start;
+  return passed > LONG_MICROSECONDS ? passed : (timeInTurns([task], 3)[0] as number);
+}
+
+/** How often another program is asked. */
+const QUESTION_TURNS = 2;
 
 /**
  * Least and median milliseconds on the clock of single calls, in turns, after a warm-up: what a person waits for. The
@@ -75,35 +127,51 @@ export function median(values: readonly number[]): number {
   return sorted[Math.floor(sorted.length / 2)] as number;
 }
 
-/** Microseconds of a fixed loop of BigInt products: compares this machine with the one a recorded time comes from. */
-export function calibration(): number {
-  const a = 3n ** 400n;
-  const b = 5n ** 270n;
-  const loop = () => {
-    let sum = 0n;
-    for (let i = 0n; i < 1000n; i++) sum ^= (a + i) * b;
-    return sum;
-  };
-  return timeInTurns([loop], 5)[0] as number;
+const PYTHONS = ['python3', '/usr/bin/python3'];
+
+interface Python {
+  readonly command: string;
+  readonly version: string;
 }
 
-/** Debian's own Python comes second: its modules are there where another Python is first in the search path. */
-const PYTHONS = ['python3', '/usr/bin/python3'];
+/** The Python whose mpmath works on GMP, which is several times faster, else the first that has mpmath; null without one. */
+function findPython(): Python | null {
+  const found = PYTHONS.flatMap((command): Python[] => {
+    const version = pythonOutput(command, 'import mpmath; print(mpmath.__version__, mpmath.libmp.BACKEND)', 20_000);
+    return version === null ? [] : [{ command, version: version.trim() }];
+  });
+  return found.find(({ version }) => version.endsWith('gmpy')) ?? found[0] ?? null;
+}
+
+function pythonOutput(command: string, program: string, milliseconds: number): string | null {
+  try {
+    return execFileSync(command, ['-c', program], {
+      encoding: 'utf8',
+      timeout: milliseconds,
+      stdio: ['ignore', 'pipe', 'ignore'],
+    });
+  } catch {
+    return null;
+  }
+}
+
+/** Found once a run. */
+const python: { found?: Python | null } = {};
+
+function thePython(): Python | null {
+  if (python.found === undefined) python.found = findPython();
+  return python.found;
+}
+
+/** Version and number type of mpmath, for the head of the report. */
+export function mpmathVersion(): string {
+  return thePython()?.version ?? 'absent';
+}
 
 /** Standard output of a Python program, or null where Python or a module it needs is missing, or the time is up. */
 export function runPython(program: string, milliseconds: number): string | null {
-  for (const python of PYTHONS) {
-    try {
-      return execFileSync(python, ['-c', program], {
-        encoding: 'utf8',
-        timeout: milliseconds,
-        stdio: ['ignore', 'pipe', 'ignore'],
-      });
-    } catch {
-      // The next one may have what this one lacks.
-    }
-  }
-  return null;
+  const found = thePython();
+  return found === null ? null : pythonOutput(found.command, program, milliseconds);
 }
 
 /** log10 of |a - b| / max(1, |b|) for fixed point numbers. */
