@@ -70,12 +70,7 @@ export function instantonMatter(theory: Theory, multiplet: Multiplet): MatterRes
       );
     }
     const [from, to] = first === one ? [one.n, other.n] : [other.n, one.n];
-    bifundamental.push(
-      ...masses.map((mass): Bifundamental => {
-        const shift = Form.i.mul(mass);
-        return { from, to, masses: { from: halfQ.sub(shift), to: halfQ.add(shift) } };
-      }),
-    );
+    bifundamental.push(...masses.map((mass) => ({ from, to, mass: halfQ.sub(Form.i.mul(mass)) })));
   }
   return { kind: 'matter', matter: { nodes, bifundamental } };
 }

@@ -16,8 +16,8 @@ export interface InstantonNode {
 export interface Bifundamental {
   readonly from: number;
   readonly to: number;
-  /** A box of `from` gives E - from mass, a box of `to` gives E - to mass, E between the two nodes. */
-  readonly masses: { readonly from: Form; readonly to: Form };
+  /** A box of `from` gives E - mass, a box of `to` gives E - (e1 + e2 - mass), E between the two nodes. */
+  readonly mass: Form;
 }
 
 /** What the instantons of a product of U(N) know of a theory. */
@@ -110,9 +110,13 @@ class TupleTerms {
     );
     return [
       ...this.data.nodes.flatMap((node, n) => this.nodeFactors(node, n, colours[n] ?? [])),
-      ...this.data.bifundamental.flatMap(({ from, to, masses }, k) => {
+      ...this.data.bifundamental.flatMap(({ from, to, mass }, k) => {
         const [one, other] = [colours[from] ?? [], colours[to] ?? []];
-        return [...this.between(one, other, `B ${k}`, masses.from), ...this.between(other, one, `C ${k}`, masses.to)];
+        // The two belong together: where e1 moves, so does the sum of their masses.
+        return [
+          ...this.between(one, other, `B ${k}`, { value: mass, slope: 0 }),
+          ...this.between(other, one, `C ${k}`, { value: this.total.sub(mass), slope: 1 }),
+        ];
       }),
     ];
   }
@@ -149,9 +153,14 @@ class TupleTerms {
   }
 
   /** E_ij(s) - mass for the boxes of the first colours. */
-  private between(from: readonly Colour[], to: readonly Colour[], name: string, mass: Form): RegulatedFactor[] {
+  private between(
+    from: readonly Colour[],
+    to: readonly Colour[],
+    name: string,
+    mass: { readonly value: Form; readonly slope: number },
+  ): RegulatedFactor[] {
     return [...this.energies(from, to)].map(({ key, energy, slope }) =>
-      this.factor(`${name} ${key}`, () => energy().sub(mass), slope, 1),
+      this.factor(`${name} ${key}`, () => energy().sub(mass.value), slope - mass.slope, 1),
     );
   }
 

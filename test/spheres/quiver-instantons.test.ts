@@ -8,7 +8,7 @@ import { s4 } from '../../engine/spheres/s4';
 import type { SeriesOrder } from '../../engine/spheres/sphere';
 import type { Theory } from '../../engine/theory/theory';
 import { theoryOf } from '../theory/theory-text';
-import { exact, type Point, valuesAt } from './evaluate';
+import { distance, exact, type Point, valuesAt } from './evaluate';
 import { row } from './fixture';
 
 const theory = (...lines: string[]) => theoryOf(lines, {}, s4);
@@ -77,6 +77,26 @@ describe('closed values', () => {
     const { sigma1, sigma2, p1, p2, r1, r2 } = point;
     const at = Object.fromEntries(Object.entries({ sigma1, sigma2, p1, p2, r1, r2 }).map(([k, v]) => [k, v ?? '0']));
     expect(exactly(of, 3, at)).toBe(row('quiver-U2-3').exact);
+  });
+
+  // Single diagrams diverge on the round sphere; the Virasoro algebra has nothing special there.
+  test.each([
+    [1, 1],
+    [2, 2],
+  ] as const)('U(2) x U(2) on the round sphere, orders %i and %i', (j, k) => {
+    const round = theoryOf(
+      ['gauge G = U(2)', 'gauge H = U(2), coulomb tau', 'flavor A = U(2), mass p', 'flavor B = U(1), mass m']
+        .concat('flavor C = U(2), mass r', 'matter G H A B C', 'hyper x anti 1 fund 0 1')
+        .concat('hyper y fund anti 1 1 1', 'hyper z 1 fund 1 0 fund'),
+      {},
+      s4,
+    );
+    const one = (text: string) => Form.i.mul(exact(text).sub(Form.one));
+    const at = {
+      ...point,
+      ...{ p1: one('13/42'), p2: one('1/42'), m: one('3/8'), r1: one('31/99'), r2: one('13/99') },
+    };
+    expect(exactly(round, [j, k], at)).toBe(row(`quiver-U2-U2-round-${j}${k}`).exact);
   });
 
   // What the note beside a value says of the U(1) factor: (M1 + M2)(M3 + M4)/2 with M1 + M2 = 2 Q - 2 m2, M3 + M4 = 2 m0.
@@ -179,6 +199,28 @@ describe('laws', () => {
       }),
       { numRuns: 8 },
     );
+  });
+
+  // Limits of single diagrams at b^2 = 2 in floating arithmetic.
+  test('exchanging b with 1/b changes nothing at irrational b', () => {
+    const of = theoryOf(
+      ['sphere S4, b = beta', 'gauge G = SU(2)', 'gauge H = SU(2), coulomb tau', 'flavor A = U(1)'].concat(
+        'matter G H A',
+        'hyper y fund fund 1',
+        'hyper x 2*fund 1 0',
+      ),
+      { beta: 'sqrt(2)' },
+      s4,
+    );
+    const at = { sigma: Form.call('sqrt', exact('2')).scale(Rational.of(1, 5)), tau: '1/3', m: '1/4' };
+    const value = (exchanged: boolean) => {
+      const sum = instantonCoefficient(of, 4, exchanged);
+      if (sum.kind === 'refused') throw new Error(sum.message);
+      const found = evaluateCoefficient(sum.terms, valuesAt(s4, of, at), 20);
+      if (found.kind !== 'value') throw new Error(found.kind);
+      return found.value;
+    };
+    expect(distance(value(true), value(false))).toBe(0);
   });
 
   test('one variable for all groups adds up', () => {
