@@ -25,12 +25,27 @@ export function readGroupLine(reader: TokenReader, word: Token): GroupLine | nul
   return { span: { from: word.from, to: reader.last.to }, role, name, group, options };
 }
 
-/** `U(2)`, `E8`: a name and, in parentheses, a whole number. Which groups there are is decided later. */
+/**
+ * `U(2)`, `E8`, `SU(4)/Z2`: a name and, in parentheses, a whole number, perhaps divided by a cyclic group. Which groups
+ * there are is decided later.
+ */
 export function readGroupWord(reader: TokenReader): Word | null {
   const name = reader.peek();
   if (!name) return reader.report('group-missing', reader.last);
+  if (name.text === '(') return reader.report('group-product', name);
   if (name.kind !== 'name') return reader.unexpected(name, 'a group such as `U(2)`');
   reader.next();
+  const whole = readCover(reader, name);
+  if (whole === null || !reader.take('/')) return whole;
+  const divisor = reader.peek();
+  if (!divisor || !/^Z_?[1-9]\d*$/.test(divisor.text)) {
+    return reader.report('group-divisor', divisor ?? reader.last, { group: whole.text, word: divisor?.text ?? '' });
+  }
+  reader.next();
+  return { text: `${whole.text}/${divisor.text}`, span: { from: name.from, to: divisor.to } };
+}
+
+function readCover(reader: TokenReader, name: Token): Word | null {
   if (!reader.take('(')) return { text: name.text, span: { from: name.from, to: name.to } };
   const rank = reader.peek();
   if (!rank || !/^\d+$/.test(rank.text)) {

@@ -79,6 +79,11 @@ const theories = {
   'group-named-r': () =>
     'No group can be called `R`: that column of the table holds the R-charges. Choose another name.',
   'group-missing': () => 'A group is missing here, such as `U(2)`, `SU(3)`, `USp(4)` or `E6`.',
+  'group-product': () =>
+    'Quotients of products, such as (SU(2) x U(1))/Z2, are not offered. Write U(n) where that is what is meant, or one ' +
+    'line for each simple group, with a quotient of its own as in `SU(4)/Z2`.',
+  'group-divisor': (d) =>
+    `After \`${d.group}/\` the name of a cyclic group is missing, as in \`SU(4)/Z2\`${d.word ? `; found \`${d.word}\`` : ''}.`,
   'group-rank': (d) =>
     `\`${d.group}(...)\` needs a whole number, as in \`${d.group}(2)\`${d.word ? `; found \`${d.word}\`` : ''}.`,
   'group-twice': (d) => `The group \`${d.name}\` is already there; give this one another name.`,

@@ -1,4 +1,5 @@
 import { Rational } from '../exact/rational';
+import { cellMeasure } from './cell-measure';
 import {
   type CoordinateBlock,
   dot,
@@ -13,6 +14,7 @@ import {
   type WeightMap,
   weightMap,
 } from './coordinates';
+import { type Quotient, quotientLattice, quotientNode } from './quotient';
 import { type Refusal, refusal } from './refusal';
 import { type RootSystem, rootSystemSum } from './root-system';
 import { MAXIMAL_RANK, type SimpleType } from './simple-type';
@@ -65,6 +67,8 @@ export interface Group {
   readonly quadraticForm: readonly (readonly Rational[])[];
   /** Basis of the cocharacter lattice in printed coordinates. */
   readonly cocharacters: readonly (readonly Rational[])[];
+  /** What was divided by a subgroup of the centre; null for a group written without one. */
+  readonly quotient: Quotient | null;
   /** The measure of unit cocharacter cells is unitMeasure times the product of d(independent coordinate). */
   readonly unitMeasure: Rational;
 }
@@ -77,7 +81,10 @@ export type GroupResult = { readonly kind: 'group'; readonly group: Group } | Re
 // Pure memoisation, keyed by the normalised name.
 const results = new Map<string, GroupResult>();
 
-/** Reads `U(2)`, `SU(3)`, `SO(5)`, `Spin(8)`, `USp(4)`, `G2`, .., `E8`; SO(2) is U(1) under another name. */
+/**
+ * Reads `U(2)`, `SU(3)`, `SO(5)`, `Spin(8)`, `USp(4)`, `G2`, .., `E8`; SO(2) is U(1) under another name. `SU(4)/Z2` is
+ * a quotient by a subgroup of the centre.
+ */
 export function parseGroup(text: string): GroupResult {
   const name = text.replace(/\s+/g, '');
   const known = results.get(name);
@@ -88,6 +95,11 @@ export function parseGroup(text: string): GroupResult {
 }
 
 function readGroup(name: string): GroupResult {
+  const divided = /^(.+)\/Z_?(\d{1,3})$/.exec(name);
+  if (divided) {
+    const cover = parseGroup(divided[1] as string);
+    return cover.kind === 'refusal' ? cover : makeQuotient(cover.group, Number(divided[2]));
+  }
   const exceptional = EXCEPTIONAL.find((candidate) => candidate === name);
   if (exceptional) return makeGroup(exceptional, null, exceptionalLayout(exceptional));
   const match = /^(U|SU|SO|Spin|USp|Sp|O)\((\d{1,6})\)$/.exec(name);
@@ -197,7 +209,23 @@ function makeGroup(family: Family, size: number | null, layout: Layout): GroupRe
     levelScale,
     quadraticForm: formMatrix(count, independent, dependent, levelScale),
     cocharacters,
-    unitMeasure: Rational.one.div(determinant(cocharacters.map((x) => independent.map((i) => x[i] as Rational))).abs()),
+    quotient: null,
+    unitMeasure: cellMeasure(cocharacters, independent),
+  };
+  return { kind: 'group', group };
+}
+
+function makeQuotient(cover: Group, order: number): GroupResult {
+  const node = quotientNode(cover, order);
+  if (typeof node !== 'number') return node;
+  const { cocharacters, levelDivisor } = quotientLattice(cover, node, order);
+  const group: Group = {
+    ...cover,
+    name: `${cover.name}/Z${order}`,
+    latex: `${cover.latex}/\\mathbb{Z}_{${order}}`,
+    cocharacters,
+    quotient: { cover: cover.name, order, levelDivisor },
+    unitMeasure: cellMeasure(cocharacters, cover.independent),
   };
   return { kind: 'group', group };
 }
@@ -227,28 +255,6 @@ function formMatrix(
   );
 }
 
-/** Determinant of a small rational matrix by elimination. */
-function determinant(matrix: readonly (readonly Rational[])[]): Rational {
-  const rows = matrix.map((row) => [...row]);
-  let result = Rational.one;
-  for (let k = 0; k < rows.length; k++) {
-    const pivotRow = rows.findIndex((row, i) => i >= k && !(row[k] as Rational).isZero());
-    if (pivotRow < 0) return Rational.zero;
-    if (pivotRow !== k) {
-      [rows[k], rows[pivotRow]] = [rows[pivotRow] as Rational[], rows[k] as Rational[]];
-      result = result.neg();
-    }
-    const top = rows[k] as Rational[];
-    const pivot = top[k] as Rational;
-    result = result.mul(pivot);
-    for (let i = k + 1; i < rows.length; i++) {
-      const factor = ((rows[i] as Rational[])[k] as Rational).div(pivot);
-      rows[i] = (rows[i] as Rational[]).map((entry, j) => entry.sub(factor.mul(top[j] as Rational)));
-    }
-  }
-  return result;
-}
-
 /** Dynkin labels of a linear function of the printed coordinates. */
 export function labelsOf(group: Group, vector: readonly Rational[]): Rational[] {
   return group.simpleCoroots.map((coroot) => dot(coroot, vector));
@@ -256,11 +262,15 @@ export function labelsOf(group: Group, vector: readonly Rational[]): Rational[] 
 
 /** Whether the global form of the group allows a highest weight: it must be integral on the cocharacter lattice. */
 export function allowsLabels(group: Group, labels: readonly number[]): boolean {
-  if (group.family !== 'SO') return true;
-  // All other families are simply connected, or U(n), whose weights are integers by construction.
+  // All others are simply connected, or U(n), whose weights are integers by construction.
+  if (group.family !== 'SO' && group.quotient === null) return true;
   const { denominator, rows } = group.weightMap;
-  return Array.from({ length: group.coordinateCount }, (_, i) => i).every((i) => {
-    const entry = labels.reduce((sum, label, k) => sum + label * ((rows[k] as readonly number[])[i] as number), 0);
-    return entry % denominator === 0;
-  });
+  const entries = Array.from({ length: group.coordinateCount }, (_, i) =>
+    labels.reduce((sum, label, k) => sum + label * ((rows[k] as readonly number[])[i] as number), 0),
+  );
+  return group.cocharacters.every((x) =>
+    x
+      .reduce((sum, value, i) => sum.add(value.mul(Rational.of(entries[i] as number, denominator))), Rational.zero)
+      .isInteger(),
+  );
 }

@@ -1,13 +1,14 @@
 import { Rational } from '../exact/rational';
 import { countWeights, dominantCharacter } from './character';
 import { evaluate } from './evaluate';
-import type { Group } from './group';
+import { allowsLabels, type Group } from './group';
 import { cubicAnomaly, dimension, dynkinIndices, realityOf } from './invariants';
 import { orbitShape, WeightOrbit, weightKey } from './orbit';
 import { type Refusal, refusal } from './refusal';
 import { parseExpression } from './representation-grammar';
 import { newBudget } from './tensor-product';
 import { collect, conjugateTerms, type Term, term } from './terms';
+import { notInGlobalForm } from './words';
 
 /** Distinct weights a representation may have where its weights are to be listed. */
 export const WEIGHT_LIMIT = 300_000;
@@ -177,7 +178,10 @@ export function parseRepresentation(group: Group, text: string, weightLimit = WE
 function read(group: Group, text: string, weightLimit: number): RepresentationResult {
   const parsed = parseExpression(text, group.isAbelian);
   if (parsed.kind === 'refusal') return parsed;
-  const terms = evaluate(group, parsed.expression, newBudget());
+  const found = evaluate(group, parsed.expression, newBudget());
+  // Parts of a product may be representations of the cover only; the whole has to be one of the group.
+  const refused = 'kind' in found ? undefined : found.find(({ labels }) => !allowsLabels(group, labels));
+  const terms = refused === undefined ? found : notInGlobalForm(group, text);
   if ('kind' in terms) return terms;
   const representation = new Representation(group, collect(terms));
   if (weightLimit < Number.POSITIVE_INFINITY && !representation.hasWeightsWithin(weightLimit)) {

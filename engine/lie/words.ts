@@ -137,6 +137,11 @@ function spinor(group: Group, word: 'spinor' | 'cospinor'): readonly Term[] | Re
 
 export function notInGlobalForm(group: Group, name: string): Refusal {
   const what = `'${name}' is not a representation of ${group.name}.`;
+  if (group.quotient !== null) {
+    const { order, cover } = group.quotient;
+    const reason = `The subgroup Z${order} of the centre of ${cover} acts on it.`;
+    return refusal('global-form', what, reason, `Take ${cover} instead, or a representation such as adj.`);
+  }
   const why = 'It changes sign under a full rotation, so that only the simply connected cover represents it.';
   return refusal('global-form', what, why, `Take the group Spin(${group.size}) instead.`);
 }

@@ -82,7 +82,7 @@ function offLattice(theory: Theory, settable: Settable, set: ReadonlyMap<string,
     if (values.every((value) => value !== null) && isCocharacter(group.group, values)) continue;
     const given = own.map((name) => `\`${name} = ${set.get(name)?.key}\``).join(', ');
     const broken = own.find((name) => !set.get(name)?.toRational()?.isInteger());
-    if (broken !== undefined && INTEGRAL.includes(group.group.family)) {
+    if (broken !== undefined && group.group.quotient === null && INTEGRAL.includes(group.group.family)) {
       return `The flux \`${broken}\` has to be an integer; \`${set.get(broken)?.key}\` is none.`;
     }
     return `${given} is no flux of ${group.group.name}: a weight of one of its representations would not be an integer on it.`;

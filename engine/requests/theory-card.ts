@@ -72,7 +72,9 @@ function column({ name, span }: Name, block: TheoryBlock, groups: readonly Theor
   if (!group) return { ...place, latex: symbolLatex(name), role: 'flavor', group: null };
   const levels = [group.level, group.abelianLevel].filter((level) => level !== null).map(formLatex);
   const subscript = levels.length === 0 ? '' : `_{${levels.join(',')}}`;
-  return { ...place, latex: group.group.latex + subscript, role: group.role, group: group.group.name };
+  const { latex, name: full, quotient } = group.group;
+  const base = quotient !== null && subscript !== '' ? `\\left(${latex}\\right)` : latex;
+  return { ...place, latex: base + subscript, role: group.role, group: full };
 }
 
 function tableRow(text: string, row: MultipletRow, read: ReadRow | undefined): TheoryRow {

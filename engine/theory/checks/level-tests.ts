@@ -31,7 +31,7 @@ export function levelTests(theory: Theory, index: number): readonly LevelTest[] 
     return [threeTest(theory, index, group.family === 'SO')];
   }
   if (group.simple.length === 2) return fourTests(theory, index, group.family === 'SO');
-  return [simpleTest(theory, index, 0, '')];
+  return [simpleTest(theory, index, 0, ''), ...quotientTest(theory, index)];
 }
 
 /** U(1): cocharacter 1. */
@@ -82,6 +82,28 @@ function traceTest(theory: Theory, index: number): LevelTest[] {
       general: `${pure}+\\frac{1}{2}\\sum\\left(\\frac{c^2\\dim R}{${n.mul(n)}}-\\frac{I_2}{${n}}\\right)`,
       pure,
       level: { symbol: "k'", value: own, slope: Rational.one.div(n) },
+    },
+  ];
+}
+
+/**
+ * A quotient adds a cocharacter x: with one simple part K_eff = k_eff (., .), so that k_eff (x, y) has to be an integer
+ * for all cocharacters y, too. With k_eff an integer that means that their common denominator M divides it.
+ */
+function quotientTest(theory: Theory, index: number): LevelTest[] {
+  const { group } = theory.groups[index] as TheoryGroup;
+  const denominator = group.quotient?.levelDivisor ?? 1n;
+  if (group.quotient === null || denominator === 1n) return [];
+  const share = Rational.of(1, denominator);
+  const { bare, matter, level, general, pure } = simpleTest(theory, index, 0, '');
+  return [
+    {
+      part: `quotient by Z${group.quotient.order}`,
+      bare: bare.mul(share),
+      matter: matter.mul(share),
+      general: `\\frac{1}{${denominator}}\\left(${general}\\right)`,
+      pure: `\\frac{1}{${denominator}}${pure}`,
+      level: level && { ...level, slope: share },
     },
   ];
 }
