@@ -99,13 +99,18 @@ function sinCosOfRest(y: bigint, working: number, tables: TrigonometricTables): 
   return { cos: c, sin: (y * s) >> shift };
 }
 
-/** sin and cos of x with `working` fraction bits (from workingBits); error below 40 working ulps. */
+/**
+ * sin and cos of x with `working` fraction bits (from workingBits); error below 40 working ulps. As complex numbers of modulus
+ * 1: table entries sqrt 2 each, the rest 8 sqrt 2 at most, three rotations sqrt 2 each for their cuts, which adds up to 20;
+ * the reduced argument 1 for its cut and less than 1 for pi/2.
+ */
 export function sinCosWorking(x: bigint, working: number): SinCos {
   // pi/2 with as many more bits as the quotient has, so that the multiple subtracted is right to one working ulp.
-  const extra = Math.max(16, bitLength(x) - working + 8);
+  const rough = numberFromFixed(x, working);
+  const extra = Math.abs(rough) < 100 ? 16 : Math.max(16, bitLength(x) - working + 8);
   const halfPi = piFixed(working + extra + 1) >> 2n;
   const wide = x << BigInt(extra);
-  const close = Math.round(numberFromFixed(x, working) * (2 / Math.PI));
+  const close = Math.round(rough * (2 / Math.PI));
   const quotient = Math.abs(close) < 2 ** 20 ? BigInt(close) : floorDivide(2n * wide + halfPi, 2n * halfPi);
   const r = (wide - quotient * halfPi) >> BigInt(extra);
   const { cos, sin } = sinCosReduced(absolute(r), working);

@@ -75,7 +75,11 @@ export function planPowers(y: bigint, block: number, bits: number): bigint[] {
   return powers;
 }
 
-/** Value of the plan at y (0 <= y < 2^-12) given its powers; error below 6 ulps (every term but two carries a factor <= y). */
+/**
+ * Value of the plan at y (0 <= y < 2^-12) given its powers; error below 6 ulps: y^k, k >= 2, errs by less than 2 and enters with
+ * 1/(r_1 ... r_k) <= 1/2, 1/6, ... (below 2 in all); the last division 1; what earlier divisions and steps cut carries a later
+ * division or a factor y^block (below 1).
+ */
 export function sumPlan(plan: SeriesPlan, powers: readonly bigint[], bits: number): bigint {
   const { block, steps } = plan;
   const shift = BigInt(bits);
