@@ -14,6 +14,9 @@ export const theoryWording = {
     `\`${d.name} = ${d.value}\` is negative: the squashing has to be a positive number, such as \`${d.name} = 5/4\`.`,
   'squashing-complex': (d) =>
     `\`${d.name} = ${d.value}\` is complex: the squashing has to be a positive number, such as \`${d.name} = 5/4\`.`,
+  'squashing-half-plane': (d) =>
+    `\`${d.name} = ${d.value}\` does not have a positive real part: the squashing may be complex, such as ` +
+    `\`${d.name} = 5/4 + i/3\`, where it has one.`,
   'squashing-extreme': (d) =>
     `\`${d.name} = ${d.value}\` is out of reach: the squashing has to lie between 1/100 and 100.`,
   supersymmetry: (d) => `${d.sphere} takes \`supersymmetry ${d.allowed}\`; \`${d.value}\` is not known here.`,

@@ -26,7 +26,7 @@ const half = Form.ratio(1, 2);
 export const s3: Sphere = {
   name: 'S3',
   multiplets: ['chiral', 'hyper', 'halfhyper'],
-  squashing: [{ name: 'b', symbol: '@b', round: Form.one }],
+  squashing: [{ name: 'b', symbol: '@b', round: Form.one, mayBeComplex: false }],
   options: { gauge: ['coulomb', 'level', 'abelian', 'fi'], flavor: ['mass', 'level', 'abelian'] },
   refusals: {
     theta: 'there is no theta angle in three dimensions; a level takes its place',

@@ -32,7 +32,7 @@ const upsilon: RoundFunction = {
 export const s4: Sphere = {
   name: 'S4',
   multiplets: ['hyper', 'halfhyper'],
-  squashing: [{ name: 'b', symbol: '@b', round: Form.one }],
+  squashing: [{ name: 'b', symbol: '@b', round: Form.one, mayBeComplex: true }],
   options: { gauge: ['coulomb', 'coupling'], flavor: ['mass'] },
   refusals: {
     mixed: 'there is no Chern-Simons term in four dimensions',

@@ -33,7 +33,7 @@ const tripleSine: RoundFunction = {
 export const s5: Sphere = {
   name: 'S5',
   multiplets: ['hyper', 'halfhyper'],
-  squashing: [1, 2, 3].map((k) => ({ name: `w${k}`, symbol: `@w${k}`, round: Form.one })),
+  squashing: [1, 2, 3].map((k) => ({ name: `w${k}`, symbol: `@w${k}`, round: Form.one, mayBeComplex: true })),
   options: { gauge: ['coulomb', 'level', 'coupling'], flavor: ['mass'] },
   refusals: {
     mixed: 'mixed cubic levels are not offered',

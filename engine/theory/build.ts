@@ -81,8 +81,8 @@ function buildGeometry(
     }
     const value = valueAt(option.value, parameters, report);
     if (value === null) continue;
-    const sign = signOf(value);
-    if (sign !== 'positive') {
+    const sign = signOf(value, known.mayBeComplex);
+    if (sign !== null) {
       report(problem(`squashing-${sign}`, option.value.span, { name: known.name, value: option.value.text }));
       continue;
     }
@@ -92,13 +92,17 @@ function buildGeometry(
   return { values, round };
 }
 
-function signOf(value: Form): 'positive' | 'negative' | 'zero' | 'complex' | 'extreme' {
+/** What is wrong with a squashing; null where nothing is. */
+function signOf(value: Form, mayBeComplex: boolean): 'negative' | 'zero' | 'complex' | 'half-plane' | 'extreme' | null {
   const numeric = approximate(value);
   if (numeric === null || !Number.isFinite(numeric.re) || !Number.isFinite(numeric.im)) return 'extreme';
-  if (Math.abs(numeric.im) > 1e-12 * Math.abs(numeric.re)) return 'complex';
-  if (numeric.re === 0) return 'zero';
-  if (numeric.re < 0) return 'negative';
-  return numeric.re < MINIMAL_SQUASHING || numeric.re > 1 / MINIMAL_SQUASHING ? 'extreme' : 'positive';
+  const size = Math.hypot(numeric.re, numeric.im);
+  if (size === 0) return 'zero';
+  if (Math.abs(numeric.im) > 1e-12 * Math.abs(numeric.re)) {
+    if (!mayBeComplex) return 'complex';
+    if (numeric.re <= 1e-12 * size) return 'half-plane';
+  } else if (numeric.re < 0) return 'negative';
+  return size < MINIMAL_SQUASHING || size > 1 / MINIMAL_SQUASHING ? 'extreme' : null;
 }
 
 /** Beyond this the two periods of the double sine differ by more than 10^4 and no table of it fits. */

@@ -1,6 +1,17 @@
 import type { Form } from '../exact/form';
 import type { GroupOption, MultipletKind, SphereName } from '../language/tree';
 
+/** One squashing parameter. */
+export interface Squashing {
+  /** As typed. */
+  readonly name: string;
+  /** Geometry symbol. */
+  readonly symbol: string;
+  /** Value on the round sphere. */
+  readonly round: Form;
+  readonly mayBeComplex: boolean;
+}
+
 /**
  * What may be written in a theory on a given sphere. Each sphere's file supplies its own; reading a theory asks these
  * rules and never which sphere it is.
@@ -8,8 +19,8 @@ import type { GroupOption, MultipletKind, SphereName } from '../language/tree';
 export interface SphereRules {
   readonly name: SphereName;
   readonly multiplets: readonly MultipletKind[];
-  /** Squashing parameters: name as typed, geometry symbol, value on the round sphere. All have to be positive. */
-  readonly squashing: readonly { readonly name: string; readonly symbol: string; readonly round: Form }[];
+  /** Squashing parameters: all have to be positive, or, where they may be complex, have a positive real part. */
+  readonly squashing: readonly Squashing[];
   readonly options: {
     readonly gauge: readonly GroupOption['kind'][];
     readonly flavor: readonly GroupOption['kind'][];

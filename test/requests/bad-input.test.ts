@@ -90,12 +90,17 @@ describe('multiplets that a sphere does not take', () => {
 });
 
 describe('squashings', () => {
+  const halfPlane = (name: string) =>
+    `the squashing may be complex, such as \`${name} = 5/4 + i/3\`, where it has one.`;
   const advice = (name: string) => `the squashing has to be a positive number, such as \`${name} = 5/4\`.`;
 
   test.each([
     ['S5, w1 = 0', `2:19 error: \`w1\` is zero: ${advice('w1')}`],
     ['S5, w2 = -1/2', `2:19 error: \`w2 = -1/2\` is negative: ${advice('w2')}`],
-    ['S5, w3 = 2i', `2:19 error: \`w3 = 2i\` is complex: ${advice('w3')}`],
+    ['S5, w3 = 2i', `2:19 error: \`w3 = 2i\` does not have a positive real part: ${halfPlane('w3')}`],
+    ['S5, w1 = -1 + i', `2:19 error: \`w1 = -1 + i\` does not have a positive real part: ${halfPlane('w1')}`],
+    ['S4, b = i', `2:18 error: \`b = i\` does not have a positive real part: ${halfPlane('b')}`],
+    ['S3, b = 1 + i', `2:18 error: \`b = 1 + i\` is complex: ${advice('b')}`],
     [
       'S5, w1 = 1, w2 = 1/1000',
       '2:27 error: `w2 = 1/1000` is out of reach: the squashing has to lie between 1/100 and 100.',
