@@ -1,3 +1,4 @@
+import { add, type DoubleComplex, multiply, scale } from '../arithmetic/double-complex';
 import { memoiseBounded } from '../arithmetic/memo';
 import { evenBernoulliNumbers } from './bernoulli';
 
@@ -13,6 +14,28 @@ export function oddKernelSeries(periods: readonly number[], count: number): read
     product = product.map((_, m) => {
       let sum = 0;
       for (let k = 0; k <= m; k++) sum += (product[k] as number) * (scaled[m - k] as number);
+      return sum;
+    });
+  }
+  return product;
+}
+
+/** The same for complex periods. */
+export function oddComplexKernelSeries(periods: readonly DoubleComplex[], count: number): readonly DoubleComplex[] {
+  const single = inverseSinhSeries(count);
+  let product: readonly DoubleComplex[] = single.map((_, k) => ({ re: k === 0 ? 1 : 0, im: 0 }));
+  for (const period of periods) {
+    const square = multiply(period, period);
+    const scaled: DoubleComplex[] = [];
+    let power: DoubleComplex = { re: 1, im: 0 };
+    for (const value of single) {
+      scaled.push(scale(power, value));
+      power = multiply(power, square);
+    }
+    product = product.map((_, m) => {
+      let sum: DoubleComplex = { re: 0, im: 0 };
+      for (let k = 0; k <= m; k++)
+        sum = add(sum, multiply(product[k] as DoubleComplex, scaled[m - k] as DoubleComplex));
       return sum;
     });
   }

@@ -152,6 +152,8 @@ export interface SpecialFunction {
   readonly additive?: (sum: Form) => Form;
   /** Why there is no value at an exactly known argument, in words; null where there is one. Absent: there always is. */
   readonly outside?: (argument: Form) => string | null;
+  /** Why there is no function at these parameters, in words. Absent: every parameter needs a positive real part. */
+  readonly outsideParameters?: (parameters: readonly Complex[]) => string | null;
   /** Powers of closed forms that can be taken out: f(x) = f(rest) times the product of base^exponent. */
   readonly powers?: (argument: Form) => {
     readonly rest: Form;

@@ -1,11 +1,11 @@
 import { Form } from '../exact/form';
 import { CLOSED_FORM_BITS, tripleSineSecondRoute } from './barnes-routes';
 import { indexSum, pairOfModes, parenthesised, periodText, plus, realFirst } from './notation';
-import { outsideDomain } from './outside-domain';
 import type { FunctionAt, Printer, SpecialFunction } from './special-function';
 import { logTripleSineRound } from './triple-sine-closed';
+import { complexTripleSineKernel } from './triple-sine-complex-double';
 import { tripleSineKernel } from './triple-sine-double';
-import { logTripleSineByLattice } from './triple-sine-lattice';
+import { logTripleSineByLattice, NO_HALF_PLANE, turnToTheRight } from './triple-sine-lattice';
 import { logTripleSine } from './triple-sine-precise';
 
 const HALF = Form.ratio(1, 2);
@@ -60,8 +60,9 @@ export const tripleSine: SpecialFunction = {
   elementary: false,
   double: (w) => {
     const [w1, w2, w3] = w.map(({ re, im }) => (im === 0 && re > 0 && Number.isFinite(re) ? re : null));
-    return w1 && w2 && w3 ? tripleSineKernel(w1, w2, w3) : outsideDomain;
+    return w1 && w2 && w3 ? tripleSineKernel(w1, w2, w3) : complexTripleSineKernel(w);
   },
+  outsideParameters: (w) => (turnToTheRight(w) === null ? NO_HALF_PLANE : null),
   precise: (x, w, bits) => {
     if (!w.every(({ approx }) => approx.im === 0 && approx.re > 0)) return logTripleSineByLattice(x, w, bits);
     return (bits > CLOSED_FORM_BITS ? logTripleSineRound(x, w, bits) : null) ?? logTripleSine(x, w, bits);

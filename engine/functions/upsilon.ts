@@ -3,7 +3,8 @@ import { Form } from '../exact/form';
 import { upsilonSecondRoute } from './barnes-routes';
 import { asFactor, indexSum, pairOfModes, parenthesised, periodText, realFirst } from './notation';
 import { outsideDomain } from './outside-domain';
-import type { ExactParameter, FunctionAt, Printer, SpecialFunction } from './special-function';
+import type { Complex, DoubleKernel, ExactParameter, FunctionAt, Printer, SpecialFunction } from './special-function';
+import { complexUpsilonKernel } from './upsilon-complex-double';
 import { upsilonConstant, upsilonKernel } from './upsilon-double';
 import { logUpsilon } from './upsilon-precise';
 
@@ -14,7 +15,8 @@ const HALF = Form.ratio(1, 2);
  *   log Upsilon_b(x) = int_0^oo dt/t [(Q/2 - x)^2 e^{-2t} - sinh^2((Q/2 - x) t)/(sinh bt sinh t/b)],  0 < Re x < Q.
  * Zeros at -(m b + n/b) and Q + m b + n/b; Upsilon_b(Q - x) = Upsilon_b(x) = Upsilon_{1/b}(x);
  * Upsilon_b(x + b) = gamma(bx) b^{1-2bx} Upsilon_b(x), gamma(u) = Gamma(u)/Gamma(1 - u). The zeta-regularised product of
- * (m b + n/b + x)(m b + n/b + Q - x) is Upsilon_b(x) times its value at Q/2, a constant. Parameter: b > 0.
+ * (m b + n/b + x)(m b + n/b + Q - x) is Upsilon_b(x) times its value at Q/2, a constant. Parameter: b > 0, or
+ * complex b with Re b > 0.
  */
 export const upsilon: SpecialFunction = {
   name: 'upsilon',
@@ -88,7 +90,7 @@ export const upsilon: SpecialFunction = {
     )}`;
   },
   elementary: false,
-  double: ([b]) => (b?.im === 0 && b.re > 0 && Number.isFinite(b.re) ? upsilonKernel(b.re) : outsideDomain),
+  double: ([b]) => doubleKernel(b as Complex),
   precise: (x: FixedComplex, [b], bits) => logUpsilon(x, b as ExactParameter, bits),
   crossCheck: (x, [b], bits) => upsilonSecondRoute(x, b as ExactParameter, bits),
   sources: [
@@ -97,6 +99,11 @@ export const upsilon: SpecialFunction = {
     { key: 'Hama-Hosomichi-2012', text: 'N. Hama, K. Hosomichi, arXiv:1206.6359 (2012)' },
   ],
 };
+
+function doubleKernel(b: Complex): DoubleKernel {
+  if (!(b.re > 0) || !Number.isFinite(b.re) || !Number.isFinite(b.im)) return outsideDomain;
+  return b.im === 0 ? upsilonKernel(b.re) : complexUpsilonKernel(b);
+}
 
 /** Upsilon(x + p)/Upsilon(x) = Gamma(px)/Gamma(1 - px) p^{1 - 2px}. */
 function quotient(x: Form, period: Form, logarithm: Form): FunctionAt[] {

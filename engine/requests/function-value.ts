@@ -1,6 +1,7 @@
 import { formatBall } from '../arithmetic/decimal-text';
 import { formDouble } from '../arithmetic/form-double';
 import type { Form } from '../exact/form';
+import type { SpecialFunction } from '../functions/special-function';
 import { functions } from '../functions/table';
 import type { Quantity } from '../language/tree';
 import { evaluatePrecise } from '../numeric/precise';
@@ -27,7 +28,11 @@ export function functionProduct(
   }
   const [argument, ...parameters] = quantity.arguments.map(({ form }) => form.substitute(values));
   if (!argument) return `\`${word}\` needs an argument.`;
-  const outside = parameters.findIndex((form) => !positive(form));
+  if (declared.outsideParameters) {
+    const says = outsideWords(declared, parameters);
+    if (says !== null) return `\`${word}\` is not defined here: ${says}.`;
+  }
+  const outside = declared.outsideParameters ? -1 : parameters.findIndex((form) => !positive(form));
   if (outside >= 0) {
     const typed = quantity.arguments[outside + 1]?.text ?? '';
     return `\`${word}\` is defined for \`${declared.parameters[outside]}\` with positive real part; \`${typed}\` has none.`;
@@ -39,6 +44,12 @@ export function functionProduct(
 function positive(form: Form): boolean {
   const value = formDouble(form, () => null);
   return value === null || (value.re > 0 && Number.isFinite(value.re));
+}
+
+/** What the function says of its parameters; those with free names pass. */
+function outsideWords({ outsideParameters }: SpecialFunction, parameters: readonly Form[]): string | null {
+  const values = parameters.flatMap((form) => formDouble(form, () => null) ?? []);
+  return values.length < parameters.length ? null : (outsideParameters?.(values) ?? null);
 }
 
 /** `value doublesine(0.3 + 0.2i, 5/4), 50 digits`. */
