@@ -71,7 +71,9 @@ test('groups are added and changed', async ({ page }) => {
   await notebook.openText(text);
   const theory = notebook.theory('gauge2');
   await theory.word('+ flavor group').click();
-  await expect.poll(() => notebook.text()).toBe(`# Table
+  await expect
+    .poll(() => notebook.text())
+    .toBe(`# Table
 
 theory gauge2
   sphere  S3
