@@ -6,6 +6,7 @@ import { printer } from '../latex/product';
 import { representationLatex } from '../latex/representation';
 import { symbolLatex } from '../latex/symbol';
 import type { Sphere } from '../spheres/sphere';
+import { wallOrder } from '../spheres/wall-order';
 import type { ReadRow } from '../theory/build';
 import type { Condition, Finding } from '../theory/checks/condition';
 import type { Theory, TheoryGroup } from '../theory/theory';
@@ -118,7 +119,7 @@ function indentOf(text: string, block: TheoryBlock): string {
 function checks(entry: TheoryEntry | undefined): Check[] {
   const theory = entry?.built?.theory;
   if (!theory || !entry?.sphere) return [];
-  return entry.sphere.conditions.flatMap((condition) =>
+  return [...entry.sphere.conditions, wallOrder(entry.sphere)].flatMap((condition) =>
     examine(condition, theory).map(({ verdict, says, formula, source, detail }) => ({
       id: detail === undefined ? condition.id : `${condition.id}:${detail}`,
       verdict,
