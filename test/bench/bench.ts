@@ -65,13 +65,13 @@ function main(): void {
   );
 }
 
-/** `npm run bench -- accuracy [points]`. */
+/** `npm run bench -- accuracy [points] [beginning of a name]`. */
 function statedErrors(): void {
-  const points = Number(process.argv[process.argv.indexOf('accuracy') + 1] ?? '20000');
+  const [points = '20000', only] = process.argv.slice(process.argv.indexOf('accuracy') + 1);
   heading('Largest error over the error stated');
-  for (const { name, bits, held, refused, ratio, at } of accuracy(points)) {
+  for (const { name, tier, held, refused, ratio, at } of accuracy(Number(points), only)) {
     const counts = `${held} points${refused > 0 ? `, ${refused} refused` : ''}`;
-    process.stdout.write(`  ${name.padEnd(20)} ${bits} bits  ${counts}  ${ratio.toPrecision(3)} at ${at}\n`);
+    process.stdout.write(`  ${name.padEnd(32)} ${tier.padEnd(8)}  ${counts}  ${ratio.toPrecision(3)} at ${at}\n`);
   }
 }
 

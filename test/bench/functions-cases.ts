@@ -42,6 +42,33 @@ const ROOT: ExactParameter = {
   approx: { re: Math.SQRT2, im: 0 },
 };
 
+/**
+ * mpmath's side: defining integrals by quad, moved off the poles at 0 so that nothing cancels; Upsilon from its own integral.
+ * log s_b(x) = -log s_b(-x) brings Re x below 0.
+ */
+export const PRELUDE = `
+import mpmath as mp
+def double_sine(x, b):
+    i, a = mp.mpc(0, 1), mp.pi * min(b, 1 / b) / 2
+    def integrand(u):
+        w = mp.mpc(u, a)
+        return mp.exp(2 * i * x * w) / (4 * w * mp.sinh(b * w) * mp.sinh(w / b))
+    return i * mp.pi * x ** 2 / 2 + i * mp.pi * (b ** 2 + b ** -2) / 24 - mp.quad(integrand, [-mp.inf, 0, mp.inf])
+def upsilon(z, b):
+    mp.mp.prec += 60
+    f = lambda t: (z ** 2 * mp.exp(-2 * t) - mp.sinh(z * t) ** 2 / (mp.sinh(b * t) * mp.sinh(t / b))) / t
+    v = mp.quad(f, [0, 1, 4, 16, mp.inf])
+    mp.mp.prec -= 60
+    return v
+def triple_sine(z, w):
+    a = mp.pi / max(w) / 2
+    def integrand(u):
+        t = mp.mpc(u, a)
+        return mp.exp(2 * z * t) / (8 * t * mp.sinh(w[0] * t) * mp.sinh(w[1] * t) * mp.sinh(w[2] * t))
+    cubic = (z ** 3 - sum(v * v for v in w) * z / 4) / (w[0] * w[1] * w[2])
+    return -mp.mpc(0, 1) * mp.pi * cubic / 6 - mp.quad(integrand, [-mp.inf, -4, 0, 4, mp.inf])
+`;
+
 /** A function to any number of digits, and the same elsewhere. */
 export interface PreciseCase {
   readonly name: string;
@@ -248,30 +275,3 @@ export const ARRAYS: readonly ArrayCase[] = [
     im: (k) => -3 + (6 * (k + 1)) / ARRAY,
   },
 ];
-
-/**
- * mpmath's side: defining integrals by quad, moved off the poles at 0 so that nothing cancels; Upsilon from its own integral.
- * log s_b(x) = -log s_b(-x) brings Re x below 0.
- */
-export const PRELUDE = `
-import mpmath as mp
-def double_sine(x, b):
-    i, a = mp.mpc(0, 1), mp.pi * min(b, 1 / b) / 2
-    def integrand(u):
-        w = mp.mpc(u, a)
-        return mp.exp(2 * i * x * w) / (4 * w * mp.sinh(b * w) * mp.sinh(w / b))
-    return i * mp.pi * x ** 2 / 2 + i * mp.pi * (b ** 2 + b ** -2) / 24 - mp.quad(integrand, [-mp.inf, 0, mp.inf])
-def upsilon(z, b):
-    mp.mp.prec += 60
-    f = lambda t: (z ** 2 * mp.exp(-2 * t) - mp.sinh(z * t) ** 2 / (mp.sinh(b * t) * mp.sinh(t / b))) / t
-    v = mp.quad(f, [0, 1, 4, 16, mp.inf])
-    mp.mp.prec -= 60
-    return v
-def triple_sine(z, w):
-    a = mp.pi / max(w) / 2
-    def integrand(u):
-        t = mp.mpc(u, a)
-        return mp.exp(2 * z * t) / (8 * t * mp.sinh(w[0] * t) * mp.sinh(w[1] * t) * mp.sinh(w[2] * t))
-    cubic = (z ** 3 - sum(v * v for v in w) * z / 4) / (w[0] * w[1] * w[2])
-    return -mp.mpc(0, 1) * mp.pi * cubic / 6 - mp.quad(integrand, [-mp.inf, -4, 0, 4, mp.inf])
-`;
