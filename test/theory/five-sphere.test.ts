@@ -104,6 +104,20 @@ describe('convergence', () => {
     expect(verdict(cubicConvergence, theory(`gauge G = ${group}`, ...hypers(cell)))).toBe(expected);
   });
 
+  // Tried on the integrand itself: test/spheres/complex-periods.test.ts.
+  test.each([
+    ['1', '2*fund', 'holds'],
+    ['1 + i/2', '2*fund', 'holds'],
+    ['1 + i', '2*fund', 'fails'],
+    ['1 + i', '8*fund', 'unknown'],
+    ['1 + i', '9*fund', 'unknown'],
+  ])('three periods %s, %s', (period, cell, expected) => {
+    const sphere = `sphere S5, w1 = ${period}, w2 = ${period}, w3 = ${period}`;
+    const of = theory(sphere, 'gauge G = SU(2)', ...hypers(cell));
+    expect(verdict(cubicConvergence, of)).toBe(expected);
+    if (expected === 'fails') expect(says(cubicConvergence, of)[0]).toContain('diverges where $F>0$');
+  });
+
   test('the prepotential is named', () => {
     expect(says(cubicConvergence, theory('gauge G = SU(2)', ...hypers('2*fund')))).toEqual([
       'holds: The perturbative integral converges; it falls slowest along $\\sigma=r$, as $e^{-2\\pi F r^3}$ with $F=1$.',

@@ -1,3 +1,5 @@
+import { formDouble } from '../../arithmetic/form-double';
+import { Form } from '../../exact/form';
 import { Rational } from '../../exact/rational';
 import type { Printer } from '../../functions/special-function';
 import type { Theory } from '../theory';
@@ -54,7 +56,7 @@ export const convexity: Condition = {
 
 /**
  * Convergence of the perturbative integral on the five-sphere: the integrand falls as
- * exp(-2 pi F(n) r^3/(w1 w2 w3)), and as the Gaussian of the coupling where F vanishes.
+ * exp(-2 pi F(n) r^3/(w1 w2 w3)), w1 w2 w3 with a positive real part, and as the Gaussian of the coupling where F vanishes.
  */
 export const cubicConvergence: Condition = {
   id: 'convergence',
@@ -80,6 +82,18 @@ function convergenceFinding(theory: Theory, branch: CoulombBranch, print: Printe
     source: `${SOURCE}; J. Källén, J. Qiu, M. Zabzine, arXiv:1206.6008 (2012)`,
   };
   const say = (verdict: Finding['verdict'], says: string): Finding => ({ ...common, verdict, says });
+  if (!(fallOff(theory) > 0)) {
+    const volume = '\\operatorname{Re}\\frac{1}{\\omega_1\\omega_2\\omega_3}\\leq0';
+    return rays.some(({ value: along }) => along > TOLERANCE)
+      ? say(
+          'fails',
+          `At these periods $${volume}$: over real Coulomb parameters the perturbative integral diverges where $F>0$; the contour would have to be turned.`,
+        )
+      : say(
+          'unknown',
+          `At these periods $${volume}$; what this makes of the perturbative integral was not worked out.`,
+        );
+  }
   if (lowest.value < -TOLERANCE) {
     return say('fails', `The perturbative integral diverges along ${where}, where the cubic prepotential is ${value}.`);
   }
@@ -106,6 +120,12 @@ function convergenceFinding(theory: Theory, branch: CoulombBranch, print: Printe
     'holds',
     `The perturbative integral converges; it falls slowest along ${where}, as $e^{-2\\pi F r^3${volume}}$ with ${value}.`,
   );
+}
+
+/** Re 1/(w1 w2 w3), with which the prepotential enters the exponent: growth of S_3, A. Narukawa, math/0306164. */
+function fallOff({ geometry }: Theory): number {
+  const volume = [...geometry.values()].reduce((product, period) => product.mul(period), Form.one);
+  return formDouble(volume, () => null)?.re ?? Number.NaN;
 }
 
 function prepotentialLatex(value: number): string {
