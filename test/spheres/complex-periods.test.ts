@@ -100,10 +100,10 @@ test.each(['1', '1 + i/2', '1 + i'])('the integrand falls off as the prepotentia
   const turn = { '1': 1, '1 + i/2': 1 - 3 / 4, '1 + i': -2 }[w] ?? Number.NaN;
   const size = { '1': 1, '1 + i/2': 1.25 ** 3, '1 + i': 8 }[w] ?? Number.NaN;
   const wanted = (((-2 * Math.PI * 5) / 6) * turn) / size;
-  // Third difference of the logarithm, over 6 h^3.
+  // Third difference of the logarithm, over 6 h^3; what is left out is e^{-2 pi sigma Re 1/w}, 4e-6 at its largest.
   const h = 1;
   const third = (tall('7') - 3 * tall('6') + 3 * tall('5') - tall('4')) / (6 * h ** 3);
-  expect(third / wanted).toBeCloseTo(1, 6);
+  expect(third / wanted).toBeCloseTo(1, 4);
 });
 
 test('special masses at complex periods', () => {
