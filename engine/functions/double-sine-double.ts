@@ -22,7 +22,7 @@ import type { DoubleKernel } from './special-function';
  * Method: |Re x| > Q/4 by the residue series; else shifts by the periods to |Im x| <= Q/4 and the midpoint rule with
  * the residues of the nearest poles (`DoubleSineTables`). Everything is reduced to Re x >= 0, Im x >= 0 by
  * log s_b(-x) = -log s_b(x) and log s_b(-conj x) = conj log s_b(x).
- * Error: a few 1e-15 of max(1, |log s_b|, |x d log s_b/dx|), the last being what one rounding of x does near poles and
+ * Error: below 4e-15 of max(1, |log s_b|, |x d log s_b/dx|), the last being what one rounding of x does near poles and
  * zeros; measured against mpmath (test/fixtures/functions/double-sine.py) for b from 0.02 to 50.
  */
 export function doubleSineKernel(b: number): DoubleKernel {

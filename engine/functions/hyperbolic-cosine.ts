@@ -50,6 +50,7 @@ export const hyperbolicCosine: SpecialFunction = {
   ],
   modes: null,
   elementary: true,
+  doubleError: () => 1e-15,
   double: () => hyperbolicKernel(0.5),
   precise: (argument, _parameters, bits) => logTwoCosh(argument, bits),
   crossCheck: null,

@@ -53,6 +53,7 @@ export const hyperbolicSine: SpecialFunction = {
   ],
   modes: null,
   elementary: true,
+  doubleError: () => 1e-15,
   double: () => hyperbolicKernel(0),
   precise: (argument, _parameters, bits) => logTwoSinh(argument, bits),
   crossCheck: null,

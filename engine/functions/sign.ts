@@ -30,6 +30,7 @@ export const sign: SpecialFunction = {
   ],
   modes: null,
   elementary: true,
+  doubleError: () => 1e-15,
   double: () => ({
     addLog: (xRe, xIm, power, outRe, outIm) => {
       for (let k = 0; k < xRe.length; k++) {

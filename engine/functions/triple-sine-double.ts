@@ -16,7 +16,7 @@ import { TRIPLE_SINE_DEPTH, type TripleSineTables, tripleSineTables } from './tr
  * Shifts S_3(x + w_i) = S_3(x)/S_2(x | w_j, w_k) bring Re x into the middle half; beyond `reach` the limit
  * -(i pi/6) (z^3 - (w1^2+w2^2+w3^2) z/4)/(w1 w2 w3), Im z > 0, is exact to rounding. No pole is used: rational ratios
  * of the periods are nothing special.
- * Error: about 2e-15 of max(1, |log S_3|, |x d log S_3/dx|); measured against mpmath
+ * Error: below 4e-15 of max(1, |log S_3|, |x d log S_3/dx|); measured against mpmath
  * (test/fixtures/functions/triple-sine.py).
  */
 export function tripleSineKernel(w1: number, w2: number, w3: number): DoubleKernel {

@@ -58,6 +58,7 @@ export const tripleSine: SpecialFunction = {
     return `\\prod_{n_1,n_2,n_3\\ge0}${pairOfModes(lead, x, rest, print)}`;
   },
   elementary: false,
+  doubleError: (w) => (w.every(({ im }) => im === 0) ? 4e-15 : 2e-14),
   double: (w) => {
     const [w1, w2, w3] = w.map(({ re, im }) => (im === 0 && re > 0 && Number.isFinite(re) ? re : null));
     return w1 && w2 && w3 ? tripleSineKernel(w1, w2, w3) : complexTripleSineKernel(w);

@@ -15,7 +15,7 @@ import { UPSILON_DEPTH, type UpsilonTables, upsilonTables } from './upsilon-tabl
  * beyond it by the asymptotic series of the double Gamma function,
  *   log Upsilon = z^2 log(-iz) - (3/2) z^2 - ((b^2+b^-2)/12) log(-iz) + K - sum_{m>=2} d_m (2m-3)!/(2 (2z)^{2m-2}), Im z > 0,
  * sum d_m t^{2m} = t^2/(sinh bt sinh t/b), with K from the first formula. No pole is used: all b are alike.
- * Error: about 5e-15 of max(1, |log Upsilon|, |x d log Upsilon/dx|); measured against mpmath
+ * Error: below 5e-15 of max(1, |log Upsilon|, |x d log Upsilon/dx|); measured against mpmath
  * (test/fixtures/functions/upsilon.py).
  */
 export function upsilonKernel(b: number): DoubleKernel {

@@ -90,6 +90,7 @@ export const upsilon: SpecialFunction = {
     )}`;
   },
   elementary: false,
+  doubleError: ([b]) => (b?.im === 0 ? 5e-15 : 2e-14),
   double: ([b]) => doubleKernel(b as Complex),
   precise: (x: FixedComplex, [b], bits) => logUpsilon(x, b as ExactParameter, bits),
   crossCheck: (x, [b], bits) => upsilonSecondRoute(x, b as ExactParameter, bits),

@@ -1,6 +1,6 @@
 import { fixedFromNumber } from '../../engine/arithmetic/fixed';
 import { Rational } from '../../engine/exact/rational';
-import type { ExactParameter, FunctionName } from '../../engine/functions/special-function';
+import type { ExactParameter } from '../../engine/functions/special-function';
 import type { ValueFunctionWord } from '../../engine/functions/values';
 import { parameterOfDouble } from './fixed-text';
 
@@ -17,11 +17,11 @@ export function seeded(seed: number): Random {
   };
 }
 
-const between = (random: Random, low: number, high: number): number => low + (high - low) * random();
-const whole = (random: Random, low: number, high: number): number => Math.floor(between(random, low, high + 1));
-const sign = (random: Random): number => (random() < 0.5 ? -1 : 1);
+export const between = (random: Random, low: number, high: number): number => low + (high - low) * random();
+export const whole = (random: Random, low: number, high: number): number => Math.floor(between(random, low, high + 1));
+export const sign = (random: Random): number => (random() < 0.5 ? -1 : 1);
 /** Of any size between the two, evenly in the logarithm. */
-const sized = (random: Random, low: number, high: number): number =>
+export const sized = (random: Random, low: number, high: number): number =>
   Math.exp(between(random, Math.log(low), Math.log(high)));
 /** A little off 0. */
 const gap = (random: Random): number => sign(random) * sized(random, 1e-8, 0.1);
@@ -65,7 +65,7 @@ function disc(random: Random, radius: number): ExactParameter {
 
 /** Arguments in the domain of each function that is a value: all over it, near singular points, and large ones. */
 export const valuePoints: Readonly<Record<ValueFunctionWord, (random: Random) => readonly ExactParameter[]>> = {
-  barnesg: (random) => [plane(random, 6, 100, 3)],
+  barnesg: (random) => [plane(random, 6, 1e4, 3)],
   barnesgamma: (random) => [
     complexOfDoubles(sized(random, 0.01, 10), between(random, -3, 3)),
     parameterOfDouble(sized(random, 0.3, 3)),
@@ -77,49 +77,13 @@ export const valuePoints: Readonly<Record<ValueFunctionWord, (random: Random) =>
   ],
   digamma: (random) => [plane(random, 12, 1e4, 0)],
   dilog: (random) => [random() < 0.3 ? complexOfDoubles(1 + gap(random), gap(random)) : disc(random, 4)],
-  hurwitz: (random) => [plane(random, 8, 20, 1), complexOfDoubles(sized(random, 0.01, 40), between(random, -3, 3))],
+  hurwitz: (random) => [plane(random, 8, 60, 1), complexOfDoubles(sized(random, 0.01, 900), between(random, -30, 30))],
   polygamma: (random) => [wholeParameter(whole(random, 0, 8)), plane(random, 12, 1e3, 0)],
   polylog: (random) => [
     wholeParameter(whole(random, -6, 9)),
     random() < 0.3 ? complexOfDoubles(1 + gap(random), gap(random)) : disc(random, 6),
   ],
   qpochhammer: (random) => [disc(random, random() < 0.5 ? 1 : 30), disc(random, 0.95)],
-  riemannzeta: (random) => [plane(random, 12, 40, 1)],
-  zetaprime: (random) => [wholeParameter(whole(random, 0, 6)), plane(random, 8, 200, 0)],
-};
-
-export interface KernelPoint {
-  readonly re: number;
-  readonly im: number;
-  readonly parameters: readonly number[];
-}
-
-/** b between 0.05 and 20; one in three next to a b^2 = p/q with small p and q, one in six exactly such. */
-function period(random: Random, low: number, high: number): number {
-  if (random() < 0.5) return sized(random, low, high);
-  const b = Math.sqrt(whole(random, 1, 6) / whole(random, 1, 6));
-  const close = random() < 0.7 ? b * (1 + gap(random) * 1e-3) : b;
-  return Math.min(high, Math.max(low, close));
-}
-
-function spread(random: Random, size: number): { readonly re: number; readonly im: number } {
-  const part = (): number => sign(random) * (0.01 + size * random());
-  return { re: part(), im: part() };
-}
-
-/** Arguments and parameters of each function that products are made of, off the axes where zeros and poles lie. */
-export const kernelPoints: Readonly<Partial<Record<FunctionName, (random: Random) => KernelPoint>>> = {
-  doubleSine: (random) => {
-    const b = period(random, 0.05, 20);
-    const q = b + 1 / b;
-    return { ...spread(random, random() < 0.8 ? 2 * q : 20 * q), parameters: [b] };
-  },
-  gamma: (random) => ({ ...spread(random, sized(random, 1, random() < 0.8 ? 40 : 1e4)), parameters: [] }),
-  upsilon: (random) => ({ ...spread(random, 6), parameters: [period(random, 0.2, 4)] }),
-  tripleSine: (random) => {
-    const w = (): number => sized(random, 0.4, 2.5);
-    return { ...spread(random, 6), parameters: [w(), w(), w()] };
-  },
-  hyperbolicSine: (random) => ({ ...spread(random, sized(random, 1, 1e4)), parameters: [] }),
-  hyperbolicCosine: (random) => ({ ...spread(random, sized(random, 1, 1e4)), parameters: [] }),
+  riemannzeta: (random) => [plane(random, 12, 120, 1)],
+  zetaprime: (random) => [wholeParameter(whole(random, 0, 6)), plane(random, 8, 9e3, 0)],
 };

@@ -1,10 +1,12 @@
-import { numberFromFixed } from '../../engine/arithmetic/fixed';
+import { fixedFromNumber, numberFromFixed } from '../../engine/arithmetic/fixed';
 import { piFixed } from '../../engine/arithmetic/fixed-constants';
-import type { FunctionName, PreciseLog } from '../../engine/functions/special-function';
+import type { Complex, DoubleKernel, ExactParameter, PreciseLog } from '../../engine/functions/special-function';
 import { functions } from '../../engine/functions/table';
 import { type ValueFunctionWord, valueFunctions } from '../../engine/functions/values';
-import { fixedComplex, parameterOfDouble } from './fixed-text';
-import { kernelPoints, type Random, valuePoints } from './random-points';
+import { fixedComplex } from './fixed-text';
+import { kernelValue } from './kernel-value';
+import type { KernelSource } from './random-kernels';
+import { complexOfDoubles, type Random, valuePoints } from './random-points';
 
 /** The largest error found, as a share of the error stated, where it was found, and how many points had values. */
 export interface WorstRatio {
@@ -61,17 +63,68 @@ export function worstOfValue(word: ValueFunctionWord, bits: number, count: numbe
 }
 
 /** A function that products are made of, with `bits`, against itself with twice as many. */
-export function worstOfPrecise(name: FunctionName, bits: number, count: number, random: Random): WorstRatio {
-  const points = kernelPoints[name];
-  if (!points) throw new Error(`No points for ${name}`);
+export function worstOfPrecise(source: KernelSource, bits: number, count: number, random: Random): WorstRatio {
   return worst(count, () => {
-    const { re, im, parameters } = points(random);
-    const at = `${re},${im}; ${parameters}`;
+    const { re, im, parameters } = source.next(random);
     const log = (precision: number): PreciseLog =>
-      functions[name].precise(fixedComplex(re, im, precision), parameters.map(parameterOfDouble), precision);
-    const value = log(bits);
-    const finer = log(2 * bits);
-    if (value.kind !== 'value' || finer.kind !== 'value') return { ratio: null, at };
-    return { ratio: share(value, finer, bits, true), at };
+      functions[source.name].precise(fixedComplex(re, im, precision), parameters, precision);
+    const [value, finer] = [log(bits), log(2 * bits)];
+    if (value.kind !== 'value' || finer.kind !== 'value') return { ratio: null, at: where(re, im, parameters) };
+    return { ratio: share(value, finer, bits, true), at: where(re, im, parameters) };
   });
+}
+
+/** Bits that doubles are held against: any double between 1e-9 and 1e5 with some digits more than a slope needs. */
+const DOUBLE_BITS = 130;
+/** log2 of the relative step that slopes are taken with. */
+const STEP = -40;
+
+/** The double tier against the precise one, in units of max(1, |log f|, |x d log f/dx|) times the error stated. */
+export function worstOfDouble(source: KernelSource, count: number, random: Random): WorstRatio {
+  const declared = functions[source.name];
+  const known = new Map<ExactParameter | undefined, DoubleKernel>();
+  return worst(count, () => {
+    const point = source.next(random);
+    const { re, im } = point;
+    // The parameters that doubles see, exactly.
+    const parameters = point.parameters.map(({ approx }) => complexOfDoubles(approx.re, approx.im));
+    const at = where(re, im, parameters);
+    // Tables are kept as long as the source keeps its parameters.
+    const [first] = point.parameters;
+    let kernel = known.get(first);
+    if (kernel === undefined) {
+      known.clear();
+      kernel = declared.double(point.parameters.map(({ approx }) => approx));
+      known.set(first, kernel);
+    }
+    const value = kernelValue(kernel, re, im);
+    const x = fixedComplex(re, im, DOUBLE_BITS);
+    const exact = declared.precise(x, parameters, DOUBLE_BITS);
+    const size = Math.hypot(re, im);
+    const step = fixedFromNumber(size * 2 ** STEP, DOUBLE_BITS);
+    const moved = declared.precise({ re: x.re + step, im: x.im }, parameters, DOUBLE_BITS);
+    if (exact.kind !== 'value' || moved.kind !== 'value') return { ratio: null, at };
+    const slope = distance(number(exact), number(moved)) / (size * 2 ** STEP);
+    const wanted = number(exact);
+    const scale = Math.max(1, Math.hypot(wanted.re, wanted.im), Math.hypot(value.re, value.im), size * slope);
+    if (Number.isNaN(value.re)) return { ratio: null, at };
+    return {
+      ratio: distance(value, wanted) / scale / declared.doubleError(parameters.map(({ approx }) => approx)),
+      at,
+    };
+  });
+}
+
+function number({ re, im }: Stated): Complex {
+  return { re: numberFromFixed(re, DOUBLE_BITS), im: numberFromFixed(im, DOUBLE_BITS) };
+}
+
+/** Of logarithms, modulo 2 pi i. */
+function distance(a: Complex, b: Complex): number {
+  const im = a.im - b.im;
+  return Math.hypot(a.re - b.re, im - 2 * Math.PI * Math.round(im / (2 * Math.PI)));
+}
+
+function where(re: number, im: number, parameters: readonly ExactParameter[]): string {
+  return `${re},${im}; ${parameters.map(({ approx }) => `${approx.re},${approx.im}`).join('; ')}`;
 }
