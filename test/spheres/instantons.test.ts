@@ -1,6 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
 import { Form } from '../../engine/exact/form';
+import { Gaussian } from '../../engine/exact/gaussian';
 import { evaluateCoefficient } from '../../engine/numeric/coefficient';
 import { instantonCoefficient } from '../../engine/spheres/instantons';
 import { type InstantonData, nekrasovTerms } from '../../engine/spheres/nekrasov';
@@ -173,6 +174,28 @@ describe('laws', () => {
     const inverse = (4 * delta + c / 2) / (4 * delta * (2 * delta + 1) * (4 * delta + c / 2) - 36 * delta * delta);
     expect(Number(irrational.value.re) * 2 ** -irrational.value.bits).toBeCloseTo(inverse, 14);
     expect(distance(at('sqrt(1/2)', root).value, irrational.value)).toBe(0);
+  });
+
+  // A factor Q/2 + i m + .. for every box: N. Nekrasov, hep-th/0206161; the scale of the gauge group without the flavour
+  // is q i m.
+  test('a heavy flavour decouples, up to 1/m', () => {
+    const lines = ['sphere S4, b = 3/5', 'gauge G = SU(2)'];
+    const flavoured = theory(...lines, 'flavor A = U(1)', 'matter G A', 'hyper q fund 1');
+    for (const k of [1, 2, 3]) {
+      const pure = coefficientAt(theory(...lines), k, { sigma: '2/7' });
+      const off = (size: number) => {
+        const heavy = coefficientAt(flavoured, k, { sigma: '2/7', m: `${size}` });
+        if (pure.kind !== 'value' || heavy.kind !== 'value' || !pure.exact || !heavy.exact) throw new Error(heavy.kind);
+        const scale = Gaussian.i.mul(Gaussian.of(size));
+        const scaled = Array.from({ length: k }).reduce<Gaussian>((value) => value.mul(scale.inverse()), heavy.exact);
+        const { re, im } = scaled.mul(pure.exact.inverse());
+        return Math.hypot(re.toNumber() - 1, im.toNumber());
+      };
+      expect(off(1e6)).toBeLessThan(1e-5);
+      // One instanton of SU(2) has no correction at all.
+      if (k === 1) expect(off(1e6)).toBe(0);
+      else expect(off(1e6)).toBeGreaterThan(off(1e8) * 50);
+    }
   });
 
   test('a pole of the whole coefficient is called one', () => {

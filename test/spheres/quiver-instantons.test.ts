@@ -237,6 +237,23 @@ describe('laws', () => {
     expect(exactly(of, [0, 0], point)).toBe('1');
   });
 
+  // SU(2) has no antifundamental of its own; a hyper is its conjugate; N. Nekrasov, hep-th/0206161.
+  test('a bifundamental with SU(2) can be written either way, and as half-hypers', () => {
+    const of = (...lines: string[]) =>
+      theory('sphere S4, b = 3/5', 'flavor A = U(1)', 'flavor F = SU(2), mass p', ...lines);
+    const two = ['gauge G = SU(2)', 'gauge H = SU(3), coulomb tau', 'matter G H A F'];
+    const turned = ['gauge H = SU(3), coulomb tau', 'gauge G = SU(2), coulomb sigma', 'matter G H A F'];
+    const point = { sigma: '2/7', tau1: '1/3', tau2: '-2/5', m: '1/4' };
+    const value = exactly(of(...two, 'hyper y fund fund 1 1'), [1, 1], point);
+    expect(exactly(of(...two, 'hyper y fund anti -1 1'), [1, 1], point)).toBe(value);
+    expect(exactly(of(...turned, 'hyper y fund fund 1 1'), [1, 1], point)).toBe(value);
+    expect(exactly(of(...two, 'hyper y fund anti 1 1'), [1, 1], point)).not.toBe(value);
+    const doublets = ['gauge G = SU(2)', 'gauge H = SU(2), coulomb tau', 'matter G H A F'];
+    const at = { sigma: '2/7', tau: '1/3', m: '1/4', p: '1/4' };
+    const half = exactly(of(...doublets, 'halfhyper y fund fund 0 fund'), [1, 1], at);
+    expect(exactly(of(...doublets, 'hyper y fund fund 1 1'), [1, 1], at)).toBe(half);
+  });
+
   // Without matter between them two groups know nothing of each other.
   test('a product of groups without bifundamentals is a product', () => {
     const both = theory('gauge G = SU(2)', 'gauge H = SU(3), coulomb tau');
