@@ -9,6 +9,7 @@ import { outline } from '../engine/requests/outline';
 import { plotAt } from '../engine/requests/plot-at';
 import type { FailureResult, Outline, PlotResult, Progress, Result } from '../engine/requests/result';
 import { findRequest, run } from '../engine/requests/run';
+import { type WeightPage, weightPage } from '../engine/requests/weight-page';
 
 /** Digits of a value that does not say how many it wants. */
 const DIGITS = 30;
@@ -25,6 +26,7 @@ export interface EngineApi {
   run(text: string, key: string, token: string, progress: (progress: Progress) => void): Result | null;
   plotFast(text: string, key: string, overrides: Readonly<Record<string, number>>): PlotResult | FailureResult | null;
   document(text: string, name: string, form: FormulaForm, notation: number): LatexOut;
+  weightPage(text: string, name: string, latex: string, page: number, notation: number): WeightPage;
   representations(group: string, limit: number): readonly RepresentationChoice[];
   hover(text: string, offset: number): HoverText | null;
   builtins(): readonly BuiltinBlock[];
@@ -59,6 +61,7 @@ export function createEngineApi(now: () => number, isWanted: (token: string) => 
     },
     plotFast: (text, key, overrides) => plotAt(read(text), key, overrides),
     document: (text, name, form, notation) => latexOut(read(text), name, form, notation),
+    weightPage: (text, name, latex, page, notation) => weightPage(read(text), name, latex, page, notation),
     representations: representationChoices,
     hover: (text, offset) => hoverAt(read(text), offset),
     builtins: builtinBlocks,

@@ -1,6 +1,7 @@
 import { proxy, type Remote, releaseProxy, wrap } from 'comlink';
 import type { LatexOut } from '../engine/requests/document';
 import type { FailureResult, PlotResult, Progress, Result } from '../engine/requests/result';
+import type { WeightPage } from '../engine/requests/weight-page';
 import type { EngineApi } from './api';
 import { createStopToken, type StopToken } from './stop-token';
 import type { EngineClient } from './types';
@@ -60,6 +61,8 @@ export function createEngineClient(connect: () => EngineConnection = connectWork
       if (out.kind === 'refused') return { snippet: '', document: '', refused: out.message };
       return { snippet: out.snippet, document: out.document };
     },
+    weightPage: (text, name, latex, page, options) =>
+      quick.ask<WeightPage>(async (api) => api.weightPage(text, name, latex, page, options.notation[name] ?? 0)),
     representations: (group, limit) => quick.ask((api) => api.representations(group, limit)),
     builtins: () => quick.ask((api) => api.builtins()),
     dispose: () => {

@@ -1,6 +1,7 @@
 import type { FormulaForm } from '../engine/language/tree';
 import type { BuiltinBlock } from '../engine/requests/builtin-text';
 import type { FailureResult, Outline, PlotResult, Progress, Result } from '../engine/requests/result';
+import type { WeightPage } from '../engine/requests/weight-page';
 
 /** What the page decides about how the engine prints. */
 export interface OutlineOptions {
@@ -58,6 +59,14 @@ export interface EngineClient {
     revision: number,
   ): Promise<PlotResult | FailureResult | null>;
   document(text: string, theoryName: string, form: FormulaForm, options: OutlineOptions): Promise<LatexOutput>;
+  /** Weights of a piece of a formula, written out, so many a page; the piece is named by its LaTeX. */
+  weightPage(
+    text: string,
+    theoryName: string,
+    latex: string,
+    page: number,
+    options: OutlineOptions,
+  ): Promise<WeightPage>;
   representations(group: string, limit: number): Promise<readonly RepresentationChoice[]>;
   hover(text: string, offset: number): Promise<HoverHelp | null>;
   /** Blocks of text to insert: spectra of the fields on round spheres. */

@@ -8,6 +8,7 @@ import { ModePairing } from './mode-pairing';
 import { ScrollBox } from './scroll-box';
 import { Says, Tex } from './tex';
 import { useWrapMarks } from './use-wrap-marks';
+import { WeightPages } from './weight-pages';
 
 interface FormulaProps {
   readonly formula: FormulaView;
@@ -47,7 +48,7 @@ function Pieces({ lead, pieces, theory }: PiecesProps) {
   const [opened, setOpened] = useState<string | null>(null);
   const line = useRef<HTMLDivElement>(null);
   const expandedId = useId();
-  const shown = pieces.find((piece) => piece.latex === opened && piece.expanded !== null);
+  const shown = pieces.find((piece) => piece.latex === opened && canOpen(piece, theory));
   useWrapMarks(line, pieces);
   return (
     <>
@@ -72,9 +73,17 @@ function Pieces({ lead, pieces, theory }: PiecesProps) {
             <Tex tex={`\\displaystyle ${shown.expanded}`} />
           </ScrollBox>
         ) : null}
+        {shown?.weights && theory !== null ? (
+          <WeightPages key={shown.latex} theory={theory} latex={shown.latex} />
+        ) : null}
       </div>
     </>
   );
+}
+
+/** Weights stand beside the piece, or can be asked for. */
+function canOpen({ expanded, weights }: FormulaPiece, theory: string | null): boolean {
+  return expanded !== null || (weights !== undefined && theory !== null);
 }
 
 interface PieceProps {
@@ -99,7 +108,7 @@ const Piece = memo(function Piece({ piece, theory, opened, expandedId, onToggle 
       onPointerEnter={() => lit.point(here)}
       onPointerLeave={() => lit.point(null)}
     >
-      {piece.expanded === null ? (
+      {!canOpen(piece, theory) ? (
         tex
       ) : (
         <button

@@ -2,7 +2,7 @@ import type { Form } from '../exact/form';
 import { parenthesised } from '../functions/notation';
 import type { FunctionAt, Notation, Printer } from '../functions/special-function';
 import { functions } from '../functions/table';
-import { atWeight, type Factor, FLUX, WEIGHT } from '../product/factor';
+import { atWeight, type Factor, FLUX, WEIGHT, type Weight } from '../product/factor';
 import type { TheoryGroup } from '../theory/theory';
 import type { TheoryWeights } from '../theory/weights';
 import { formLatex } from './form';
@@ -13,8 +13,10 @@ import { NO_WEIGHT, type PrintedWeights, printWeights } from './weights';
 export interface Piece {
   readonly latex: string;
   readonly from: readonly string[];
-  /** The same with every weight written out; null where there is one weight, or too many to read. */
+  /** The same with every weight written out; null where there is one weight, or too many to send along. */
   readonly expanded: string | null;
+  /** The number of weights where there are too many: they can be had in parts, see `weightsLatex`. */
+  readonly weights?: number;
 }
 
 /** More weights than this are not written out. */
@@ -55,7 +57,32 @@ function pieceLatex(groups: readonly TheoryGroup[], factors: readonly Factor<The
     latex: weight.indices + weight.choices + factorsLatex(factors, (form) => atPrinted(form, weight), style),
     from: first.from,
     expanded: style.kind === 'modes' ? null : expandedLatex(factors, weight, style),
+    ...(style.kind !== 'modes' && weight.size > MAXIMAL_EXPANDED ? { weights: weight.size } : {}),
   }));
+}
+
+/** A piece of a product that is printed as `latex`, some of its weights written out; null where there is none. */
+export function weightsLatex(
+  groups: readonly TheoryGroup[],
+  product: readonly Factor<TheoryWeights>[],
+  notation: number,
+  latex: string,
+  [from, to]: readonly [number, number],
+): { readonly latex: string; readonly size: number } | null {
+  const style: Style = { kind: 'function', notation };
+  for (const factors of gatherPieces(product)) {
+    const { weights, half } = factors[0] as Factor<TheoryWeights>;
+    if (weights === null) continue;
+    for (const printed of printWeights(groups, weights, half)) {
+      const own = printed.indices + printed.choices + factorsLatex(factors, (form) => atPrinted(form, printed), style);
+      if (own === latex) return { latex: listed(factors, printed.weights(from, to), style), size: printed.size };
+    }
+  }
+  return null;
+}
+
+function listed(factors: readonly Factor[], weights: readonly Weight[], style: Style): string {
+  return weights.map((weight) => factorsLatex(factors, (argument) => atWeight(argument, weight), style)).join('\\;');
 }
 
 function atPrinted(form: Form, { weight, flux }: PrintedWeights): Form {
@@ -82,9 +109,7 @@ function factorsLatex(factors: readonly Factor[], at: (argument: Form) => Form, 
 
 function expandedLatex(factors: readonly Factor[], { size, weights }: PrintedWeights, style: Style): string | null {
   if (size < 2 || size > MAXIMAL_EXPANDED) return null;
-  return weights()
-    .map((weight) => factorsLatex(factors, (argument) => atWeight(argument, weight), style))
-    .join('\\;');
+  return listed(factors, weights(), style);
 }
 
 interface Single {

@@ -1,5 +1,11 @@
 import { Form } from '../exact/form';
-import { expandPattern, type IndexPattern, type PatternRelation, type PatternTerm } from '../lie/index-pattern';
+import {
+  expandPattern,
+  type IndexPattern,
+  type PatternRelation,
+  type PatternTerm,
+  type WeightVectors,
+} from '../lie/index-pattern';
 import type { Weight } from '../product/factor';
 import type { TheoryGroup } from '../theory/theory';
 import { type TheoryWeights, weightForms } from '../theory/weights';
@@ -18,7 +24,8 @@ export interface PrintedWeights {
   readonly flux: Form;
   /** Number of weights, and the weights themselves in the coordinates. */
   readonly size: number;
-  readonly weights: () => readonly Weight[];
+  /** Those from the number `from` up to, without, `to`; all where nothing is said. */
+  readonly weights: (from?: number, to?: number) => readonly Weight[];
 }
 
 /** The weight where there is none: one factor without product sign. */
@@ -28,7 +35,7 @@ export const NO_WEIGHT: PrintedWeights = {
   weight: Form.zero,
   flux: Form.zero,
   size: 1,
-  weights: () => [{ position: Form.zero, flux: Form.zero }],
+  weights: (from = 0, to = 1) => (from < 1 && to > 0 ? [{ position: Form.zero, flux: Form.zero }] : []),
 };
 
 /**
@@ -55,12 +62,25 @@ export function printWeights(
           weight: before.weight.add(part.weight),
           flux: before.flux.add(part.flux),
           size: before.size * part.size,
-          weights: () => before.weights().flatMap((one) => part.weights().map((other) => sumOf(one, other))),
+          weights: (from = 0, to = before.size * part.size) => sums(before, part, from, to),
         };
       }),
     );
   });
   return printed;
+}
+
+/** Sums of a weight of each part, those of the second part changing fastest. */
+function sums(first: PrintedWeights, second: PrintedWeights, from: number, to: number): Weight[] {
+  const found: Weight[] = [];
+  const last = Math.min(to, first.size * second.size);
+  for (let row = Math.floor(from / second.size); row * second.size < last; row++) {
+    const [one] = first.weights(row, row + 1);
+    const start = row * second.size;
+    const others = second.weights(Math.max(0, from - start), Math.min(second.size, last - start));
+    if (one !== undefined) found.push(...others.map((other) => sumOf(one, other)));
+  }
+  return found;
 }
 
 function sumOf(one: Weight, other: Weight): Weight {
@@ -76,6 +96,8 @@ const PLUS_MINUS = '\\prod_{\\pm}';
 function printPattern(group: TheoryGroup, place: number, pattern: IndexPattern): PrintedWeights {
   const letters = LETTERS[place % LETTERS.length] as string;
   const letter = new Map(pattern.indices.map(({ name }, k) => [name, letters.charAt(k)]));
+  // Listed when first asked for.
+  let vectors: WeightVectors | null = null;
   const sum = (stem: string): Form =>
     Form.sum(
       pattern.terms.map((term) => {
@@ -90,7 +112,11 @@ function printPattern(group: TheoryGroup, place: number, pattern: IndexPattern):
     weight: sum(stemOf(group)),
     flux: group.role === 'gauge' ? sum(fluxStem(group)) : Form.zero,
     size: pattern.size,
-    weights: () => weightForms(group, expandPattern(pattern, group.coordinates.length)),
+    weights: (from = 0, to = pattern.size) => {
+      vectors ??= expandPattern(pattern, group.coordinates.length);
+      const { width } = vectors;
+      return weightForms(group, { ...vectors, vectors: vectors.vectors.subarray(from * width, to * width) });
+    },
   };
 }
 

@@ -136,6 +136,8 @@ export interface FormulaPiece {
   readonly from: readonly string[];
   /** Expanded form of the piece (all weights), shown on demand; null when it is the same. */
   readonly expanded: string | null;
+  /** Number of weights where they are too many to be sent along; they are asked for page by page. */
+  readonly weights?: number;
 }
 
 export interface SpectrumCard extends CardBase {

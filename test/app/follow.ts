@@ -21,6 +21,7 @@ export function heldClient() {
       new Promise((answer, fail) => runs.push({ text, key, signal, progress, answer, fail })),
     plotFast: unasked,
     document: unasked,
+    weightPage: unasked,
     representations: unasked,
     hover: unasked,
     builtins: unasked,
