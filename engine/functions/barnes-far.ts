@@ -170,7 +170,7 @@ function tailValue(
   const u = squareComplex(v, bits);
   const sum = far.realTail === null ? complexSum(far.tail, used, u, bits) : powerSum(far.realTail, used, u, bits);
   const lead = firstOrder === 1 ? v : u;
-  // v errs by 1.5 and |v| yError/|Y|, u by twice that and 1.5, slopes are below 2; the sums err by 4 (|u| <= 1/4).
+  // v errs by 1.5 and |v| yError/|Y|, u by twice that and 1.5, slopes are below 2; the sums err by 7 (|u| <= 1/4).
   const rounding = 16 + (4 * yError) / size;
   return { tail: multiplyComplex(lead, sum, bits), error: rounding + 2 ** (remainder + bits) };
 }

@@ -51,8 +51,9 @@ function phase(frame: DoubleSineFrame, factor: bigint, x: FixedComplex): FixedCo
 }
 
 /**
- * Rounding in ulps of 2^-precision: every sum errs by at most gain (3 + 41 A gain) with coefficients up to A (argument of the exponential
- * 1, its value 4, z and |z|^2 up to 41 together, 2 a step), gain = 1/(1 - |z|)^2 <= 4 over poles; about ten sums, two of them times x.
+ * Rounding in ulps of 2^-precision: every sum errs by at most gain (4 + 47 A gain) with coefficients up to A (argument of the
+ * exponential 1, its value 4, z and |z|^2 up to 41 together, powerSum 3 + 6 A gain), gain = 1/(1 - |z|)^2 <= 4 over poles;
+ * about ten sums, two of them times x.
  * Constants with constantBits meet x at most squared.
  */
 function roundingBound(frame: DoubleSineFrame, log2Largest: number, gain: number, size: number): number {

@@ -42,9 +42,8 @@ const stirlingTable = memoiseBounded(16, (bits: number): StirlingTable => {
 /**
  * sum_j B_2j/(2j (2j - 1)) Z^(1-2j) for Re Z >= 0 and |Z| cos(arg Z/2) >= stirlingReach(bits) (DLMF 5.11.1). It runs in
  * u = (rho/Z)^2, |u| <= 1/4, with real coefficients: a recurrence with two long products a term.
- * Error in units: the remainder, at most the first neglected term times sec^(2j)(arg Z/2) (DLMF 5.11(ii)); in powerSum
- * 2 a step (cut and coefficient) times 1/(1 - 1/4)^2; the quotient's and its square's 4, times a slope below 1; the last
- * product 2. Together below 12.
+ * Error in units: the remainder, at most the first neglected term times sec^(2j)(arg Z/2) (DLMF 5.11(ii)), 1; powerSum with
+ * |u| <= 1/4 and coefficients below 1/50, 6; the quotient's and its square's cuts times slopes below 1/4, 2; the last product 2.
  */
 export function stirlingSeries(z: FixedComplex, bits: number): Estimate {
   const { log2Radius, coefficients, log2 } = stirlingTable(bits);
