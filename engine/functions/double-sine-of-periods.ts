@@ -61,7 +61,7 @@ export function logTwoPeriodSine(x: FixedComplex, periods: readonly ExactParamet
     period,
     bits,
   );
-  if (log.kind !== 'value') return { kind: 'indistinct' };
+  if (log.kind !== 'value') return log.kind === 'unreachable' ? log : { kind: 'indistinct' };
   const units = 2n + BigInt(Math.ceil(1 / Math.sqrt(w1.approx.re * w2.approx.re)));
   return { ...log, error: log.error * units };
 }

@@ -30,7 +30,7 @@ const INDISTINCT: PreciseLog = { kind: 'indistinct' };
  * after shifts S_3(x + w_i) = S_3(x)/S_2(x | w_j, w_k) into |Re z| <= |w|/4; for |Im z| so large that e^{-2 pi |Im z|/max w}
  * does not count, the limit -(i pi/6) (z^3 - (sum w^2) z/4) c4. Rational ratios of periods are nothing special.
  * Error: the rule's is below 2^-(bits+12) by its rate, rounding and one unit in each part of x are counted. 'indistinct'
- * next to a zero, and where more than 250 000 nodes would be needed.
+ * next to a zero, 'unreachable' where more than 250 000 nodes would be needed.
  * Source: Narukawa 2004, math/0306164 (integral and growth); Kurokawa and Koyama 2003 (shift).
  */
 export function logTripleSine(
@@ -40,7 +40,9 @@ export function logTripleSine(
   strip: StripRule = onStrip,
 ): PreciseLog {
   const approx = periods.map((w) => w.approx.re);
-  if (periods.length !== 3 || !periods.every((w) => w.approx.im === 0 && w.approx.re > 0)) return INDISTINCT;
+  if (periods.length !== 3 || !periods.every((w) => w.approx.im === 0 && w.approx.re > 0)) {
+    return { kind: 'unreachable', says: 'three positive periods are needed' };
+  }
   const total = approx.reduce((sum, w) => sum + w, 0);
   const exact = periods.map((w) => w.value(bits).re);
   const exactTotal = exact.reduce((sum, w) => sum + w, 0n);
@@ -67,11 +69,13 @@ export function logTripleSine(
   mirror();
   let count = 0;
   while (4n * point.re < exactTotal && !isFar(point, approx, bits)) {
-    if (count++ > MAXIMAL_SHIFTS) return INDISTINCT;
+    if (count++ > MAXIMAL_SHIFTS) {
+      return { kind: 'unreachable', says: `more than ${MAXIMAL_SHIFTS} shifts by a period would be needed` };
+    }
     const index = point.re <= 0n ? largest : smallest;
     const others = periods.filter((_, k) => k !== index);
     const sine = logTwoPeriodSine(point, others, bits);
-    if (sine.kind !== 'value') return INDISTINCT;
+    if (sine.kind !== 'value') return sine.kind === 'unreachable' ? sine : INDISTINCT;
     re += sine.re;
     im += flipped ? -sine.im : sine.im;
     error += sine.error;
@@ -79,7 +83,7 @@ export function logTripleSine(
     mirror();
   }
   const inside = isFar(point, approx, bits) ? limit(point, periods, bits) : strip(point, periods, bits);
-  if (inside === null) return INDISTINCT;
+  if (inside === null) return { kind: 'unreachable', says: 'too many nodes of the quadrature would be needed' };
   // A generous bound of |d log S_3/dz| in the middle half (see the test); every shift moved x by one more unit.
   const size = numberFromFixed(absoluteComplex(point), bits) + total;
   const slope =

@@ -57,7 +57,7 @@ export function evaluatePrecise(
     const at = formDouble(argument, () => null);
     return at === null || isTooFar(name, at, periods);
   });
-  if (far) return { kind: 'unreachable', why: null };
+  if (far) return { kind: 'unreachable', why: 'an argument is undefined, or lies too many periods out' };
   for (const { name, argument } of entries) {
     const why = functions[name].outside?.(argument) ?? null;
     if (why !== null) return { kind: 'outside', why };

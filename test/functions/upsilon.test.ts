@@ -1,5 +1,7 @@
 import { describe, expect, test } from 'vitest';
+import { ln2Fixed } from '../../engine/arithmetic/fixed-constants';
 import { upsilonByDoubleGamma } from '../../engine/functions/barnes-routes';
+import { logGammaPrecise } from '../../engine/functions/log-gamma-precise';
 import { upsilonKernel } from '../../engine/functions/upsilon-double';
 import { logUpsilon } from '../../engine/functions/upsilon-precise';
 import fixture from '../fixtures/functions/upsilon.json';
@@ -99,5 +101,57 @@ describe('log Upsilon_b', () => {
       }
     }
     expect(logUpsilon(fixedComplex(-1, 0, 100), parameterOfDouble(1), 100).kind).toBe('indistinct');
+  });
+});
+
+describe('Upsilon where it took minutes, or could not be had', () => {
+  // Upsilon_1(x + 1) = Gamma(x)/Gamma(1 - x) Upsilon_1(x) (Zamolodchikov and Zamolodchikov 1996, hep-th/9506136).
+  test.each([60, 190])('%i bits: a thousand periods out, by the shift', (bits) => {
+    const far = logUpsilon(fixedComplex(1000.25, 0.5, bits), parameterOfDouble(1), bits);
+    const near = logUpsilon(fixedComplex(990.25, 0.5, bits), parameterOfDouble(1), bits);
+    if (far.kind !== 'value' || near.kind !== 'value') throw new Error('no value');
+    let { re, im, error } = near;
+    for (let k = 0; k < 10; k++) {
+      const above = logGammaPrecise(fixedComplex(990.25 + k, 0.5, bits), bits);
+      const below = logGammaPrecise(fixedComplex(-989.25 - k, -0.5, bits), bits);
+      if (above.kind !== 'value' || below.kind !== 'value') throw new Error('no value');
+      re += above.re - below.re;
+      im += above.im - below.im;
+      error += above.error + below.error;
+    }
+    expect(unitsOff(far, { re, im }, bits, true)).toBeLessThanOrEqual(Number(far.error + error));
+  });
+
+  test('b = 1/128 at the edge of the strip: two lattice sums, and the shift by 1/b', () => {
+    const bits = 190;
+    const b = parameterOfDouble(2 ** -7);
+    const x = 97 / 256;
+    const one = logUpsilon(fixedComplex(x, 0, bits), b, bits);
+    const two = logUpsilon(fixedComplex(x, 0, bits), b, bits, 1.3);
+    const shifted = logUpsilon(fixedComplex(x + 128, 0, bits), b, bits);
+    // u = x/b.
+    const above = logGammaPrecise(fixedComplex(48.5, 0, bits), bits);
+    const below = logGammaPrecise(fixedComplex(-47.5, 0, bits), bits);
+    if (one.kind !== 'value' || two.kind !== 'value' || shifted.kind !== 'value') throw new Error('no value');
+    if (above.kind !== 'value' || below.kind !== 'value') throw new Error('no value');
+    expect(unitsOff(one, two, bits, true)).toBeLessThanOrEqual(Number(one.error + two.error));
+    // Upsilon(x + 1/b) = Gamma(u)/Gamma(1 - u) b^{2u - 1} Upsilon(x), b = 2^-7.
+    const re = one.re + above.re - below.re - 7n * 96n * ln2Fixed(bits);
+    const bound = one.error + shifted.error + above.error + below.error + 700n;
+    expect(unitsOff(shifted, { re, im: one.im + above.im - below.im }, bits, true)).toBeLessThanOrEqual(Number(bound));
+  });
+
+  test('five hundred digits: two lattice sums agree', () => {
+    const bits = 1700;
+    const x = fixedComplex(0.5, 1, bits);
+    const b = parameterOfDouble(0.75);
+    const [one, two] = [logUpsilon(x, b, bits), logUpsilon(x, b, bits, 1.2)];
+    if (one.kind !== 'value' || two.kind !== 'value') throw new Error('no value');
+    expect(unitsOff(one, two, bits)).toBeLessThanOrEqual(Number(one.error + two.error));
+  });
+
+  test('too many lattice points: refused at once, with the reason', () => {
+    const log = logUpsilon(fixedComplex(0.25, 900, 190), parameterOfDouble(1 / 64), 190);
+    expect(log).toEqual({ kind: 'unreachable', says: 'more than 400000 lattice points would be needed' });
   });
 });
