@@ -154,6 +154,26 @@ describe('an adjoint hyper at special masses', () => {
   });
 });
 
+// s_b(x - ib/2)/s_b(x + ib/2) = 2 cosh(pi b x): L. D. Faddeev, R. M. Kashaev, A. Y. Volkov, hep-th/0006156.
+test('two chirals on S3 at the mass where they leave a hyperbolic cosine', () => {
+  const lines = (parameters: string[], b: string) => [
+    ...parameters,
+    'theory t',
+    `  sphere S3, b = ${b}`,
+    '  gauge G = U(1)',
+    '  flavor A = U(1)',
+    '  matter    G  A  R',
+    '  chiral q  1  1  1/2',
+    '  chiral p -1  1  1/2',
+    '',
+  ];
+  const named = lines(['let beta = 5/4', 'let m = i(1/beta - beta)/4'], 'beta');
+  expect(formula(...named).pieces).toEqual(['\\frac{1}{2\\cosh(\\pi b\\sigma)}']);
+  const value = answer(...named, 'value one-loop of t at sigma = 0.3');
+  if (value.kind !== 'value') throw new Error(failureOf(value));
+  expect(Number(value.value.re)).toBeCloseTo(0.5 / Math.cosh(Math.PI * 1.25 * 0.3), 14);
+});
+
 describe('a mass named as a parameter', () => {
   test('has its value in numbers, unless it is set', () => {
     const of = star('S4', 'SU(2)', 'let m = 1/5');
