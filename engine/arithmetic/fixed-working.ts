@@ -17,12 +17,15 @@ export function chunkBits(working: number): number {
   return working > LONG_BITS ? 6 : 8;
 }
 
+/** Above this working precision the exponential sums its series by rectangular splitting. */
+export const EXPONENTIAL_PLAN_BITS = 1000;
+
 /**
- * The same for the exponential: its single numbers (not pairs) make larger tables worth their time; 3 2^10 products of at most
- * five digits cost below half a millisecond.
+ * The same for the exponential: its single numbers (not pairs) make larger tables worth their time, up to a millisecond for
+ * 3 2^10 products.
  */
 export function exponentialChunk(working: number): number {
-  return working > LONG_BITS ? 6 : working > 320 ? 8 : 10;
+  return working > EXPONENTIAL_PLAN_BITS ? 8 : 10;
 }
 
 /** One term of a power series with rational coefficients, prepared for summation from the highest power down. */
