@@ -10,7 +10,7 @@ import type { Weight } from '../product/factor';
 import type { TheoryGroup } from '../theory/theory';
 import { type TheoryWeights, weightForms } from '../theory/weights';
 import { EITHER_SIGN } from './form';
-import { placedName, TRACE } from './symbol';
+import { placedName, symbolLatex, TRACE } from './symbol';
 
 /** A product over weights as it is printed: the product signs, and the weight they run over. */
 export interface PrintedWeights {
@@ -51,11 +51,24 @@ export function printWeights(
   half: boolean,
 ): readonly PrintedWeights[] {
   let printed: PrintedWeights[] = [NO_WEIGHT];
-  weights.parts.forEach(({ group, orbit }, k) => {
-    const patterns = half && k === 0 ? orbit.halfPatterns() : orbit.patterns();
+  const parts = weights.parts.map(({ group, orbit }, k) => ({
+    group,
+    patterns: half && k === 0 ? orbit.halfPatterns() : orbit.patterns(),
+  }));
+  const signed = parts.map(({ patterns }) => patterns.some(({ signs }) => signs !== 'none'));
+  const letters = freeLetters(groups);
+  parts.forEach(({ group, patterns }, k) => {
+    // Beside other signs those of which only some choices occur need names: `\pm` would not say which are bound.
+    const beside = signed.some((other, j) => other && j !== k);
     printed = printed.flatMap((before) =>
       patterns.map((pattern) => {
-        const part = printPattern(groups[group] as TheoryGroup, group, pattern);
+        const bound = pattern.signs === 'even' || pattern.signs === 'odd';
+        const part = printPattern(
+          groups[group] as TheoryGroup,
+          group,
+          pattern,
+          beside && bound ? (letters[k % letters.length] ?? null) : null,
+        );
         return {
           indices: before.indices + part.indices,
           choices: joinChoices(before.choices, part.choices),
@@ -68,6 +81,14 @@ export function printWeights(
     );
   });
   return printed;
+}
+
+/** Letters for signs with names, those of coordinates left out. */
+const SIGN_LETTERS: readonly string[] = ['epsilon', 'eta', 'kappa', 'iota', 'chi'];
+
+function freeLetters(groups: readonly TheoryGroup[]): string[] {
+  const taken = new Set(groups.flatMap((group) => [stemOf(group), fluxStem(group)]));
+  return SIGN_LETTERS.filter((letter) => !taken.has(letter));
 }
 
 /** Sums of a weight of each part, those of the second part changing fastest. */
@@ -93,22 +114,24 @@ function joinChoices(a: string, b: string): string {
 
 const PLUS_MINUS = '\\prod_{\\pm}';
 
-function printPattern(group: TheoryGroup, place: number, pattern: IndexPattern): PrintedWeights {
+/** `sign`: the letter of its signs where they have names. */
+function printPattern(group: TheoryGroup, place: number, pattern: IndexPattern, sign: string | null): PrintedWeights {
   const letters = LETTERS[place % LETTERS.length] as string;
   const letter = new Map(pattern.indices.map(({ name }, k) => [name, letters.charAt(k)]));
   // Listed when first asked for.
   let vectors: WeightVectors | null = null;
   const sum = (stem: string): Form =>
     Form.sum(
-      pattern.terms.map((term) => {
+      pattern.terms.map((term, k) => {
         const symbol = termSymbol(group, place, term, letter, stem);
-        const signed = term.sign === 'either' ? symbol.mul(Form.symbol(EITHER_SIGN)) : symbol;
+        const named = sign === null ? EITHER_SIGN : placedName(place, `${sign}${k + 1}`);
+        const signed = term.sign === 'either' ? symbol.mul(Form.symbol(named)) : symbol;
         return signed.scale(term.coefficient);
       }),
     );
   return {
     indices: indexSigns(group, pattern, letter),
-    choices: signChoices(pattern),
+    choices: sign === null ? signChoices(pattern) : namedChoices(pattern, sign),
     weight: sum(stemOf(group)),
     flux: group.role === 'gauge' ? sum(fluxStem(group)) : Form.zero,
     size: pattern.size,
@@ -182,6 +205,12 @@ function relationText(
     if (range !== null && chains.length === 0) parts.push(`${range.from}\\ldots ${range.to}`);
   }
   return parts.join(';\\,');
+}
+
+/** `\\prod_{\\epsilon_k=\\pm1,\\,\\epsilon_1\\epsilon_2=1}`. */
+function namedChoices({ terms, signs }: IndexPattern, sign: string): string {
+  const names = terms.flatMap((term, k) => (term.sign === 'either' ? [symbolLatex(`${sign}${k + 1}`)] : []));
+  return `\\prod_{${symbolLatex(sign)}_k=\\pm1,\\,${names.join('')}=${signs === 'even' ? '1' : '-1'}}`;
 }
 
 function signChoices(pattern: IndexPattern): string {

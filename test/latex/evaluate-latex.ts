@@ -148,6 +148,7 @@ class Reader {
 
   #choices(below: readonly string[], above: readonly string[] | null, start: number): Map<string, number>[] {
     if (below[0] === '\\pm') return this.#signChoices(below, start);
+    if (below[3] === '=' && below[4] === '\\pm') return namedSigns(below);
     if (above !== null) {
       const [index = '', , from] = below;
       return span(Number(from), Number(above.join(''))).map((value) => new Map([[index, value]]));
@@ -398,6 +399,11 @@ class Reader {
     if (token === '\\mathrm') stem = this.#group().join('');
     while (this.#peek() === "'") stem += this.#take();
     if (stem === 'Q') return real(2 * this.#halfQ);
+    const sign = scope.get(`${stem}${this.#tokens[this.#at + 1] ?? ''}`);
+    if (this.#peek() === '_' && sign !== undefined) {
+      this.#at += 2;
+      return real(sign);
+    }
     const values = this.#meaning.values[stem] ?? (stem === 'b' ? this.#meaning.b : undefined);
     if (values === undefined) throw new Error(`No value of ${stem} at ${this.rest}`);
     if (this.#peek() !== '_') {
@@ -415,6 +421,19 @@ class Reader {
 
 function hyperbolic(x: Complex, sign: 1 | -1): Complex {
   return scale(add(exp(x), scale(exp(scale(x, -1)), sign)), 0.5);
+}
+
+/** `\epsilon_k=\pm1,\,\epsilon_1\epsilon_2=-1`: all signs with that product, under the names `\epsilon1`, .... */
+function namedSigns(below: readonly string[]): Map<string, number>[] {
+  const letter = below[0] as string;
+  const bound = below.slice(below.indexOf('\\,') + 1);
+  const names = bound.flatMap((token, k) => (token === letter ? [`${letter}${bound[k + 2]}`] : []));
+  const product = bound.includes('-') ? -1 : 1;
+  return span(0, 2 ** names.length - 1).flatMap((bits) => {
+    const signs = names.map((_, k): number => ((bits >> k) & 1 ? -1 : 1));
+    if (signs.reduce((all, sign) => all * sign, 1) !== product) return [];
+    return [new Map(names.map((name, k) => [name, signs[k] as number]))];
+  });
 }
 
 function isSign(token: string): boolean {
