@@ -75,7 +75,7 @@ export function stirlingAt(z: FixedComplex, bits: number): Estimate {
   const series = stirlingSeries(z, bits);
   const half = { re: z.re - (1n << BigInt(bits - 1)), im: z.im };
   const log = z.im === 0n ? { re: logFixed(z.re, bits), im: 0n } : logComplex(z, bits);
-  const lead = multiplyComplex(half, log, bits);
+  const lead = z.im === 0n ? { re: (half.re * log.re) >> BigInt(bits), im: 0n } : multiplyComplex(half, log, bits);
   const size = Math.hypot(numberFromFixed(z.re, bits), numberFromFixed(z.im, bits));
   return {
     value: { re: lead.re - z.re + series.value.re, im: lead.im - z.im + series.value.im },

@@ -1,12 +1,44 @@
+import type { DoubleComplex } from '../arithmetic/double-complex';
 import { absolute, bitLength, numberFromFixed } from '../arithmetic/fixed';
 import { atan2Fixed } from '../arithmetic/fixed-atan';
 import { type FixedComplex, logModulus, multiplyComplex, squareComplex } from '../arithmetic/fixed-complex';
 import { piFixed } from '../arithmetic/fixed-constants';
 import { logScaled } from '../arithmetic/fixed-log';
+import { memoiseBounded } from '../arithmetic/memo';
 import type { Estimate } from './euler-maclaurin';
 
 /** Relative units that one long product costs: both parts are cut, and the modulus is above 2^(-1/2) up to 2^-30. */
 const CUT = 2.01;
+
+/** The constants of two pairs of factors, see multiplyRising: c_k + c_l, and c_k c_l with the product's bits. */
+interface Group {
+  readonly middle: bigint;
+  readonly rest: bigint;
+  readonly sum: number;
+}
+
+interface Pairing {
+  readonly pairs: number;
+  readonly groups: readonly Group[];
+  /** c_k of the pair that is left over. */
+  readonly left: bigint | null;
+}
+
+/** More than any count of bits, so that n PRECISIONS + bits tells both. */
+const PRECISIONS = 2 ** 20;
+
+const pairing = memoiseBounded(64, (key: number): Pairing => {
+  const [n, bits] = [Math.floor(key / PRECISIONS), key % PRECISIONS];
+  const unit = BigInt(bits);
+  const pairs = Math.floor(n / 2);
+  const constant = (k: number): number => k * (n - 1 - k);
+  const groups = Array.from({ length: Math.floor(pairs / 2) }, (_, i): Group => {
+    const [first, second] = [constant(2 * i), constant(2 * i + 1)];
+    const rest = (BigInt(first) * BigInt(second)) << unit;
+    return { middle: BigInt(first + second), rest, sum: first + second };
+  });
+  return { pairs, groups, left: pairs % 2 === 1 ? BigInt(constant(pairs - 1)) << unit : null };
+});
 
 /**
  * A product of numbers as mantissa 2^exponent, |mantissa| about 1, with the sum of their principal arguments in doubles
@@ -45,32 +77,34 @@ export class RisingProduct {
       return;
     }
     this.addAngles(rough.re, rough.im, n);
-    this.multiplyPairs(z, n, (k) => Math.hypot(rough.re + k, rough.im));
+    this.multiplyPairs(z, rough, n);
   }
 
   /** All moduli are 1/2 at least, up to rounding. */
-  private multiplyPairs(z: FixedComplex, n: number, modulus: (k: number) => number): void {
-    const unit = BigInt(this.bits);
-    const pairs = Math.floor(n / 2);
-    if (n % 2 === 1) this.multiply({ re: z.re + (BigInt(pairs) << unit), im: z.im }, modulus(pairs), 0);
+  private multiplyPairs(z: FixedComplex, rough: DoubleComplex, n: number): void {
+    const { bits } = this;
+    const unit = BigInt(bits);
+    const norm = (k: number): number => (rough.re + k) ** 2 + rough.im ** 2;
+    const { pairs, groups, left } = pairing(n * PRECISIONS + bits);
+    if (n % 2 === 1) this.multiply({ re: z.re + (BigInt(pairs) << unit), im: z.im }, Math.sqrt(norm(pairs)), 0);
     if (pairs === 0) return;
-    const w = multiplyComplex(z, { re: z.re + (BigInt(n - 1) << unit), im: z.im }, this.bits);
-    const square = squareComplex(w, this.bits);
+    const end = z.re + (BigInt(n - 1) << unit);
+    const real = z.im === 0n;
+    const w = real ? { re: (z.re * end) >> unit, im: 0n } : multiplyComplex(z, { re: end, im: z.im }, bits);
+    const square = real ? { re: (w.re * w.re) >> unit, im: 0n } : squareComplex(w, bits);
     // w errs by up to sqrt 2 units, its square by twice |w| that, and sqrt 2 for its own cut.
     const wError = 1.42;
-    const squareError = 2.84 * modulus(0) * modulus(n - 1) + 3;
-    let k = 0;
-    for (; k + 1 < pairs; k += 2) {
-      const last = n - 1 - k;
-      const [first, second] = [k * last, (k + 1) * (last - 1)];
-      const middle = BigInt(first + second);
-      const re = square.re + middle * w.re + (BigInt(first * second) << unit);
-      const size = modulus(k) * modulus(last) * modulus(k + 1) * modulus(last - 1);
-      this.multiply({ re, im: square.im + middle * w.im }, size, squareError + (first + second) * wError);
-    }
-    if (k < pairs) {
-      const last = n - 1 - k;
-      this.multiply({ re: w.re + (BigInt(k * last) << unit), im: w.im }, modulus(k) * modulus(last), wError);
+    const squareError = 2.84 * Math.sqrt(norm(0) * norm(n - 1)) + 3;
+    groups.forEach(({ middle, rest, sum }, i) => {
+      const [k, last] = [2 * i, n - 1 - 2 * i];
+      const re = square.re + middle * w.re + rest;
+      const im = real ? 0n : square.im + middle * w.im;
+      const size = Math.sqrt(norm(k) * norm(last) * norm(k + 1) * norm(last - 1));
+      this.multiply({ re, im }, size, squareError + sum * wError);
+    });
+    if (left !== null) {
+      const k = pairs - 1;
+      this.multiply({ re: w.re + left, im: w.im }, Math.sqrt(norm(k) * norm(n - 1 - k)), wError);
     }
   }
 
