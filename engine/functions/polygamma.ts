@@ -1,5 +1,6 @@
 import { addBalls, type Ball, exactBall, logBall, multiplyBalls, negateBall, subtractBalls } from '../arithmetic/ball';
 import { numberFromFixed } from '../arithmetic/fixed';
+import { divideComplex, integerPowerComplex, oneComplex } from '../arithmetic/fixed-complex';
 import { Rational } from '../exact/rational';
 import { bernoulliNumber } from './bernoulli';
 import {
@@ -15,6 +16,7 @@ import {
 import { stepsToFarPoint, ulpsOf } from './euler-maclaurin';
 import { factorial } from './factorial';
 import { hurwitzZeta } from './hurwitz-zeta';
+import { type Integrand, SECH_BITS, sechIntegral, stepsToRight } from './sech-quadrature';
 import type { ExactParameter } from './special-function';
 import type { FunctionValue, ValueFunction } from './value-function';
 
@@ -28,8 +30,11 @@ export const digamma: ValueFunction = {
   most: 1,
   definition: '\\psi(z)=\\Gamma^{\\prime}(z)/\\Gamma(z)',
   evaluate: ([z], bits) => polygammaValue(0, z as ExactParameter, bits),
-  crossCheck: ([z], bits) => ({ route: 'duplication law', value: byDuplication(0, z as ExactParameter, bits) }),
-  sources: [{ key: 'DLMF-5', text: 'NIST Digital Library of Mathematical Functions, 5.5, 5.11, 5.15' }],
+  crossCheck: ([z], bits) => second(0, z as ExactParameter, bits),
+  sources: [
+    { key: 'DLMF-5', text: 'NIST Digital Library of Mathematical Functions, 5.5, 5.11, 5.15' },
+    { key: 'Johansson-Blagouchine-2019', text: 'F. Johansson, Ia. V. Blagouchine, arXiv:1804.01679 (2018), (5)' },
+  ],
 };
 
 /**
@@ -46,11 +51,49 @@ export const polygamma: ValueFunction = {
   crossCheck: ([n, z], bits) => {
     const order = wholeNumber(n as ExactParameter);
     if (order === null || order < 0 || order > LARGEST_ORDER) return null;
-    if (order === 0) return { route: 'duplication law', value: byDuplication(0, z as ExactParameter, bits) };
-    return { route: 'Hurwitz zeta function', value: byHurwitz(order, z as ExactParameter, bits) };
+    return second(order, z as ExactParameter, bits);
   },
   sources: digamma.sources,
 };
+
+/** Orders up to which the integral serves as the second route. */
+const INTEGRAL_ORDER = 40;
+
+/** The integral over the line Re w = Re z - 1/2; for many digits and high orders laws that lead back to the series. */
+function second(order: number, z: ExactParameter, bits: number): ReturnType<ValueFunction['crossCheck']> {
+  if (bits <= SECH_BITS && order <= INTEGRAL_ORDER) {
+    const value = refusal(z) ?? enclosed(bits, (precision) => byIntegral(order, argumentBall(z, precision), precision));
+    return { route: 'integral against 1/cosh^2', value };
+  }
+  if (order === 0) return { route: 'duplication law', value: byDuplication(0, z, bits) };
+  return { route: 'Hurwitz zeta function', value: byHurwitz(order, z, bits) };
+}
+
+/**
+ * psi(a) = (pi/2) int log w/cosh^2(pi v) dv, w = a - 1/2 + iv, and its derivatives, with steps
+ * psi^(n)(z) = psi^(n)(z + 1) - (-1)^n n! z^{-n-1} (DLMF 5.15.5) to Re a >= 2. Null where a step meets a pole.
+ */
+function byIntegral(order: number, z: Ball, precision: number): Ball | null {
+  const steps = stepsToRight(z);
+  const wide = precision + 2 * order + 32;
+  let sum = exactBall(0n);
+  for (let k = 0; k < steps; k++) {
+    const term = inversePower(addBalls(z, exactBall(BigInt(k)), wide), order + 1, wide);
+    if (term === null) return null;
+    sum = addBalls(sum, term, wide);
+  }
+  const far = addBalls(z, exactBall(BigInt(steps)), wide + 32);
+  const power: Integrand = (w, log, bits) =>
+    order === 0 ? log : integerPowerComplex(divideComplex(oneComplex(bits), w, bits), order, bits);
+  // |psi^(n+1)| <= (n + 1)! (2^-n + ...) to the right of 2, without (n - 1)!.
+  const integral = sechIntegral(far, power, 16, 4 * (order + 1) ** 2, wide);
+  if (order === 0) return subtractBalls(integral, sum, wide);
+  const scaled = multiplyBalls(integral, rationalBall(factorial(order - 1), wide), wide);
+  const stepped = multiplyBalls(sum, rationalBall(factorial(order), wide), wide);
+  const total = addBalls(scaled, stepped, wide);
+  // (-1)^{n-1} for the integral, -(-1)^n for the steps.
+  return order % 2 === 1 ? total : negateBall(total);
+}
 
 function withOrder(n: ExactParameter, value: (order: number) => FunctionValue): FunctionValue {
   const order = wholeNumber(n);

@@ -32,6 +32,7 @@ import {
   widened,
 } from './enclosure';
 import { factorial } from './factorial';
+import { LARGEST_DERIVATIVE, polylogarithmByZetaDerivatives } from './polylogarithm-by-zeta';
 import { polylogarithm as insideDisc } from './polylogarithm-precise';
 import type { ExactParameter } from './special-function';
 import type { FunctionValue, ValueFunction } from './value-function';
@@ -52,8 +53,7 @@ export const polylogarithm: ValueFunction = {
   crossCheck: ([n, z], bits) => {
     const order = wholeNumber(n as ExactParameter);
     if (order === null || Math.abs(order) > LARGEST_ORDER) return null;
-    const route = order > 0 ? 'duplication law' : 'Stirling numbers';
-    const compute = order > 0 ? byDuplication : byStirlingNumbers;
+    const [route, compute] = secondRoute(order);
     return { route, value: value(n as ExactParameter, z as ExactParameter, bits, compute) };
   },
   sources: [
@@ -64,6 +64,12 @@ export const polylogarithm: ValueFunction = {
 
 type Compute = (n: number, z: Ball, precision: number) => Ball | null;
 
+function secondRoute(order: number): readonly [string, Compute] {
+  if (order <= 0) return ['Stirling numbers', byStirlingNumbers];
+  if (order === 1 || order > LARGEST_DERIVATIVE) return ['duplication law', byDuplication];
+  return ['derivatives of the zeta function', polylogarithmByZetaDerivatives];
+}
+
 function value(n: ExactParameter, z: ExactParameter, bits: number, compute: Compute): FunctionValue {
   const order = wholeNumber(n);
   if (order === null || Math.abs(order) > LARGEST_ORDER) {
@@ -71,6 +77,8 @@ function value(n: ExactParameter, z: ExactParameter, bits: number, compute: Comp
   }
   if (order <= 1 && wholeNumber(z) === 1) return { kind: 'pole' };
   if (wholeNumber(z) === 0) return exactZero;
+  // Eulerian polynomials of even order vanish at -1 by symmetry.
+  if (order < 0 && order % 2 === 0 && wholeNumber(z) === -1) return exactZero;
   return enclosed(bits, (precision) => {
     const point = argumentBall(z, precision);
     // Across the cut the value jumps: the side must be known.

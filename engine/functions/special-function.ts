@@ -35,6 +35,8 @@ export interface Complex {
  */
 export interface ExactParameter {
   readonly square: Rational | null;
+  /** The parameter over pi where that is known to be rational. */
+  readonly overPi?: Rational | null;
   /** Value with `bits` fraction bits, within one unit in the last place. */
   readonly value: (bits: number) => FixedComplex;
   readonly approx: Complex;

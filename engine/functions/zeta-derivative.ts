@@ -4,8 +4,10 @@ import { Rational } from '../exact/rational';
 import { bernoulliNumber } from './bernoulli';
 import { argumentBall, enclosed, halfBall, ln2Ball, rationalBall, wholeNumber } from './enclosure';
 import { hurwitzZetaDerivative } from './hurwitz-derivative';
+import { SECH_BITS } from './sech-quadrature';
 import type { ExactParameter } from './special-function';
 import type { FunctionValue, ValueFunction } from './value-function';
+import { derivativeByIntegral } from './zeta-derivative-integral';
 
 /** Larger orders, or numbers, would cancel thousands of bits. */
 const LARGEST_ORDER = 60;
@@ -34,13 +36,17 @@ export const zetaDerivative: ValueFunction = {
   crossCheck: ([k, a], bits) => {
     const [order, start] = [k as ExactParameter, a as ExactParameter];
     if (refusal(order, start)) return null;
-    const value = enclosed(bits, (precision) =>
-      byDuplication(wholeNumber(order) as number, argumentBall(start, precision), precision),
-    );
-    return { route: 'duplication law in a', value };
+    const k0 = wholeNumber(order) as number;
+    const integral = bits <= SECH_BITS && k0 <= INTEGRAL_ORDER;
+    const compute = integral ? derivativeByIntegral : byDuplication;
+    const value = enclosed(bits, (precision) => compute(k0, argumentBall(start, precision), precision));
+    return { route: integral ? 'integral against 1/cosh^2' : 'duplication law in a', value };
   },
   sources: [{ key: 'DLMF-25.11', text: 'NIST Digital Library of Mathematical Functions, 25.11' }],
 };
+
+/** Orders up to which the integral serves as the second route. */
+const INTEGRAL_ORDER = 20;
 
 function refusal(k: ExactParameter, a: ExactParameter): FunctionValue | null {
   const order = wholeNumber(k);

@@ -1,7 +1,7 @@
 import { addBalls, type Ball, expBall } from '../arithmetic/ball';
 import { formDouble } from '../arithmetic/form-double';
 import { formFixed } from '../arithmetic/form-fixed';
-import type { Form } from '../exact/form';
+import { Form } from '../exact/form';
 import type { ExactParameter, FunctionName, PreciseLog } from '../functions/special-function';
 import { functions } from '../functions/table';
 import { exactOrder } from '../product/divisor';
@@ -173,6 +173,7 @@ export function exactParameter(form: Form): ExactParameter {
   const approx = formDouble(form, () => null) ?? { re: Number.NaN, im: Number.NaN };
   return {
     square: form.mul(form).toRational(),
+    overPi: form.div(Form.pi).toRational(),
     value: (bits) => formFixed(form, bits) ?? { re: 0n, im: 0n },
     approx,
   };

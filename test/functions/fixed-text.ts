@@ -3,7 +3,7 @@ import type { FixedComplex } from '../../engine/arithmetic/fixed-complex';
 import { piFixed } from '../../engine/arithmetic/fixed-constants';
 import { formDouble } from '../../engine/arithmetic/form-double';
 import { formFixed } from '../../engine/arithmetic/form-fixed';
-import type { Form } from '../../engine/exact/form';
+import { Form } from '../../engine/exact/form';
 import { Rational } from '../../engine/exact/rational';
 import type { ExactParameter, PreciseLog } from '../../engine/functions/special-function';
 
@@ -23,6 +23,7 @@ export function fixedComplex(re: number, im: number, bits: number): FixedComplex
 export function exactParameter(form: Form): ExactParameter {
   return {
     square: form.mul(form).toRational(),
+    overPi: form.div(Form.pi).toRational(),
     value: (bits) => formFixed(form, bits) ?? { re: 0n, im: 0n },
     approx: formDouble(form, () => null) ?? { re: Number.NaN, im: Number.NaN },
   };

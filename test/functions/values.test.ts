@@ -69,9 +69,22 @@ describe('where there is no value', () => {
     const exact = { kind: 'value', of: 'value', re: 0n, im: 0n, error: 0n };
     expect(zero('riemannzeta', '-4')).toEqual(exact);
     expect(zero('barnesg', '-2')).toEqual(exact);
+    expect(zero('polylog', '-2', '-1')).toEqual(exact);
+    expect(zero('polylog', '-6', '-1')).toEqual(exact);
+    expect(kind('polylog', '-3', '-1')).toBe('value');
     expect(zero('clausen', '4', '0')).toEqual(exact);
     expect(zero('qpochhammer', '1', '1/3')).toEqual(exact);
     expect(zero('qpochhammer', '9/4', '-2/3')).toEqual(exact);
+  });
+
+  test('Clausen functions at multiples of pi', () => {
+    const at = (order: number, angle: Form): FunctionValue =>
+      valueFunctions.clausen.evaluate([exactParameter(Form.ratio(order, 1)), exactParameter(angle)], 100);
+    const exact = { kind: 'value', of: 'value', re: 0n, im: 0n, error: 0n };
+    expect(at(2, Form.pi)).toEqual(exact);
+    expect(at(4, Form.pi.scale(-6))).toEqual(exact);
+    expect(at(1, Form.pi.scale(2)).kind).toBe('pole');
+    expect(at(3, Form.pi).kind).toBe('value');
   });
 
   test('arguments outside the domain', () => {
