@@ -60,10 +60,21 @@ describe('in words', () => {
     expect(verdict(levels, theoryOf([...groups, 'mixed G H = 1/2', ...matter]))).toBe('holds');
   });
 
-  test('a half-integral mixed level with a background is left open', () => {
+  // Closset et al., arXiv:1206.5218: levels of gauge and background fields together obey the anomaly rule.
+  test('a half-integral mixed level with a background fails', () => {
     const lines = ['gauge G = U(1), level 1/2', 'flavor A = U(1)', 'matter G A R', 'chiral q 1 1 1/2'];
-    expect(verdict(levels, theoryOf(lines))).toBe('unknown');
+    expect(verdict(levels, theoryOf(lines))).toBe('fails');
+    expect(says(levels, theoryOf(lines))[1]).toContain("k_{GG'}=-\\frac{1}{2}$ or $\\frac{1}{2}$ would do");
     expect(verdict(levels, theoryOf([...lines, 'mixed A G = 1/2']))).toBe('holds');
+    // The same theory with the charge of q moved from A to the background's mixing with G.
+    const moved = [
+      'gauge G = U(1), level 1/2',
+      'flavor A = U(1)',
+      'mixed A G = -1/2',
+      'matter G A R',
+      'chiral q 1 0 1/2',
+    ];
+    expect(verdict(levels, theoryOf(moved))).toBe('fails');
   });
 
   test('hypers never shift a level by a half, half-hypers count as one chiral', () => {

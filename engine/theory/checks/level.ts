@@ -9,6 +9,10 @@ const SOURCE =
   'A. N. Redlich, Phys. Rev. D 29 (1984) 2366; A. J. Niemi, G. W. Semenoff, Phys. Rev. Lett. 51 (1983) 2077; ' +
   'O. Aharony, A. Hanany, K. Intriligator, N. Seiberg, M. J. Strassler, hep-th/9703110 (1997)';
 
+const BACKGROUND_SOURCE =
+  'C. Closset, T. T. Dumitrescu, G. Festuccia, Z. Komargodski, N. Seiberg, arXiv:1206.5218 (2012), section 2; ' +
+  'K. Intriligator, N. Seiberg, arXiv:1305.1633 (2013)';
+
 /**
  * Invariance under large gauge transformations in three dimensions: levels, shifted by half of what the chirals
  * contribute, are integers on the cocharacter lattice. Gaugini contribute integers only. The conditions are necessary
@@ -57,10 +61,12 @@ function pairFinding(theory: Theory, i: number, j: number, test: LevelTest, prin
   const name = nameLatex(background.name, print);
   return {
     ...common,
-    verdict: 'unknown',
+    source: BACKGROUND_SOURCE,
+    verdict: 'fails',
     says:
-      `${lead}: $${equation(test)}$ is not an integer; the three-sphere itself does not mind, but a background of ` +
-      `$${name}$ with fluxes does: ${remedies(test)} would do, or charges shifted by gauge charges.`,
+      `${lead}: $${equation(test)}$ is not an integer; the integral over the three-sphere does not show it, but where ` +
+      `$${name}$ has a flux a large gauge transformation changes the sign: ${remedies(test)} would do. Adding gauge ` +
+      `charges to those of $${name}$ does not help, since it shifts the sum by an integer.`,
   };
 }
 
