@@ -1,5 +1,6 @@
 import { numberFromFixed, shiftRounded } from './fixed';
 import { ln2Fixed } from './fixed-constants';
+import { shortSeries, sumShortSeries } from './fixed-short-series';
 import {
   EXPONENTIAL_PLAN_BITS,
   exponentialChunk,
@@ -73,91 +74,19 @@ const exponentialPlan = memoiseBounded(16, (working: number) =>
   planSeries(exponentialTerms(working, 3 * exponentialChunk(working)), 1n, (k) => BigInt(k)),
 );
 
-/** One step of Horner's rule from the power n + 1 to n, with fewer bits the higher n is. */
-interface ShortStep {
-  /** 1/n! with the bits of this step. */
-  readonly coefficient: bigint;
-  /** Bits of the sum that comes from step n + 1. */
-  readonly shift: bigint;
-  /** Bits that this step goes without, as a number for comparing and as a big integer. */
-  readonly drop: number;
-  readonly down: bigint;
-}
+const exponentialSeries = memoiseBounded(16, (working: number) =>
+  shortSeries(working, 3 * exponentialChunk(working), 1, (n) => n),
+);
 
-/** Taylor series of exp at 0 <= y < 2^-reduction. */
-interface ShortSeries {
-  /** From the highest power down to the power 0. */
-  readonly steps: readonly ShortStep[];
-  /** 1/k!, 1/(k+1)!, ... as doubles, k the power after the first step's. */
-  readonly tail: readonly number[];
-  /** 2^tailBits; the tail is rounded to tailBits fraction bits, so that it is an exact double below 2^53. */
-  readonly tailScale: number;
-}
-
-/** Whole digits of big integers that the power n may go without: its error carries y^n < 2^(-reduction n), 6 bits to spare. */
-function droppedBits(n: number, reduction: number): number {
-  return 64 * Math.floor(Math.max(0, reduction * n - 6) / 64);
-}
-
-/**
- * From the power k on where 2^(-reduction k)/k! 2^-52 is below half a working ulp, the rest of the series
- * y^k (1/k! + y/(k+1)! + ...) is right with its bracket in doubles (each of its roundings is 2^-53 relative, and those of the
- * higher terms carry y < 2^-18), and with a y known to 2^-52 there.
- */
-const shortSeries = memoiseBounded(16, (working: number): ShortSeries => {
-  const reduction = 3 * exponentialChunk(working);
-  let first = 2;
-  let log2Factorial = 1;
-  while (reduction * first + log2Factorial + 52 < working + 1) log2Factorial += Math.log2(++first);
-  // A bracket below 2^53 in all; its bits fit under those of the step it goes into.
-  const tailBits = 52 + Math.floor(Math.min(log2Factorial, 900));
-  const steps: ShortStep[] = [];
-  let factorial = 1n;
-  for (let n = 0; n < first; n++) {
-    const drop = droppedBits(n, reduction);
-    const above = n + 1 < first ? working - droppedBits(n + 1, reduction) : tailBits;
-    const coefficient = (1n << BigInt(working - drop)) / factorial;
-    steps.unshift({ coefficient, shift: BigInt(above), drop, down: BigInt(drop) });
-    factorial *= BigInt(n + 1);
-  }
-  const tail: number[] = [];
-  for (let k = 1, value = 1; k < first + 4; k++) {
-    value /= k;
-    if (k >= first) tail.push(value);
-  }
-  return { steps, tail, tailScale: 2 ** tailBits };
-});
-
-/**
- * e^y for 0 <= y < 2^-(3 chunk), `rough` the same to 2^-52. Short: error below 4 ulps, namely 1 for the last shift, 1/2 for
- * the tail; the step n errs by 3 of its units (shift, coefficient, cut of y), which are 3/64 ulp or less in the end, of at most
- * 40 steps. Long: below 8 (6 of the plan).
- */
+/** e^y for 0 <= y < 2^-(3 chunk), `rough` the same to 2^-52; error below 8 ulps (4 of the short series, 6 of the plan). */
 function exponentialOfRest(y: bigint, rough: number, working: number): bigint {
-  if (working > EXPONENTIAL_PLAN_BITS) {
-    const plan = exponentialPlan(working);
-    return sumPlan(plan, planPowers(y, plan.block, working), working);
-  }
-  const { steps, tail, tailScale } = shortSeries(working);
-  let bracket = 0;
-  for (let k = tail.length - 1; k >= 0; k--) bracket = bracket * rough + (tail[k] as number);
-  let sum = BigInt(Math.round(bracket * tailScale));
-  let short = y;
-  let dropped = 0;
-  for (let k = 0; k < steps.length; k++) {
-    const { coefficient, shift, drop, down } = steps[k] as ShortStep;
-    if (drop !== dropped) {
-      short = drop === 0 ? y : y >> down;
-      dropped = drop;
-    }
-    sum = coefficient + ((short * sum) >> shift);
-  }
-  return sum;
+  if (working <= EXPONENTIAL_PLAN_BITS) return sumShortSeries(exponentialSeries(working), y, rough);
+  const plan = exponentialPlan(working);
+  return sumPlan(plan, planPowers(y, plan.block, working), working);
 }
 
 /**
- * e^r for 0 <= r < 1, both with `working` fraction bits (from workingBits). Error below 40 working ulps: the rest 8 (short:
- * 2), the factor near 1 of the third level adds 1 for its entry and 1 for the cut, the second likewise on top of 1.02 times
+ * e^r for 0 <= r < 1, both with `working` fraction bits (from workingBits). Error below 40 working ulps: the rest 8, the factor near 1 of the third level adds 1 for its entry and 1 for the cut, the second likewise on top of 1.02 times
  * that, the first e times that and 2 more: e (1.02 (8 + 2) + 2) + 3 < 37. For r <= ln 2 it is 27.
  */
 export function exponentialWorking(r: bigint, working: number): bigint {

@@ -1,5 +1,6 @@
 import { absolute, bitLength, numberFromFixed, shiftRounded } from './fixed';
 import { piFixed } from './fixed-constants';
+import { shortSeries, sumShortSeries } from './fixed-short-series';
 import { chunkBits, LONG_BITS, planPowers, planSeries, sumPlan, workingBits } from './fixed-working';
 import { memoiseBounded } from './memo';
 
@@ -19,20 +20,6 @@ interface TrigonometricTables {
   readonly chunk: number;
   /** (cos, sin)(i 2^-(chunk l)), l = 1, 2, 3. */
   readonly levels: readonly [readonly SinCos[], readonly SinCos[], readonly SinCos[]];
-  /** 1/(2k)! and 1/(2k+1)! with alternating signs, for Horner's scheme. */
-  readonly cosine: readonly bigint[];
-  readonly sine: readonly bigint[];
-}
-
-/** sum (-1)^k y^k / (first (first+1) ... ) coefficients 1/(2k + offset)! by one exact recurrence. */
-function seriesCoefficients(working: number, terms: number, offset: number): bigint[] {
-  const list: bigint[] = [];
-  let value = 1n << BigInt(working + 16);
-  for (let k = 0; k < terms; k++) {
-    list.push(k % 2 === 0 ? value >> 16n : -(value >> 16n));
-    value /= BigInt((2 * k + 1 + offset) * (2 * k + 2 + offset));
-  }
-  return list;
 }
 
 function rotationTable(working: number, place: number, count: number): SinCos[] {
@@ -57,8 +44,6 @@ function rotationTable(working: number, place: number, count: number): SinCos[] 
 const trigonometricTables = memoiseBounded(16, (working: number): TrigonometricTables => {
   const chunk = chunkBits(working);
   const count = 1 << chunk;
-  const terms = trigonometricTerms(working, 3 * chunk);
-  const long = working > LONG_BITS;
   return {
     chunk,
     levels: [
@@ -67,8 +52,6 @@ const trigonometricTables = memoiseBounded(16, (working: number): TrigonometricT
       rotationTable(working, 2 * chunk, count),
       rotationTable(working, 3 * chunk, count),
     ],
-    cosine: long ? [] : seriesCoefficients(working, terms, 0),
-    sine: long ? [] : seriesCoefficients(working, terms, 1),
   };
 });
 
@@ -80,8 +63,17 @@ const trigonometricPlans = memoiseBounded(16, (working: number) => {
   };
 });
 
-/** cos y and sin y for 0 <= y < 2^-(3 chunk); error below 8 ulps. */
-function sinCosOfRest(y: bigint, working: number, tables: TrigonometricTables): SinCos {
+/** cos and sin(y)/y in y^2. */
+const trigonometricSeries = memoiseBounded(16, (working: number) => {
+  const reduction = 6 * chunkBits(working);
+  return {
+    cosine: shortSeries(working, reduction, -1, (n) => (2 * n - 1) * (2 * n)),
+    sine: shortSeries(working, reduction, -1, (n) => 2 * n * (2 * n + 1)),
+  };
+});
+
+/** cos y and sin y for 0 <= y < 2^-(3 chunk); error below 8 ulps (6 of a plan, 4 of a short series, 2 for y^2 and y). */
+function sinCosOfRest(y: bigint, working: number): SinCos {
   const shift = BigInt(working);
   const square = (y * y) >> shift;
   if (working > LONG_BITS) {
@@ -89,14 +81,9 @@ function sinCosOfRest(y: bigint, working: number, tables: TrigonometricTables): 
     const powers = planPowers(square, cosine.block, working);
     return { cos: sumPlan(cosine, powers, working), sin: (y * sumPlan(sine, powers, working)) >> shift };
   }
-  const { cosine, sine } = tables;
-  let c = 0n;
-  let s = 0n;
-  for (let k = cosine.length - 1; k >= 0; k--) {
-    c = (cosine[k] as bigint) + ((square * c) >> shift);
-    s = (sine[k] as bigint) + ((square * s) >> shift);
-  }
-  return { cos: c, sin: (y * s) >> shift };
+  const { cosine, sine } = trigonometricSeries(working);
+  const rough = numberFromFixed(square, working);
+  return { cos: sumShortSeries(cosine, square, rough), sin: (y * sumShortSeries(sine, square, rough)) >> shift };
 }
 
 /**
@@ -143,7 +130,7 @@ function sinCosReduced(r: bigint, working: number): SinCos {
   const a = levels[0][top >> (2 * chunk)] as SinCos;
   const b = levels[1][(top >> chunk) & mask] as SinCos;
   const c = levels[2][top & mask] as SinCos;
-  const d = sinCosOfRest(BigInt.asUintN(working - 3 * chunk, r), working, tables);
+  const d = sinCosOfRest(BigInt.asUintN(working - 3 * chunk, r), working);
   const abCos = (a.cos * b.cos - a.sin * b.sin) >> shift;
   const abSin = (a.cos * b.sin + a.sin * b.cos) >> shift;
   const cdCos = (c.cos * d.cos - c.sin * d.sin) >> shift;
