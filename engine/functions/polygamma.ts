@@ -1,6 +1,6 @@
 import { addBalls, type Ball, exactBall, logBall, multiplyBalls, negateBall, subtractBalls } from '../arithmetic/ball';
 import { numberFromFixed } from '../arithmetic/fixed';
-import { divideComplex, integerPowerComplex, oneComplex } from '../arithmetic/fixed-complex';
+import { divideComplex, type FixedComplex, integerPowerComplex, oneComplex } from '../arithmetic/fixed-complex';
 import { Rational } from '../exact/rational';
 import { bernoulliNumber } from './bernoulli';
 import {
@@ -71,7 +71,7 @@ function second(order: number, z: ExactParameter, bits: number): ReturnType<Valu
 
 /**
  * psi(a) = (pi/2) int log w/cosh^2(pi v) dv, w = a - 1/2 + iv, and its derivatives, with steps
- * psi^(n)(z) = psi^(n)(z + 1) - (-1)^n n! z^{-n-1} (DLMF 5.15.5) to Re a >= 2. Null where a step meets a pole.
+ * psi^(n)(z) = psi^(n)(z + 1) - (-1)^n n! z^{-n-1} (DLMF 5.15.5) far enough to the right. Null where a step meets a pole.
  */
 function byIntegral(order: number, z: Ball, precision: number): Ball | null {
   const steps = stepsToRight(z);
@@ -83,10 +83,18 @@ function byIntegral(order: number, z: Ball, precision: number): Ball | null {
     sum = addBalls(sum, term, wide);
   }
   const far = addBalls(z, exactBall(BigInt(steps)), wide + 32);
-  const power: Integrand = (w, log, bits) =>
-    order === 0 ? log : integerPowerComplex(divideComplex(oneComplex(bits), w, bits), order, bits);
-  // |psi^(n+1)| <= (n + 1)! (2^-n + ...) to the right of 2, without (n - 1)!.
-  const integral = sechIntegral(far, power, 16, 4 * (order + 1) ** 2, wide);
+  const inverse = (w: FixedComplex, n: number, bits: number): FixedComplex =>
+    integerPowerComplex(divideComplex(oneComplex(bits), w, bits), n, bits);
+  const integrand: Integrand = {
+    value: (w, log, bits) => (order === 0 ? log : inverse(w, order, bits)),
+    derivative: (w, _log, bits) => {
+      const power = inverse(w, order + 1, bits);
+      const factor = order === 0 ? 1n : BigInt(-order);
+      return { re: factor * power.re, im: factor * power.im };
+    },
+  };
+  // |psi^(n+1)| <= (n + 1)! 2^-n to the right of 2, without (n - 1)!.
+  const integral = sechIntegral(far, integrand, 16, 4 * (order + 1) ** 2, wide);
   if (order === 0) return subtractBalls(integral, sum, wide);
   const scaled = multiplyBalls(integral, rationalBall(factorial(order - 1), wide), wide);
   const stepped = multiplyBalls(sum, rationalBall(factorial(order), wide), wide);

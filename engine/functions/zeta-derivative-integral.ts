@@ -13,14 +13,14 @@ import { piBall } from './enclosure';
 import { sechIntegral, stepsToRight } from './sech-quadrature';
 
 /**
- * zeta'(-k, a) without Euler-Maclaurin: steps to Re a >= 2, and there, from zeta(s, a) = (pi/2) int w^{1-s}/(s - 1)/cosh^2(pi v) dv
+ * zeta'(-k, a) without Euler-Maclaurin: steps to the right, and there, from zeta(s, a) = (pi/2) int w^{1-s}/(s - 1)/cosh^2(pi v) dv
  * with w = a - 1/2 + iv (see `sechIntegral`),
  *   zeta'(-k, a) = (pi/2) int w^{k+1} (log w - 1/(k+1))/(k+1)/cosh^2(pi v) dv.
  * Logarithms as in `derivativeBall`. Null where a step meets 0.
  */
 export function derivativeByIntegral(k: number, a: Ball, precision: number): Ball | null {
   const steps = stepsToRight(a);
-  const size = Math.hypot(numberFromFixed(a.re, a.bits), numberFromFixed(a.im, a.bits)) + 3;
+  const size = Math.hypot(numberFromFixed(a.re, a.bits), numberFromFixed(a.im, a.bits)) + 15;
   const growth = Math.ceil((k + 1) * Math.log2(size + precision / 8) + 8);
   const wide = precision + growth + 16;
   let sum = exactBall(0n);
@@ -37,10 +37,13 @@ export function derivativeByIntegral(k: number, a: Ball, precision: number): Bal
   const slope = (k + 1) * size ** k * (Math.log(size) + 5) + Math.log(size) + 5;
   const integral = sechIntegral(
     far,
-    (w, log, bits) => {
-      const bracket = { re: log.re - (1n << BigInt(bits)) / order, im: log.im };
-      const value = multiplyComplex(integerPowerComplex(w, k + 1, bits), bracket, bits);
-      return { re: value.re / order, im: value.im / order };
+    {
+      value: (w, log, bits) => {
+        const bracket = { re: log.re - (1n << BigInt(bits)) / order, im: log.im };
+        const value = multiplyComplex(integerPowerComplex(w, k + 1, bits), bracket, bits);
+        return { re: value.re / order, im: value.im / order };
+      },
+      derivative: (w, log, bits) => multiplyComplex(integerPowerComplex(w, k, bits), log, bits),
     },
     growth,
     slope,
