@@ -26,7 +26,10 @@ export function sumLatex(form: Form): string {
 function joined(parts: readonly string[]): string {
   return parts
     .filter((part) => part !== '')
-    .reduce((text, part) => (text === '' || part.startsWith('-') ? text + part : `${text}+${part}`), '');
+    .reduce(
+      (text, part) => (text === '' || /^(?:-|\\[pm][pm](?![a-z]))/.test(part) ? text + part : `${text}+${part}`),
+      '',
+    );
 }
 
 /** A polynomial in an index, highest power first: n^2+2n+M^2, n+2-\Delta. */
