@@ -16,14 +16,14 @@ import { rationalFixed } from '../arithmetic/form-fixed';
 import { Form } from '../exact/form';
 import { Rational } from '../exact/rational';
 import { type Estimate, farPoint } from '../functions/euler-maclaurin';
-import { scaledHurwitz, scaledHurwitzDerivative } from '../functions/hurwitz-derivative';
 import { rootBound } from './complex-roots';
 import type { Run } from './expansion';
 import { fixedCoefficients, fixedMultiplicity } from './explicit-sum';
-import type { Partial } from './hurwitz-tail';
-import { MAXIMAL_STEPS, rounded, type SumFailure, scaledError } from './linear-sum';
+import { hurwitzTail, type Partial } from './hurwitz-tail';
+import { MAXIMAL_STEPS, rounded, type SumFailure } from './linear-sum';
 import { degreeOf, type Polynomial, shiftPolynomial } from './polynomial';
 import { log2TotalWeight, type RisingPolynomial, risingPolynomial, sumOfLogarithms } from './power-product';
+import { zetaCombination } from './zeta-combination';
 
 /** The series in 1/W starts where the roots are this many times closer than W. */
 const SEPARATION = 4;
@@ -70,7 +70,7 @@ export function rootlessSum(
     Math.log2(1 + weight * degree * (Math.log(size) + 2)),
     rising === null ? 0 : log2TotalWeight(rising, steps),
   );
-  const guard = 24 + Math.ceil(log2Weight);
+  const guard = 36 + Math.ceil(log2Weight);
   const working = bits + guard;
   const below = explicitPart(q, multiplicity, rising, run.from, steps, working);
   const coefficients = { q: fixedCoefficients(inW, working), m: fixedCoefficients(expansion, working) };
@@ -148,28 +148,27 @@ function seriesPart(
   const terms =
     m.length + (ratio === 0 ? 1 : Math.ceil((working + heaviest + Math.log2(2 * degree)) / -Math.log2(ratio)));
   const e = scaledExpansion(q, w, terms, working);
-  const zeta = zetaTable(point, logarithm, m.length, terms, ratio, heaviest);
-  let value = zeroComplex;
-  let error = 1;
+  const first = 2 - m.length;
+  const combined = Array.from({ length: terms - first + 1 }, (_, index) =>
+    scaledM.reduce((sum, c, k) => {
+      const coefficientOfW = e[first + index + k - 1];
+      return coefficientOfW === undefined ? sum : addComplex(sum, multiplyComplex(c, coefficientOfW, working));
+    }, zeroComplex),
+  );
+  const zetas = zetaCombination(point, combined, first, logarithm);
+  const derivatives = hurwitzTail(m, w, working);
+  let value = subtractComplex(zetas.value, scaleByInteger(derivatives.value, degree));
+  // The e_i are within 8 (i + 2) units, their products with the c_m W^m within one more.
+  const expansionError = e.reduce((sum, _, i) => sum + 8 * (i + 2) * (size + 1), 0);
+  const total = weights.reduce((sum, x) => sum + x + 1, 0);
+  let error = 1 + zetas.error + degree * derivatives.error + total * expansionError;
   let harmonic = Rational.zero;
   scaledM.forEach((c, k) => {
-    const log2Weight = Math.log2(weights[k] as number);
-    const derivative = scaledHurwitzDerivative(point, k, logarithm, log2Weight);
-    let bracket = scaleByInteger(derivative.value, -degree);
-    let inside = 0;
-    e.forEach((coefficientOfW, i) => {
-      const { value: z, error: slip } = zeta[i - k + m.length - 1] as Estimate;
-      bracket = addComplex(bracket, multiplyComplex(coefficientOfW, z, working));
-      inside += degree * scaledError(slip, (i + 1) * Math.log2(ratio)) + 8 * (i + 2) * (size + 1);
-    });
-    const middle = e[k] as FixedComplex;
-    const finite = finitePart(e, k, harmonic, middle, degree, working, prescription);
-    bracket = addComplex(bracket, multiplyComplex(finite, w, working));
+    const finite = finitePart(e, k, harmonic, e[k] as FixedComplex, degree, working, prescription);
     harmonic = harmonic.add(Rational.of(1, k + 1));
-    value = addComplex(value, multiplyComplex(c, bracket, working));
-    const height = numberFromFixed(absoluteComplex(bracket), working) + 1;
-    error += 4 * (k + 2) * ((weights[k] as number) + size ** k) * height + (weights[k] as number) * inside;
-    error += degree * scaledError(derivative.error, log2Weight);
+    value = addComplex(value, multiplyComplex(c, multiplyComplex(finite, w, working), working));
+    const height = numberFromFixed(absoluteComplex(finite), working) * size + 1;
+    error += 4 * (k + 2) * ((weights[k] as number) + size ** k) * height;
   });
   return { value, error };
 }
@@ -211,23 +210,6 @@ function scaledExpansion(q: readonly FixedComplex[], w: FixedComplex, terms: num
     e.push({ re: sum.re / BigInt(k), im: sum.im / BigInt(k) });
   }
   return e;
-}
-
-/** W^s zeta(s, W) for s = 2 - orders ... terms, the finite part at s = 1, each as precise as its weight asks for. */
-function zetaTable(
-  point: ReturnType<typeof farPoint>,
-  logarithm: FixedComplex,
-  orders: number,
-  terms: number,
-  ratio: number,
-  heaviest: number,
-): Estimate[] {
-  const table: Estimate[] = [];
-  for (let s = 2 - orders; s <= terms; s++) {
-    const decay = ratio === 0 ? 0 : Math.max(0, s) * Math.log2(ratio);
-    table.push(scaledHurwitz(point, s, logarithm, heaviest + decay));
-  }
-  return table;
 }
 
 function scaleByInteger(z: FixedComplex, by: number): FixedComplex {
