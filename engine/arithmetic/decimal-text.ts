@@ -1,6 +1,6 @@
 import Decimal from 'decimal.js';
 import type { Ball } from './ball';
-import { rescaleBall } from './ball';
+import { exactBall, integerPowerBall, multiplyBalls, rescaleBall } from './ball';
 import { absolute, bitLength, numberFromFixed } from './fixed';
 
 /**
@@ -43,9 +43,29 @@ export interface PrintedBall {
  * Values outside [1e-6, 1e21) are in scientific notation.
  */
 export function formatBall(ball: Ball, digits: number): PrintedBall {
-  let larger = absolute(ball.re);
-  if (larger < absolute(ball.im)) larger = absolute(ball.im);
+  const larger = largerPart(ball);
   if (larger === 0n && ball.error === 0n) return { re: '0', im: '0', error: '0' };
+  const exponent = decimalExponentAbove(larger > 0n ? larger : ball.error, ball.bits);
+  if (Math.abs(exponent) <= LARGEST_EXACT_EXPONENT) return formatAt(ball, larger, digits, 0);
+  // 10^-exponent to so many bits that its rounding is far below an ulp; exactly it would fill megabytes.
+  const precision = bitLength(larger) + bitLength(ball.error) + 64;
+  const power = integerPowerBall(exactBall(10n), -exponent, precision);
+  if (power === null) throw new RangeError('10 is not 0');
+  const scaled = multiplyBalls(ball, power, precision);
+  return formatAt(scaled, largerPart(scaled), digits, exponent);
+}
+
+function largerPart({ re, im }: Ball): bigint {
+  let larger = absolute(re);
+  if (larger < absolute(im)) larger = absolute(im);
+  return larger;
+}
+
+/** Decimal exponents up to which powers of ten are formed exactly. */
+const LARGEST_EXACT_EXPONENT = 3000;
+
+/** The ball times 10^exponent; `larger` is the larger part of the ball. */
+function formatAt(ball: Ball, larger: bigint, digits: number, exponent: number): PrintedBall {
   const places = [
     larger === 0n ? Number.NEGATIVE_INFINITY : decimalExponentAbove(larger, ball.bits) - digits,
     ball.error === 0n ? Number.NEGATIVE_INFINITY : decimalExponentAbove(2n * ball.error, ball.bits),
@@ -58,9 +78,9 @@ export function formatBall(ball: Ball, digits: number): PrintedBall {
   const y = roundToPlace(im, bits, place);
   const exact = error === 0n && x.slip === 0n && y.slip === 0n;
   return {
-    re: printInteger(x.rounded, place, exact),
-    im: printInteger(y.rounded, place, exact),
-    error: exact ? '0' : printBound(error + x.slip + y.slip, bits),
+    re: printInteger(x.rounded, place + exponent, exact),
+    im: printInteger(y.rounded, place + exponent, exact),
+    error: exact ? '0' : printBound(error + x.slip + y.slip, bits, exponent),
   };
 }
 
@@ -102,11 +122,11 @@ function printInteger(value: bigint, place: number, exact: boolean): string {
   return plain ? number.toFixed(-place) : plainExponent(number.toExponential(absolute(value).toString().length - 1));
 }
 
-/** value 2^-bits > 0 rounded up to one significant digit. */
-function printBound(value: bigint, bits: number): string {
+/** value 2^-bits 10^exponent > 0 rounded up to one significant digit. */
+function printBound(value: bigint, bits: number, exponent: number): string {
   const place = decimalExponentAbove(value, bits) - 1;
   const { numerator, denominator } = ratioAtPlace(value, bits, place);
-  return plainExponent(new Text(`${ceilingOf(numerator, denominator)}e${place}`).toString());
+  return plainExponent(new Text(`${ceilingOf(numerator, denominator)}e${place + exponent}`).toString());
 }
 
 /** decimal.js writes 1e+30; here it is 1e30. */

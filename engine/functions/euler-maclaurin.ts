@@ -131,7 +131,9 @@ export function bernoulliTail(
   for (let j = first; ; j++) {
     sum = addComplex(sum, scaleComplex(term, list[j - 1] ?? (j % 2 === 0 ? -beyond : beyond), listBits(bits)));
     const ratio = (2 * j + below) * (2 * j + below + 1);
-    const remainder = ratio === 0 ? Number.NEGATIVE_INFINITY : log2Term + (2 * j + below + 1) * point.log2Secant;
+    // Where the sum is finite (2j + below < 0) what is left is bounded by the term itself, which the cosine must not reduce.
+    const secants = Math.max(0, 2 * j + below + 1);
+    const remainder = ratio === 0 ? Number.NEGATIVE_INFINITY : log2Term + secants * point.log2Secant;
     if (remainder + weight < -bits || remainder > smallest) {
       return { value: sum, error: BigInt(3 * (j - first + 1)) + ulpsOf(Math.min(remainder, smallest), bits) };
     }

@@ -121,3 +121,16 @@ describe('balls as decimal text', () => {
     );
   });
 });
+
+// Source: the decimal conversion of integers that the platform has.
+test.each([20_000, -12_000])('2^%i, known to 150 bits', (power) => {
+  const ball: Ball = { re: 1n << 150n, im: 0n, bits: 150 - power, error: 1n };
+  const printed = formatBall(ball, 40);
+  // 2^-n = 5^n 10^-n.
+  const exact = (power > 0 ? 2n ** BigInt(power) : 5n ** BigInt(-power)).toString();
+  const exponent = exact.length - 1 + Math.min(0, power);
+  const [digits, shown] = printed.re.split('e');
+  expect(Number(shown)).toBe(exponent);
+  expect((digits as string).replace('.', '').slice(0, 38)).toBe(exact.slice(0, 38));
+  expect(printed.error.endsWith(`e${exponent - 39}`) || printed.error.endsWith(`e${exponent - 40}`)).toBe(true);
+});
