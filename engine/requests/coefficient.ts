@@ -6,7 +6,7 @@ import { formLatex } from '../latex/form';
 import { evaluateCoefficient } from '../numeric/coefficient';
 import type { SeriesOrder, Sphere } from '../spheres/sphere';
 import type { Theory } from '../theory/theory';
-import { agreedDigits } from './agreement';
+import { agreedDigits, agreement } from './agreement';
 import type { Analysis } from './analysis';
 import { type Answer, failure } from './answer';
 import { resolvePoint } from './point';
@@ -58,10 +58,7 @@ export function runCoefficient(
         digits,
         crossCheck:
           second?.kind === 'value'
-            ? {
-                route: 'the sum with b and 1/b exchanged',
-                agrees: `${agreedDigits(found.value, second.value, digits)} digits`,
-              }
+            ? agreement('the sum with b and 1/b exchanged', agreedDigits(found.value, second.value, digits))
             : null,
       } satisfies Answer<ValueResult>;
     }

@@ -6,6 +6,7 @@ import { isRemark } from '../spectrum/analyse';
 import { partialProducts } from '../spectrum/partial-product';
 import { determinant } from '../spectrum/regularised';
 import type { Spectrum } from '../spectrum/tower';
+import { agreement } from './agreement';
 import type { Analysis } from './analysis';
 import { type Answer, failure } from './answer';
 import type { ValueResult } from './result';
@@ -48,9 +49,7 @@ export function runDeterminant(
     value: formatBall(value, digits),
     digits,
     crossCheck:
-      crossCheck === null
-        ? null
-        : { route: ROUTES[crossCheck.route], agrees: `${Math.min(digits, crossCheck.agreedDigits)} digits` },
+      crossCheck === null ? null : agreement(ROUTES[crossCheck.route], Math.min(digits, crossCheck.agreedDigits)),
     zeta0: formatBall(found.zeta0, digits),
     scale: formatBall(found.scale, digits),
     anomaly: formatBall(found.anomaly, digits),

@@ -6,7 +6,7 @@ import { functions } from '../functions/table';
 import type { Quantity } from '../language/tree';
 import { evaluatePrecise } from '../numeric/precise';
 import type { TheoryProduct } from '../spheres/sphere';
-import { agreedDigits } from './agreement';
+import { agreedDigits, agreement } from './agreement';
 import type { Analysis } from './analysis';
 import { type Answer, failure } from './answer';
 import type { ValueResult } from './result';
@@ -70,9 +70,7 @@ export function functionValue(analysis: Analysis, quantity: FunctionQuantity, di
         notes: [],
         value: formatBall(quantity.log ? value.log : value.value, digits),
         digits,
-        crossCheck: confirmed
-          ? { route: other.route ?? '', agrees: `${agreedDigits(value.value, other.value, digits)} digits` }
-          : null,
+        crossCheck: confirmed ? agreement(other.route ?? '', agreedDigits(value.value, other.value, digits)) : null,
       } satisfies Answer<ValueResult>;
     }
     case 'zero':

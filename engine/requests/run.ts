@@ -1,5 +1,6 @@
 import { FormError } from '../exact/form';
 import type { Request } from '../language/tree';
+import { doubts } from './agreement';
 import type { Analysis } from './analysis';
 import { type Answer, failure, type Surroundings } from './answer';
 import { runFormula } from './formula-request';
@@ -19,6 +20,7 @@ export function run(analysis: Analysis, request: Request, surroundings: Surround
   const answer = guarded(() => runByKind(analysis, request, surroundings), request.kind);
   return {
     ...answer,
+    ...(answer.kind === 'value' ? { notes: [...doubts(answer.crossCheck, answer.digits), ...answer.notes] } : {}),
     line: analysis.lines.place(request.span.from).line,
     request: requestText(analysis.text, request.span),
     seconds: Math.max(0, surroundings.now() - start),

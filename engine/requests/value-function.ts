@@ -7,7 +7,7 @@ import type { FunctionValue } from '../functions/value-function';
 import { type ValueFunctionWord, valueFunctions } from '../functions/values';
 import type { Quantity } from '../language/tree';
 import { exactParameter } from '../numeric/precise';
-import { agreedDigits } from './agreement';
+import { agreedDigits, agreement } from './agreement';
 import { type Answer, failure } from './answer';
 import type { ValueResult } from './result';
 
@@ -83,5 +83,5 @@ function confirmed(
     return second?.value ?? { kind: 'outside', says: '' };
   }, digits);
   if (route === null || typeof other === 'string') return null;
-  return { route, agrees: `${agreedDigits(value, other, digits)} digits` };
+  return agreement(route, agreedDigits(value, other, digits));
 }

@@ -4,7 +4,7 @@ import type { ValueRequest } from '../language/tree';
 import { evaluatePrecise, MAXIMAL_DIGITS, type PreciseValue, type Report } from '../numeric/precise';
 import { elementary, namesIn } from '../spheres/quantity';
 import type { TheoryProduct } from '../spheres/sphere';
-import { agreedDigits } from './agreement';
+import { agreedDigits, agreement } from './agreement';
 import type { Analysis } from './analysis';
 import { type Answer, failure, type Surroundings, Unwanted } from './answer';
 import { coefficientOrder, runCoefficient } from './coefficient';
@@ -110,7 +110,7 @@ function confirm(
     if (other.kind !== 'value') continue;
     if (other.route === null && product === simple) return null;
     const route = [other.route ?? 'the product of all factors', note].filter((part) => part !== '').join(', ');
-    return { route, agrees: `${agreedDigits(value, other.value, digits)} digits` };
+    return agreement(route, agreedDigits(value, other.value, digits));
   }
   return null;
 }
