@@ -36,7 +36,7 @@ interface Tables {
  *   log s_b(x) = -i { sum_k w_k sin((2k+1) x h) - pi^2 x/(2h) },  w_k = h/(2 t_k sinh(b t_k) sinh(t_k/b)),
  * up to |Re x| where the limit (i pi/2)(x^2 + (b^2 + b^-2)/12) is exact to rounding. The logarithm is one of the right
  * number: its imaginary part may be off by multiples of 2 pi after shifts.
- * Error: below 2e-14 of max(1, |log s_b|, |x d log s_b/dx|); some hundred nodes a value, a few microseconds.
+ * Error: below 6e-14 of max(1, |log s_b|, |x d log s_b/dx|); some hundred nodes a value, a few microseconds.
  */
 export function complexDoubleSineKernel(b: Complex): DoubleKernel {
   const inverse = divide({ re: 1, im: 0 }, b);

@@ -57,7 +57,7 @@ export const doubleSine: SpecialFunction = {
   notations: doubleSineNotations,
   modes: doubleSineModes,
   elementary: false,
-  doubleError: ([b]) => (b?.im === 0 ? 4e-15 : 2e-14),
+  doubleError: ([b]) => (b?.im === 0 ? 4e-15 : 6e-14),
   double: ([b]) => doubleKernel(b as Complex),
   precise: (x, [b], bits) => preciseLog(x, sharedParameter(b as ExactParameter, bits), bits),
   crossCheck: (x, [b], bits) => secondRoute(x, sharedParameter(b as ExactParameter, bits), bits),

@@ -63,7 +63,7 @@ export const fluxGamma: SpecialFunction = {
     return `\\prod_{k\\ge0}\\frac{k+${above}}{k+${below}}`;
   },
   elementary: false,
-  doubleError: () => 4e-15,
+  doubleError: () => 6e-15,
   double: ([n]) => kernel(n as Complex),
   precise: (x, [n], bits) => quotient(x, n as ExactParameter, bits, logGammaPrecise),
   crossCheck: (x, [n], bits) => ({

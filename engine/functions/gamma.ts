@@ -36,7 +36,7 @@ export const gamma: SpecialFunction = {
   ],
   modes: (argument, _parameters, print) => `\\prod_{n\\ge0}\\frac{1}{${plus('n', argument, print)}}`,
   elementary: false,
-  doubleError: () => 3e-15,
+  doubleError: () => 4e-15,
   double: () => logGammaKernel(),
   precise: (argument, _parameters, bits) => logGammaPrecise(argument, bits),
   crossCheck: (argument, _parameters, bits) => ({
