@@ -45,6 +45,26 @@ describe('gauge-invariant chiral operators', () => {
     ['a baryon', ['gauge G = SU(3), level 5', ...rows('chiral q 4*fund 1/7')], ['q^{3}']],
     ['a baryon of five quarks', ['gauge G = SU(5), level 5', ...rows('chiral q 6*fund 1/12')], ['q^{5}']],
     ['no baryon of too few', ['gauge G = SU(5), level 6', ...rows('chiral q 4*fund 1/12')], []],
+    // Kutasov, Schwimmer, Seiberg, hep-th/9510222: q q (f q) of two flavours of SU(3).
+    [
+      'a baryon dressed with an adjoint',
+      ['gauge G = SU(3), level 9', ...rows('chiral q 2*fund 1/9', 'chiral f adj 1/9')],
+      ['f^{2}', 'f^{3}', 'q^{3}\\,f'],
+    ],
+    [
+      'a baryon of one flavour takes the powers 0, 1 and 2',
+      ['gauge G = SU(3), level 9', ...rows('chiral q fund 1/36', 'chiral f adj 1/9')],
+      ['f^{2}', 'f^{3}', 'q^{3}\\,f^{3}'],
+    ],
+    // V of the flux (-1, 0) has the charges 0 and -1, which p makes up: R = (1 - 9/10)/2 + 1/5.
+    [
+      'a dressed monopole operator',
+      [
+        ...['gauge G = U(1), level 1/2', 'gauge H = U(1), level 7/2', 'mixed G H = -1'],
+        ...['matter G H R', 'chiral q 1 0 9/10', 'chiral p 0 1 1/5'],
+      ],
+      ['V_{-1}\\,p'],
+    ],
     ['an invariant of E6', ['gauge G = E6, level 20', ...rows('chiral q 27 1/7')], ['q^{3}']],
   ])('%s', (_name, lines, expected) => {
     expect(low(lines).sort()).toEqual([...expected].sort());

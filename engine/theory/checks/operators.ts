@@ -1,7 +1,8 @@
 import { Rational } from '../../exact/rational';
 import type { Printer } from '../../functions/special-function';
+import type { Group } from '../../lie/group';
 import type { Representation } from '../../lie/representation';
-import { gaugeGroups, type Theory } from '../theory';
+import { gaugeGroups, type SuperpotentialTerm, type Theory } from '../theory';
 import { type Field, type FTerm, fTermOf } from './f-terms';
 import { dimensionWithout, matterOf, rChargeValue } from './matter';
 import { addR, compareR, plainR, type RValue } from './r-values';
@@ -57,14 +58,14 @@ export function operatorsOf(theory: Theory, print: Printer): Operator[] {
   return [...found.values()];
 }
 
-function combinations(fields: readonly Field[], count: number, from = 0): Field[][] {
+export function combinations(fields: readonly Field[], count: number, from = 0): Field[][] {
   if (count === 0) return [[]];
   return fields
     .slice(from)
     .flatMap((field, k) => combinations(fields, count - 1, from + k).map((rest) => [field, ...rest]));
 }
 
-function totalR(product: readonly Field[]): RValue {
+export function totalR(product: readonly Field[]): RValue {
   return product.reduce<RValue>((sum, { rCharge }) => addR(sum, rCharge), Rational.zero);
 }
 
@@ -90,7 +91,7 @@ function countFields(product: readonly Field[]): Map<Field, number> {
   return counts;
 }
 
-function productLatex(product: readonly Field[]): string {
+export function productLatex(product: readonly Field[]): string {
   return [...countFields(product)]
     .map(([{ latex }, power]) => (power === 1 ? latex : `${latex}^{${power}}`))
     .join('\\,');
@@ -101,23 +102,31 @@ function traces(theory: Theory, fields: readonly Field[]): Field[][] {
   const groups = gaugeGroups(theory).map(({ group }) => group.group);
   return fields.flatMap((field) =>
     groups.flatMap((group, place) => {
-      const representation = field.representations[place] as Representation;
-      const alone = field.representations.every((one, k) => k === place || one.isTrivial);
-      const adjoint = Number(representation.dimension) === group.dimension && !group.isAbelian;
-      if (!alone || !adjoint || group.simple.length > 1) return [];
+      if (!isAdjoint(field, group, place) || group.simple.length > 1) return [];
       return group.system.exponents.filter((e) => e > 2).map((e) => new Array<Field>(e + 1).fill(field));
     }),
   );
 }
 
+/** A field in the adjoint of one gauge group, neutral under the others. */
+function isAdjoint({ representations }: Field, group: Group, place: number): boolean {
+  const alone = representations.every((one, k) => k === place || one.isTrivial);
+  return alone && !group.isAbelian && Number((representations[place] as Representation).dimension) === group.dimension;
+}
+
 /**
  * The lightest product of n different copies of fundamentals, of antifundamentals (of vectors) that the totally
- * antisymmetric tensor of SU(n) (of SO(n)) contracts, n > 2.
+ * antisymmetric tensor of SU(n) (of SO(n)) contracts, n > 2. Copies dressed with powers of an adjoint count as different
+ * (Kutasov, Schwimmer, Seiberg 1996, hep-th/9510222), of an adjoint that no superpotential constrains.
  */
 function baryons(theory: Theory, fields: readonly Field[]): Field[][] {
   return gaugeGroups(theory).flatMap(({ group: { group } }, place) => {
     const size = group.size ?? 0;
     if (!['SU', 'SO', 'Spin'].includes(group.family) || size < 3) return [];
+    const adjoints = fields.filter(
+      (field) => isAdjoint(field, group, place) && !theory.superpotential.some((term) => mentions(term, field)),
+    );
+    const [adjoint] = adjoints.sort((a, b) => plainR(a.rCharge) - plainR(b.rCharge));
     const kinds = new Map<string, Field[]>();
     for (const field of fields) {
       const representation = field.representations[place] as Representation;
@@ -130,8 +139,23 @@ function baryons(theory: Theory, fields: readonly Field[]): Field[][] {
       kinds.set(key, [...(kinds.get(key) ?? []), ...new Array<Field>(copies).fill(field)]);
     }
     return [...kinds.values()].flatMap((copies) => {
-      if (copies.length < size) return [];
-      return [copies.sort((a, b) => plainR(a.rCharge) - plainR(b.rCharge)).slice(0, size)];
+      const dressed = copies.flatMap((field) =>
+        Array.from({ length: adjoint === undefined ? 1 : size }, (_, power) => [
+          field,
+          ...new Array<Field>(power).fill(adjoint ?? field),
+        ]),
+      );
+      if (dressed.length < size) return [];
+      return [
+        dressed
+          .sort((a, b) => plainR(totalR(a)) - plainR(totalR(b)))
+          .slice(0, size)
+          .flat(),
+      ];
     });
   });
+}
+
+function mentions({ fields }: SuperpotentialTerm, { name }: Field): boolean {
+  return fields.some(({ field }) => field.name === name);
 }

@@ -1,10 +1,6 @@
 import { Rational } from '../../exact/rational';
-import type { Printer } from '../../functions/special-function';
-import type { Theory } from '../theory';
 import type { Condition, Finding } from './condition';
-import { coulombBranch } from './coulomb-branch';
-import { fluxLatex } from './direction';
-import { growthOf } from './growth';
+import { monopoleOperators } from './monopole-operators';
 import { fieldsOf, HALF, type Operator, operatorsOf } from './operators';
 import { compareR, plainR, rLatex } from './r-values';
 import { listWords } from './words';
@@ -45,8 +41,8 @@ export const unitarity: Condition = {
   title: 'Unitarity bound of chiral operators',
   examine: (theory, print) => {
     if (theory.supersymmetry === 4) return [];
-    const { bare, searched } = bareMonopole(theory, print);
-    const operators = [...operatorsOf(theory, print), ...bare].filter(({ fTerm }) => fTerm !== 'vanishes');
+    const { found, searched } = monopoleOperators(theory, print);
+    const operators = [...operatorsOf(theory, print), ...found].filter(({ fTerm }) => fTerm !== 'vanishes');
     const low = operators.filter(({ rCharge }) => !(compareR(rCharge, HALF) > 0));
     if (low.length > 0) return low.map(lowFinding);
     const [first, ...others] = operators;
@@ -82,25 +78,4 @@ function lowFinding({ latex, rCharge, fTerm }: Operator): Finding {
       ? `${lead}, below $\\frac{1}{2}$; the superpotential relates it to others, which was not worked out.`
       : `${lead}, below $\\frac{1}{2}$: at a superconformal point with these R-charges it would decouple.`;
   return { detail: latex, verdict: below && fTerm === 'none' ? 'fails' : 'unknown', says: words, ...GROUNDS };
-}
-
-/** The lightest bare monopole operator that is gauge-invariant: no effective level along its flux. */
-function bareMonopole(
-  theory: Theory,
-  print: Printer,
-): { readonly bare: readonly Operator[]; readonly searched: string } {
-  if (!theory.groups.some(({ role }) => role === 'gauge')) return { bare: [], searched: '' };
-  const branch = coulombBranch(theory);
-  if (branch === null) return { bare: [], searched: ', no monopole operators' };
-  const growth = growthOf(theory, branch);
-  const neutral = branch.rays
-    .filter(({ point, sums }) => growth.phase(point, sums).every((entry) => entry === 0))
-    .map(({ point, sums }) => ({ point, value: growth.monopole(point, sums) }))
-    .sort((a, b) => a.value - b.value);
-  const [lightest] = neutral;
-  const searched = ', bare monopole operators along the rays of the Coulomb branch';
-  if (lightest === undefined) return { bare: [], searched };
-  const latex = `V_{${fluxLatex(theory, branch, lightest.point, print)}}`;
-  const rCharge = growth.exactMonopoles ? Rational.of(lightest.value, growth.scale) : lightest.value / growth.scale;
-  return { bare: [{ latex, fields: [], rCharge, fTerm: 'none' }], searched };
 }
