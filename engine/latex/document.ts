@@ -9,6 +9,8 @@ export interface DocumentParts {
   readonly title: string;
   /** The formula as one display without delimiters. */
   readonly formula: string;
+  /** Tables of pairs of modes as one array without delimiters; null where there is none. */
+  readonly pairing: string | null;
   /** Matter content as rows of LaTeX cells, first row the header. */
   readonly table: readonly (readonly string[])[];
   /** Remarks, with $...$ in them. */
@@ -32,6 +34,10 @@ export function standaloneDocument(parts: DocumentParts): string {
   const sections = [
     tableText(parts.table),
     `\\begin{equation*}\n${parts.formula}\n\\end{equation*}`,
+    // Ten columns: small print keeps them on the page.
+    parts.pairing === null
+      ? ''
+      : `Pairs of modes:\n{\\scriptsize\n\\begin{equation*}\n${parts.pairing}\n\\end{equation*}}`,
     definitions.length === 0
       ? ''
       : `Definitions:\n${definitions.map((d) => `\\begin{equation*}\n${d}\n\\end{equation*}`).join('\n')}`,

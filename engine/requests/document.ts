@@ -30,6 +30,7 @@ export function latexOut(analysis: Analysis, name: string, form: FormulaForm, no
   const document = standaloneDocument({
     title: name,
     formula: view.latex,
+    pairing: view.pairing?.latex ?? null,
     table,
     notes: view.notes,
     functions: [...used.values()].map((f) => ({ name: f.name, parameters: f.parameters, notation })),

@@ -5,6 +5,8 @@ import { type Ball, expBall } from '../../engine/arithmetic/ball';
 import { numberFromFixed } from '../../engine/arithmetic/fixed';
 import { Form } from '../../engine/exact/form';
 import { Rational } from '../../engine/exact/rational';
+import { analyse } from '../../engine/requests/analysis';
+import { latexOut } from '../../engine/requests/document';
 import { isRemark } from '../../engine/spectrum/analyse';
 import { multiplicityTower } from '../../engine/spectrum/level-tower';
 import { leftOfPairs } from '../../engine/spectrum/mode-pairs';
@@ -150,4 +152,11 @@ describe('the table', () => {
     const other = answer(...THEORY, '', 'formula lamp as unpaired');
     expect(other.kind === 'formula' && other.formula.kind === 'formula' && 'pairing' in other.formula).toBe(false);
   });
+});
+
+test('a document of all modes holds the table, one of another form does not', () => {
+  const analysis = analyse(THEORY.join('\n'));
+  const documents = (['modes', 'functions'] as const).map((form) => latexOut(analysis, 'lamp', form, 0));
+  const holds = documents.map((out) => out.kind === 'latex' && out.document.includes('\\begin{array}{llllllllll}'));
+  expect(holds).toEqual([true, false]);
 });
