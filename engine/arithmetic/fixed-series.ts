@@ -3,6 +3,8 @@ import type { FixedComplex } from './fixed-complex';
 
 /** Digits of big integers have 64 bits: dropping fewer saves nothing. */
 const DIGIT = 64;
+/** Smaller |z| is treated as this one: doubles end there. */
+const LEAST = 2 ** -1000;
 
 /**
  * sum_{n < count} a_n z^n for real a_n, |z| < 1. Horner's scheme for real z; else the real recurrence
@@ -38,7 +40,7 @@ function lastStep(n: number, drop: number, rate: number, bits: number): number {
 }
 
 function realSum(coefficients: readonly bigint[], count: number, z: bigint, bits: number): FixedComplex {
-  const rate = -Math.log2(Math.abs(numberFromFixed(z, bits)) + 2 ** -bits);
+  const rate = -Math.log2(Math.max(Math.abs(numberFromFixed(z, bits)), LEAST));
   let sum = 0n;
   let before = 0;
   for (let n = count - 1; n >= 0; ) {
@@ -64,7 +66,7 @@ function complexSum(coefficients: readonly bigint[], count: number, z: FixedComp
   const { re, im } = z;
   const twice = re << 1n;
   const norm = (re * re + im * im) >> full;
-  const rate = -Math.log2(numberFromFixed(norm + 2n, bits)) / 2;
+  const rate = -Math.log2(Math.max(numberFromFixed(norm + 2n, bits), LEAST)) / 2;
   let sum = 0n;
   let above = 0n;
   let before = 0;

@@ -94,6 +94,11 @@ export function bitLength(value: bigint): number {
   return 4 * hex.length - (Math.clz32(Number.parseInt(hex.charAt(0), 16)) - 28);
 }
 
+/** An upper bound of log2 of |value|/2^bits, less than 1 too large, for numbers of any size; that of one unit for 0. */
+export function log2Above(value: bigint, bits: number): number {
+  return Math.max(1, bitLength(value)) - bits;
+}
+
 export function absolute(value: bigint): bigint {
   return value < 0n ? -value : value;
 }

@@ -1,4 +1,4 @@
-import { fixedFromRatio, numberFromFixed } from '../arithmetic/fixed';
+import { fixedFromRatio, log2Above, numberFromFixed } from '../arithmetic/fixed';
 import {
   absoluteComplex,
   addComplex,
@@ -38,7 +38,7 @@ export interface BarnesFar {
   readonly log2Radius: number;
   /** c_0, c_1, ... for 2j <= N. */
   readonly polynomial: readonly FixedComplex[];
-  /** c_j (2j-N-1)! rho^(N-2j) for the j beyond, each off by less than 1 unit a part, and log2 of their moduli. */
+  /** c_j (2j-N-1)! rho^(N-2j) for the j beyond, each off by less than 1 unit a part, and at least log2 of their moduli. */
   readonly tail: readonly FixedComplex[];
   readonly log2: readonly number[];
   /** The real parts alone where all periods are real. */
@@ -92,9 +92,10 @@ function buildFar(periods: readonly FixedComplex[], bits: number): BarnesFar {
     const grown = { re: c.re * gamma, im: c.im * gamma };
     const drop = log2Radius * order;
     tail.push({ re: grown.re >> BigInt(FINER + drop), im: grown.im >> BigInt(FINER + drop) });
-    const size = numberFromFixed(absoluteComplex(grown) >> BigInt(drop), wide) + 2 ** -wide;
-    log2.push(Math.log2(size));
-    if (Math.log2(size) + order * (log2Radius - log2Far) + 1 < -bits - 2) break;
+    // A modulus cut to whole units is one more at most.
+    const size = log2Above((absoluteComplex(grown) >> BigInt(drop)) + 1n, wide);
+    log2.push(size);
+    if (size + order * (log2Radius - log2Far) + 1 < -bits - 2) break;
   }
   const real = periods.every(({ im }) => im === 0n);
   return {

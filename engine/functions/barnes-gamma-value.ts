@@ -9,6 +9,7 @@ import {
   subtractComplex,
 } from '../arithmetic/fixed-complex';
 import { piFixed } from '../arithmetic/fixed-constants';
+import { logBarnesGammaEqual } from './barnes-equal';
 import { logBarnesGamma } from './barnes-gamma';
 import type { Estimate } from './euler-maclaurin';
 import { logGammaBySpouge } from './log-gamma-spouge';
@@ -23,7 +24,9 @@ const FURTHER = 5;
 /**
  * The multiple Gamma function Gamma_N(z | w_1, ..., w_N) = exp d/ds zeta_N(s, z | w) at s = 0 (Barnes 1904, normalised as
  * Ruijsenaars 2000, Adv. Math. 156, 107), as its logarithm. Poles at z = -n.w. The periods must lie in an open half
- * plane. Error: proved for positive periods; else that of the expansion, and the difference of a second value with more steps.
+ * plane. Equal positive periods: derivatives of the Hurwitz zeta function, else rows of lattice points and an expansion,
+ * which are also the second route of the former. Error: proved for positive periods; for others that of the expansion, and
+ * the difference of a second value with more steps.
  */
 export const barnesGamma: ValueFunction = {
   least: 2,
@@ -36,6 +39,8 @@ export const barnesGamma: ValueFunction = {
     const working = bits + GUARD;
     const point = z.value(working);
     const values = periods.map((w) => w.value(working));
+    const equal = logBarnesGammaEqual(point, values, working);
+    if (equal !== null) return logarithm(equal, 0n, GUARD);
     const one = logBarnesGamma(point, values, working);
     // A bound of the remainder needs no second value.
     const two = one?.proved ? one : logBarnesGamma(point, values, working, FURTHER);
@@ -51,6 +56,10 @@ export const barnesGamma: ValueFunction = {
     const values = periods.map((w) => w.value(working));
     if (values.length === 1) {
       return { route: "Spouge's approximation", value: simple(point, values[0] as FixedComplex, working) };
+    }
+    if (logBarnesGammaEqual(point, values, working) !== null) {
+      const rows = logBarnesGamma(point, values, working);
+      return rows && { route: 'rows of lattice points', value: logarithm(rows, 0n, GUARD) };
     }
     // Gamma_N(z) = Gamma_{N-1}(z | without w) Gamma_N(z + w) along the smallest period; the main route takes the largest.
     const sizes = periods.map(({ approx }) => Math.hypot(approx.re, approx.im));

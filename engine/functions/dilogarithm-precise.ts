@@ -6,7 +6,12 @@ import { powerSum } from '../arithmetic/fixed-series';
 import { memoiseBounded } from '../arithmetic/memo';
 import { evenBernoulliNumbers } from './bernoulli';
 
-/** Guard bits: the sum errs by about 40 ulps, the products of logarithms by 30. */
+/**
+ * Guard bits. In units of the guarded precision: u errs by 1.5 (its logarithm), u^2/4 by 2.5, powerSum by 10 (|u^2/4| <= 0.4,
+ * coefficients below 1/36), u times it by 14 with |u| <= 1.26, so the series by 18; a product of logarithms by 1.5 times
+ * their sum and 1.5, where one is at most log 2^4096 and the other then below 1: 4300 in all, and the inverse of z brings
+ * as much, but not at the same z. With 2^12 units to an ulp this is below 1.2, rounding included 2.
+ */
 const GUARD = 12;
 
 /** 4^j B_2j/(2j+1)!, j >= 1, and 0 at j = 0; |B_2j|/(2j)! <= 4 (2 pi)^(-2j), so they fall by 0.1 a term. */

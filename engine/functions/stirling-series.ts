@@ -1,4 +1,4 @@
-import { numberFromFixed } from '../arithmetic/fixed';
+import { log2Above, numberFromFixed } from '../arithmetic/fixed';
 import { divideComplex, type FixedComplex, multiplyComplex, squareComplex } from '../arithmetic/fixed-complex';
 import { powerSum } from '../arithmetic/fixed-series';
 import { memoiseBounded } from '../arithmetic/memo';
@@ -10,7 +10,7 @@ interface StirlingTable {
   readonly log2Radius: number;
   /** C_j = B_2j/(2j (2j - 1)) rho^(1-2j), j >= 1, each off by less than 1 unit. */
   readonly coefficients: readonly bigint[];
-  /** log2 |C_j|. */
+  /** At least log2 |C_j|. */
   readonly log2: readonly number[];
 }
 
@@ -31,7 +31,7 @@ const stirlingTable = memoiseBounded(16, (bits: number): StirlingTable => {
     const below = denominator * BigInt(2 * j * (2 * j - 1));
     const wide = shift >= 0 ? (numerator << BigInt(shift)) / below : numerator / (below << BigInt(-shift));
     coefficients.push(wide >> 40n);
-    const size = Math.log2(Math.abs(numberFromFixed(wide, bits + 40)) + 2 ** -(bits + 40));
+    const size = log2Above(wide, bits + 40);
     log2.push(size);
     // The first neglected term at |Z| cos(arg Z/2) = reach, with sec(arg Z/2) <= sqrt 2.
     if (size + (2 * j - 1) * (log2Radius - Math.log2(reach)) + 0.5 < -bits - 2)

@@ -48,3 +48,12 @@ test('memoiseBounded forgets the entry used longest ago, and nothing else', () =
   square(3);
   expect(computed).toEqual([2, 3, 5, 3]);
 });
+
+test('powerSum at 0 and at numbers below the least double, with more bits than doubles reach', () => {
+  const bits = 1400;
+  const coefficients = [3n << 1400n, 5n << 1400n, 7n << 1400n];
+  expect(powerSum(coefficients, 3, { re: 0n, im: 0n }, bits)).toEqual({ re: 3n << 1400n, im: 0n });
+  const tiny = powerSum(coefficients, 3, { re: 1n << 100n, im: 1n << 100n }, bits);
+  expect(Number(tiny.re - (3n << 1400n) - (5n << 100n))).toBeCloseTo(0, -1);
+  expect(Number(tiny.im - (5n << 100n))).toBeCloseTo(0, -1);
+});

@@ -4,6 +4,7 @@ import { describe, expect, test } from 'vitest';
 import { numberFromFixed } from '../../engine/arithmetic/fixed';
 import { absoluteComplex, type FixedComplex, subtractComplex } from '../../engine/arithmetic/fixed-complex';
 import { formFixed } from '../../engine/arithmetic/form-fixed';
+import { logBarnesGammaEqual } from '../../engine/functions/barnes-equal';
 import { logBarnesGamma } from '../../engine/functions/barnes-gamma';
 import { barnesGammaDouble } from '../../engine/functions/barnes-gamma-double';
 import fixture from '../fixtures/spectra/mpmath.json';
@@ -101,5 +102,40 @@ describe('log Gamma_N', () => {
       ),
       { numRuns: 30 },
     );
+  });
+
+  test('equal periods: derivatives of the Hurwitz zeta function agree with rows of lattice points', () => {
+    fc.assert(
+      fc.property(
+        arbitraryFixed(-8, 20),
+        arbitraryFixed(-20, 20),
+        arbitraryFixed(1, 6),
+        fc.integer({ min: 1, max: 3 }),
+        fc.integer({ min: 60, max: 200 }),
+        (re, im, w, count, bits) => {
+          const x = { re: re(bits), im: im(bits) };
+          if (x.re < 1n && -8n < x.im && x.im < 8n) return;
+          const periods = Array.from({ length: count }, () => ({ re: w(bits), im: 0n }));
+          const closed = logBarnesGammaEqual(x, periods, bits);
+          const rows = logBarnesGamma(x, periods, bits);
+          if (closed === null || rows === null) throw new Error('too many points');
+          const gap = absoluteComplex(subtractComplex(closed.value, rows.value));
+          expect(gap).toBeLessThanOrEqual(closed.error + rows.error);
+        },
+      ),
+      { numRuns: 40 },
+    );
+    expect(logBarnesGammaEqual(fixed('1'), [fixed('1'), fixed('2')], BITS)).toBe(null);
+    expect(logBarnesGammaEqual(fixed('1'), [fixed('i'), fixed('i')], BITS)).toBe(null);
+  });
+
+  test('1150 bits, where doubles underflow', () => {
+    const bits = 1150;
+    const x = { re: (7n << BigInt(bits)) / 3n, im: 0n };
+    const periods = [1n, 1n].map((w) => ({ re: w << BigInt(bits), im: 0n }));
+    const closed = logBarnesGammaEqual(x, periods, bits);
+    const rows = logBarnesGamma(x, periods, bits);
+    if (closed === null || rows === null) throw new Error('too many points');
+    expect(absoluteComplex(subtractComplex(closed.value, rows.value))).toBeLessThanOrEqual(closed.error + rows.error);
   });
 });

@@ -1,7 +1,9 @@
+import fc from 'fast-check';
 import { expect, test } from 'vitest';
 import { piFixed } from '../../engine/arithmetic/fixed-constants';
 import { dilogarithmFixed } from '../../engine/functions/dilogarithm-precise';
 import fixture from '../fixtures/functions/double-sine-complex.json' with { type: 'json' };
+import { arbitraryFixed } from './arbitrary-fixed';
 
 function integer(text: string | undefined): bigint {
   if (text === undefined) throw new Error('missing number');
@@ -29,4 +31,23 @@ test('Li2(1) = pi^2/6 (DLMF 25.12.2), Li2(2) from below the cut has imaginary pa
   // Re Li2(2) = pi^2/4.
   expect(Number(two.re - (3n * sixth) / 2n)).toBeCloseTo(0, -1);
   expect(Number(two.im) / Number(one)).toBeCloseTo(-Math.PI * Math.LN2, 14);
+});
+
+test('errs by at most 2 ulps: the same point with more bits', () => {
+  fc.assert(
+    fc.property(
+      arbitraryFixed(-4, 4),
+      arbitraryFixed(-4, 4),
+      fc.oneof(fc.integer({ min: 60, max: 300 }), fc.constantFrom(700, 1000)),
+      (re, im, bits) => {
+        const z = { re: re(bits), im: im(bits) };
+        const coarse = dilogarithmFixed(z, bits);
+        const fine = dilogarithmFixed({ re: z.re << 80n, im: z.im << 80n }, bits + 80);
+        for (const part of ['re', 'im'] as const) {
+          const gap = (coarse[part] << 80n) - fine[part];
+          expect(gap < 0n ? -gap : gap).toBeLessThanOrEqual(2n << 80n);
+        }
+      },
+    ),
+  );
 });

@@ -2,6 +2,7 @@ import fc from 'fast-check';
 import { expect, test } from 'vitest';
 import { absoluteComplex, subtractComplex } from '../../engine/arithmetic/fixed-complex';
 import { logGammaByShifts } from '../../engine/functions/log-gamma-precise';
+import { logGammaBySpouge } from '../../engine/functions/log-gamma-spouge';
 import { RisingProduct } from '../../engine/functions/rising-product';
 import { stirlingReach, stirlingSeries } from '../../engine/functions/stirling-series';
 import { arbitraryFixed } from './arbitrary-fixed';
@@ -61,4 +62,27 @@ test("Stirling's series errs by no more than stated from its least distance on",
       },
     ),
   );
+});
+
+test.each([1000, 1300, 3400])('log Gamma by shifts with %s bits, where doubles underflow', (bits) => {
+  for (const [re, im] of [
+    [7n, 0n],
+    [4n, 6n],
+    [-5n, 1n],
+    [900n, 0n],
+  ] as const) {
+    const at = (wanted: number) => ({ re: (re << BigInt(wanted)) / 3n, im: (im << BigInt(wanted)) / 3n });
+    const z = at(bits);
+    const coarse = logGammaByShifts(z, bits);
+    const fine = logGammaByShifts({ re: z.re << 100n, im: z.im << 100n }, bits + 100);
+    const gap = absoluteComplex(
+      subtractComplex({ re: coarse.value.re << 100n, im: coarse.value.im << 100n }, fine.value),
+    );
+    expect(gap).toBeLessThanOrEqual((coarse.error << 100n) + fine.error);
+    if (bits > 2000) continue;
+    const spouge = logGammaBySpouge(z, bits);
+    if (re < 0n || spouge.kind !== 'value') continue;
+    const off = coarse.value.re - spouge.re;
+    expect(off < 0n ? -off : off).toBeLessThanOrEqual(coarse.error + spouge.error);
+  }
 });
