@@ -37,7 +37,7 @@ export function standaloneDocument(parts: DocumentParts): string {
     // Ten columns: small print keeps them on the page.
     parts.pairing === null
       ? ''
-      : `Pairs of modes:\n{\\scriptsize\n\\begin{equation*}\n${parts.pairing}\n\\end{equation*}}`,
+      : `Pairs of modes:\n{\\scriptsize\\setlength{\\arraycolsep}{2pt}\n\\begin{equation*}\n${parts.pairing}\n\\end{equation*}}`,
     definitions.length === 0
       ? ''
       : `Definitions:\n${definitions.map((d) => `\\begin{equation*}\n${d}\n\\end{equation*}`).join('\n')}`,
