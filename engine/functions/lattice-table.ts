@@ -14,6 +14,7 @@ import {
 } from '../arithmetic/fixed-complex';
 import { barnesSeries } from './barnes-series';
 import { memoiseByKey } from './kernel-memo';
+import { type FactorTable, logOfSquares } from './lattice-factors';
 import { farDerivatives, type LatticeLevel } from './lattice-far';
 import { LogProduct } from './log-product';
 import type { ExactParameter } from './special-function';
@@ -22,18 +23,10 @@ import type { ExactParameter } from './special-function';
  * What log prod (1 - z^2/l^2) over the half-integer points l = sum (n_i + 1/2) w_i, n_i >= 0, needs of the periods: the
  * points next to 0 as factors, all others by the power series of their logarithms.
  */
-export interface LatticeTable {
-  /** Fraction bits of everything here. */
-  readonly bits: number;
+export interface LatticeTable extends FactorTable {
   /** The series serves |z| <= radius. */
   readonly radius: number;
   readonly radiusSquare: bigint;
-  /** l^2 of the points taken as factors, and about the same in doubles. */
-  readonly squares: readonly FixedComplex[];
-  readonly roughRe: Float64Array;
-  readonly roughIm: Float64Array;
-  /** All numbers here are real. */
-  readonly real: boolean;
   /** Sum of log l^2 over those points. */
   readonly logSquares: FixedComplex;
   /** Coefficients of (z/radius)^2, (z/radius)^4, ... */
@@ -197,23 +190,23 @@ function build(frame: Frame): LatticeTable | null {
   const { derivatives, center } = farDerivatives(levels, radius, terms, bits);
   addPowerSums(derivatives, absorbed, radius, bits);
   const squares = factors.map((point) => squareComplex(point, bits));
-  const product = new LogProduct(bits);
-  for (const point of factors) product.multiply(point);
-  const logarithm = product.logarithm().value;
-  return {
+  const parts: FactorTable = {
     bits,
-    radius,
-    radiusSquare: multiplyFixed(fixedFromNumber(radius, bits), fixedFromNumber(radius, bits), bits),
     squares,
     roughRe: Float64Array.from(squares, ({ re }) => numberFromFixed(re, bits)),
     roughIm: Float64Array.from(squares, ({ im }) => numberFromFixed(im, bits)),
     real: periods.every(({ im }) => im === 0n),
-    logSquares: { re: 2n * logarithm.re, im: 2n * logarithm.im },
+  };
+  return {
+    ...parts,
+    radius,
+    radiusSquare: multiplyFixed(fixedFromNumber(radius, bits), fixedFromNumber(radius, bits), bits),
+    logSquares: logOfSquares(parts),
     coefficients: derivatives,
     center: once(() => {
-      const rest = new LogProduct(bits);
-      for (const point of absorbed) rest.multiply(point);
-      return subtractComplex(center(), addComplex(logarithm, rest.logarithm().value));
+      const product = new LogProduct(bits);
+      for (const point of walk.points) product.multiply(point);
+      return subtractComplex(center(), product.logarithm().value);
     }),
   };
 }
