@@ -51,7 +51,7 @@ export function farDerivatives(
 interface Prepared {
   readonly periods: number;
   readonly series: BarnesSeries;
-  /** Sums of L_e(u), e = 0, ..., n. */
+  /** Sums of L_e(u), e = n, n - 2, ... by e. */
   readonly low: readonly FixedComplex[];
   /** Sums of (U/u)^m for m = n (mod 2), m = 1 or 2 first, each with its own number of fraction bits. */
   readonly powers: readonly FixedComplex[];
@@ -76,9 +76,7 @@ function prepared({ points, periods, series }: LatticeLevel, radius: number, ter
   const inverseSquare = multiplyFixed(inverse, inverse, bits);
   const radiusFixed = fixedFromNumber(radius, bits);
   const radiusSquare = multiplyFixed(radiusFixed, radiusFixed, bits);
-  const low = Array.from({ length: periods + 1 }, (_, e) =>
-    points.reduce((sum, u) => addComplex(sum, regular(u, e, bits)), zeroComplex),
-  );
+  const low = regularSums(points, periods, bits);
   const step = multiplyFixed(series.unit, inverseSquare, bits);
   const radiusStep = multiplyFixed(radiusSquare, inverseSquare, bits);
   const powerBits = bitsNeeded(
@@ -180,11 +178,20 @@ function addPowers(
   }
 }
 
-/** L_e(u) for e >= 0. */
-function regular(u: FixedComplex, e: number, bits: number): FixedComplex {
+/** Sums of L_e(u) for e = n, n - 2, ... >= 0, by e. */
+function regularSums(points: readonly FixedComplex[], n: number, bits: number): FixedComplex[] {
+  const sums = Array.from({ length: n + 1 }, () => zeroComplex);
+  for (const u of points) {
+    const log = logComplex(u, bits);
+    for (let e = n; e >= 0; e -= 2) sums[e] = addComplex(sums[e] as FixedComplex, regular(u, log, e, bits));
+  }
+  return sums;
+}
+
+/** L_e(u). */
+function regular(u: FixedComplex, log: FixedComplex, e: number, bits: number): FixedComplex {
   let harmonic = Rational.zero;
   for (let k = 1; k <= e; k++) harmonic = harmonic.add(Rational.of(1, k));
-  const log = logComplex(u, bits);
   const first = fixedFromRatio(harmonic.numerator, harmonic.denominator, bits);
   const bracket = { re: first - log.re, im: -log.im };
   const power = multiplyComplex(integerPowerComplex(u, e, bits), bracket, bits);

@@ -189,7 +189,10 @@ function build(frame: Frame): LatticeTable | null {
   );
   const { derivatives, center } = farDerivatives(levels, radius, terms, bits);
   addPowerSums(derivatives, absorbed, radius, bits);
-  const squares = factors.map((point) => squareComplex(point, bits));
+  const shift = BigInt(bits);
+  const squares = factors.map((point) =>
+    point.im === 0n ? { re: (point.re * point.re) >> shift, im: 0n } : squareComplex(point, bits),
+  );
   const parts: FactorTable = {
     bits,
     squares,
