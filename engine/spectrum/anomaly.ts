@@ -9,10 +9,10 @@ import type { ScaleRecord, Tower, TowerFactor } from './tower';
  * l_j = log(linear factor j / w) expanded in 1/w it is the coefficient of 1/w in
  * d(w) (sum_j l_j^2/2 - (sum_j l_j)^2/(2 r)), the residue formula of Wodzicki (see Kontsevich and Vishik 1994,
  * hep-th/9406140) for products of linear forms. Only power sums of the roots enter, so it is exact for any polynomial.
- * Zero for finite towers.
+ * Zero for finite towers and for a single linear factor.
  */
 export function towerAnomaly(tower: Tower): Form {
-  if (tower.last !== null) return Form.zero;
+  if (tower.last !== null || tower.order === 1) return Form.zero;
   const degeneracy = polynomialIn(tower.degeneracy, tower.indices[0] as string) ?? [];
   const factors = tower.factors.map((factor) => expandFactor(factor, degeneracy.length));
   const half = Rational.of(1, 2 * tower.order);

@@ -11,6 +11,9 @@ import { estimateOf, scaleEstimate, sizeOf, sumOf } from './total';
 /** Bits beyond those asked for: errors of shift and periods grow with the number of lattice points used. */
 const GUARD = 48;
 
+/** Bits beyond those asked for in a quadrature, which has no such errors. */
+const QUADRATURE_GUARD = 16;
+
 /** Further steps of a second value. */
 const FURTHER_STEPS = 5;
 
@@ -38,7 +41,7 @@ export function severalSumByContour(
   multiplicity: Form,
   bits: number,
 ): Estimate | SumFailure {
-  return timesLogGamma(byContour, shift, periods, multiplicity, bits);
+  return timesLogGamma(byContour, shift, periods, multiplicity, bits, QUADRATURE_GUARD);
 }
 
 /** One value with further steps, for a cross-check where nothing else is at hand. */
@@ -92,17 +95,18 @@ function timesLogGamma(
   periods: readonly Form[],
   multiplicity: Form,
   bits: number,
+  guard = GUARD,
 ): Estimate | SumFailure {
   const rough = periods.map((w) => formFixed(w, 64));
   if (rough.some((w) => w === null)) return 'spectrum-undefined';
-  if (rough.every((w) => w !== null && w.re < 0n)) return turned(logGamma, shift, periods, multiplicity, bits);
-  const working = bits + GUARD;
+  if (rough.every((w) => w !== null && w.re < 0n)) return turned(logGamma, shift, periods, multiplicity, bits, guard);
+  const working = bits + guard;
   const factor = estimateOf(multiplicity, working);
   if (factor === null) return 'spectrum-undefined';
   const found = logGamma(shift, periods, working);
   if (isFailed(found)) return found;
   const total = scaleEstimate({ value: negative(found.value), error: found.error }, factor, working);
-  const by = BigInt(GUARD);
+  const by = BigInt(guard);
   return { value: { re: total.value.re >> by, im: total.value.im >> by }, error: (total.error >> by) + 2n };
 }
 
@@ -112,9 +116,10 @@ function turned(
   periods: readonly Form[],
   multiplicity: Form,
   bits: number,
+  guard: number,
 ): Estimate | SumFailure {
   const mirrored = periods.map((w) => w.neg());
-  const rest = timesLogGamma(logGamma, shift.neg(), mirrored, multiplicity, bits);
+  const rest = timesLogGamma(logGamma, shift.neg(), mirrored, multiplicity, bits, guard);
   const phase = estimateOf(Form.pi.mul(Form.i).mul(multiplicity).mul(barnesZetaAtZero(shift.neg(), mirrored)), bits);
   if (typeof rest === 'string' || phase === null) return typeof rest === 'string' ? rest : 'spectrum-undefined';
   return sumOf([rest, phase]);
