@@ -1,3 +1,5 @@
+import { bitLength } from './fixed';
+
 /** One step of Horner's rule from the power n + 1 to n, with fewer bits the higher n is. */
 interface ShortStep {
   /** The coefficient of y^n with the bits of this step. */
@@ -9,7 +11,7 @@ interface ShortStep {
   readonly down: bigint;
 }
 
-/** A power series with coefficients sign^n/(r_1 ... r_n), r_n >= 1, prepared for arguments 0 <= y < 2^-reduction. */
+/** A power series with coefficients 1/d_n for integers d_n, prepared for arguments |y| < 2^-reduction. */
 export interface ShortSeries {
   /** From the highest power down to the power 0. */
   readonly steps: readonly ShortStep[];
@@ -21,7 +23,7 @@ export interface ShortSeries {
 
 /** Terms of the tail: they fall by 2^-reduction, at most 2^-20, each. */
 const TAIL_TERMS = 4;
-/** Factors r_1 ... r_n up to 2^900 keep the scale of the tail a double. */
+/** Denominators up to 2^900 keep the scale of the tail a double. */
 const LARGEST_LOG2 = 900;
 
 /** Whole digits of big integers that the power n may go without: its error carries y^n < 2^(-reduction n), 6 bits to spare. */
@@ -30,39 +32,28 @@ function droppedBits(n: number, reduction: number): number {
 }
 
 /**
- * From the power k on where 2^(-reduction k)/(r_1 ... r_k) 2^-52 is below half a working ulp, the rest of the series is
- * right with its bracket in doubles: each of its roundings is 2^-53 relative, those of the higher terms carry y, and y is
- * known to 2^-52 there.
+ * Denominators are given by their place; |d_n| >= 1 must not fall. From the power k on where 2^(-reduction k)/d_k 2^-52 is
+ * below half a working ulp, the rest of the series is right with its bracket in doubles: each of its roundings is 2^-53
+ * relative, those of the higher terms carry y, and y is known to 2^-52 there.
  */
-export function shortSeries(
-  working: number,
-  reduction: number,
-  sign: 1 | -1,
-  ratio: (n: number) => number,
-): ShortSeries {
+export function shortSeries(working: number, reduction: number, denominator: (n: number) => bigint): ShortSeries {
+  const log2 = (n: number): number => bitLength(denominator(n)) - 1;
   let first = 1;
-  let log2 = Math.log2(ratio(1));
-  while (reduction * first + log2 + 52 < working + 1) log2 += Math.log2(ratio(++first));
-  const tailBits = 52 + Math.floor(Math.min(log2, LARGEST_LOG2));
+  while (reduction * first + log2(first) + 52 < working + 1) first++;
+  const tailBits = 52 + Math.min(log2(first), LARGEST_LOG2);
   const steps: ShortStep[] = [];
-  let below = 1n;
   for (let n = 0; n < first; n++) {
-    if (n > 0) below *= BigInt(sign * ratio(n));
     const drop = droppedBits(n, reduction);
     const shift = n + 1 < first ? working - droppedBits(n + 1, reduction) : tailBits;
-    const coefficient = (1n << BigInt(working - drop)) / below;
+    const coefficient = (1n << BigInt(working - drop)) / denominator(n);
     steps.unshift({ coefficient, shift: BigInt(shift), drop, down: BigInt(drop) });
   }
-  const tail: number[] = [];
-  for (let n = 1, value = 1; n < first + TAIL_TERMS; n++) {
-    value /= sign * ratio(n);
-    if (n >= first) tail.push(value);
-  }
+  const tail = Array.from({ length: TAIL_TERMS }, (_, k) => 1 / Number(denominator(first + k)));
   return { steps, tail, tailScale: 2 ** tailBits };
 }
 
 /**
- * The series at 0 <= y < 2^-reduction, `rough` the same to 2^-52. Error below 4 ulps: 1 for the last shift, 1/2 for the tail;
+ * The series at |y| < 2^-reduction, `rough` the same to 2^-52. Error below 4 ulps: 1 for the last shift, 1/2 for the tail;
  * step n errs by 3 of its units (shift, coefficient, cut of y), which y^n makes 3/64 ulp or less, for at most 50 steps.
  */
 export function sumShortSeries({ steps, tail, tailScale }: ShortSeries, y: bigint, rough: number): bigint {

@@ -63,12 +63,19 @@ const trigonometricPlans = memoiseBounded(16, (working: number) => {
   };
 });
 
+/** (-1)^n m!. */
+function alternatingFactorial(n: number, m: number): bigint {
+  let product = n % 2 === 0 ? 1n : -1n;
+  for (let k = 2; k <= m; k++) product *= BigInt(k);
+  return product;
+}
+
 /** cos and sin(y)/y in y^2. */
 const trigonometricSeries = memoiseBounded(16, (working: number) => {
   const reduction = 6 * chunkBits(working);
   return {
-    cosine: shortSeries(working, reduction, -1, (n) => (2 * n - 1) * (2 * n)),
-    sine: shortSeries(working, reduction, -1, (n) => 2 * n * (2 * n + 1)),
+    cosine: shortSeries(working, reduction, (n) => alternatingFactorial(n, 2 * n)),
+    sine: shortSeries(working, reduction, (n) => alternatingFactorial(n, 2 * n + 1)),
   };
 });
 
