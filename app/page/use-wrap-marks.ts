@@ -13,9 +13,10 @@ export function useWrapMarks(line: RefObject<HTMLElement | null>, pieces: readon
       const found = [...element.querySelectorAll<HTMLElement>(':scope > [data-piece]')];
       for (const piece of found) delete piece.dataset.begins;
       for (let pass = 0; pass < PASSES; pass += 1) {
-        const begin = found.filter((piece) => {
+        // Pieces of one line overlap in height, however the line is centred. After the equals sign none is wanted.
+        const begin = found.slice(1).filter((piece) => {
           const before = piece.previousElementSibling;
-          return before instanceof HTMLElement && piece.offsetLeft <= before.offsetLeft;
+          return before instanceof HTMLElement && piece.offsetTop >= before.offsetTop + before.offsetHeight;
         });
         const fresh = begin.filter((piece) => piece.dataset.begins === undefined);
         for (const piece of fresh) piece.dataset.begins = '';
