@@ -109,7 +109,7 @@ export interface LogarithmicGrowth {
   /** A polynomial too; the logarithm beside it is the principal one. */
   readonly logarithm: (z: Form, parameters: readonly Form[]) => Form;
   /** A constant without closed form, in doubles; zero where it is absent. */
-  readonly constant?: (parameters: readonly Complex[]) => number;
+  readonly constant?: (parameters: readonly Complex[]) => Complex;
 }
 
 /** How a function is printed. Strings are LaTeX; `argument` comes typeset. */

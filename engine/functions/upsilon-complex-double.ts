@@ -39,6 +39,13 @@ export function complexUpsilonKernel(b: Complex): DoubleKernel {
   };
 }
 
+/** 2 log Gamma_2(Q/2); NaN where it is out of reach. */
+export function complexUpsilonConstant(b: Complex): Complex {
+  const parameter = parameterOfComplex(b);
+  const center = latticeCenter([parameter, inverseParameter(parameter)]);
+  return center === null ? { re: Number.NaN, im: Number.NaN } : scale(center, 2);
+}
+
 function isFarOut(z: DoubleComplex, periods: readonly Complex[], needed: number): boolean {
   return periods.every((p) => {
     const ratio = divide(z, p);

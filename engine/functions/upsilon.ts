@@ -4,7 +4,7 @@ import { upsilonSecondRoute } from './barnes-routes';
 import { asFactor, indexSum, pairOfModes, parenthesised, periodText, realFirst } from './notation';
 import { outsideDomain } from './outside-domain';
 import type { Complex, DoubleKernel, ExactParameter, FunctionAt, Printer, SpecialFunction } from './special-function';
-import { complexUpsilonKernel } from './upsilon-complex-double';
+import { complexUpsilonConstant, complexUpsilonKernel } from './upsilon-complex-double';
 import { upsilonConstant, upsilonKernel } from './upsilon-double';
 import { logUpsilon } from './upsilon-precise';
 
@@ -52,7 +52,7 @@ export const upsilon: SpecialFunction = {
         .mul(logarithmic(z, b as Form))
         .sub(z.mul(z).mul(Form.ratio(3, 2))),
     logarithm: (z, [b]) => logarithmic(z, b as Form),
-    constant: ([b]) => upsilonConstant(b?.re ?? Number.NaN),
+    constant: ([b]) => growthConstant(b as Complex),
   })),
   notations: [
     {
@@ -105,6 +105,11 @@ export const upsilon: SpecialFunction = {
 function doubleError({ re, im }: Complex): number {
   if (im !== 0) return 2e-14;
   return Math.max(re, 1 / re) <= 4 ? 1.2e-14 : 3e-14;
+}
+
+/** K = 2 log Gamma_2(Q/2). */
+function growthConstant(b: Complex): Complex {
+  return b.im === 0 ? { re: upsilonConstant(b.re), im: 0 } : complexUpsilonConstant(b);
 }
 
 function doubleKernel(b: Complex): DoubleKernel {

@@ -58,7 +58,8 @@ function growthOf({ name, parameters, slopes }: AffineEntry, end: 1 | -1): Law |
   const polynomial = coefficientsOf(law.polynomial(ARGUMENT, parameters));
   const logarithm = coefficientsOf(law.logarithm(ARGUMENT, parameters));
   if (polynomial === null || logarithm === null) return null;
-  const constant = { re: (polynomial[0]?.re ?? 0) + (law.constant?.(periods) ?? 0), im: polynomial[0]?.im ?? 0 };
+  const further = law.constant?.(periods) ?? ZERO;
+  const constant = { re: (polynomial[0]?.re ?? 0) + further.re, im: (polynomial[0]?.im ?? 0) + further.im };
   return { about, polynomial: [constant, ...polynomial.slice(1)], logarithm };
 }
 

@@ -76,6 +76,8 @@ function confirmed(
   value: Ball,
   digits: number,
 ): ValueResult['crossCheck'] {
+  // A value known to be zero was not computed.
+  if (value.error === 0n && value.re === 0n && value.im === 0n) return null;
   let route: string | null = null;
   const other = settle((bits) => {
     const second = valueFunctions[word].crossCheck(args, bits);

@@ -17,6 +17,7 @@ const CASES: [string, SpecialFunction, readonly Form[]][] = [
   ['Upsilon at b = 1', functions.upsilon, [Form.one]],
   ['Upsilon at b = 4/5', functions.upsilon, [Form.ratio(4, 5)]],
   ['Upsilon at b = sqrt 2', functions.upsilon, [root(2)]],
+  ['Upsilon at b = 4/5 + i/4', functions.upsilon, [complexForm(0.8, 0.25)]],
 ];
 
 /** log f minus its growth at far/direction + an offset; the offset is none of the symmetry axes. */
@@ -29,9 +30,10 @@ function beyond(declared: SpecialFunction, law: LogarithmicGrowth, parameters: r
     { re: number; im: number },
   ];
   const log = { re: Math.log(Math.hypot(at.re, at.im)), im: Math.atan2(at.im, at.re) };
+  const constant = law.constant?.(parameters.map(double)) ?? { re: 0, im: 0 };
   const growth = {
-    re: polynomial.re + beside.re * log.re - beside.im * log.im + (law.constant?.(parameters.map(double)) ?? 0),
-    im: polynomial.im + beside.re * log.im + beside.im * log.re,
+    re: polynomial.re + beside.re * log.re - beside.im * log.im + constant.re,
+    im: polynomial.im + beside.re * log.im + beside.im * log.re + constant.im,
   };
   return mismatch(logOf(declared, x, parameters), growth);
 }
