@@ -1,44 +1,59 @@
 import { absolute, bitLength, numberFromFixed, shiftRounded } from './fixed';
 import { piFixed } from './fixed-constants';
-import { sinCosWorking } from './fixed-trig';
+import { type ShortSeries, shortSeries, sumShortSeries } from './fixed-short-series';
+import { angleGridBits, sinCosOnGrid, sinCosWorking } from './fixed-trig';
 import { LONG_BITS, workingBits } from './fixed-working';
+import { memoiseBounded } from './memo';
 
-/** Bits of the first guess from Math.atan2. */
-const SEED_BITS = 48;
-
-/** atan u for |u| < 1/4; error below terms + 1 ulps. */
-function inverseTangentSmall(u: bigint, working: number): bigint {
-  const shift = BigInt(working);
-  const square = -(u * u) >> shift;
-  let power = u;
-  let sum = u;
-  for (let odd = 3n; ; odd += 2n) {
-    power = (power * square) >> shift;
-    if (power === 0n || power === -1n) return sum;
-    sum += power / odd;
-  }
+interface ArgumentTables {
+  /** Bits of the first guess: those of the grid of angles, or a third of the working bits. */
+  readonly seed: number;
+  readonly cells: number;
+  readonly shift: bigint;
+  readonly seedShift: bigint;
+  /** atan(u)/u in u^2, for |u| up to the error of the guess. */
+  readonly series: ShortSeries;
 }
 
+const argumentTables = memoiseBounded(24, (working: number): ArgumentTables => {
+  const long = working > LONG_BITS;
+  const seed = long ? workingBits(Math.ceil(working / 3)) : angleGridBits(working);
+  // A long guess errs by 2^6 of its ulps and 3 for its arguments; one on the grid by half of its step and some 2^-50.
+  const reduction = 2 * (long ? seed - 8 : seed);
+  return {
+    seed,
+    cells: 2 ** Math.min(seed, 52),
+    shift: BigInt(working),
+    seedShift: BigInt(working - seed),
+    series: shortSeries(working, reduction, (n) => BigInt(n % 2 === 0 ? 2 * n + 1 : -2 * n - 1)),
+  };
+});
+
 /**
- * Argument of x + i y, both with the same `working` fraction bits and max(|x|, |y|) in [1/2, 2); error below 2^6 working ulps:
- * 3 for the cuts of x and y (next to at least 1/2), 21 for the rotation, 2 for its product, 1 for the quotient, 1 a term of the
- * series and 1, of at most 10.
- * A first guess (doubles, or this function at a third of the bits) is rotated away; the rest is atan of a small quotient.
+ * Argument of x + i y for 0 <= y <= x, both with the same `working` fraction bits and x in [1/2, 2); error below 2^6 working
+ * ulps: 3 for the cuts of x and y, 21 for the rotation (8 on the grid), 2 for its product, 1 for the quotient, and of the
+ * series 4 for itself times u and 2 for its products.
+ * A first guess (a double on the grid where sine and cosine are products of table entries, or this function at a third of
+ * the bits) is rotated away; the rest is atan of a small quotient.
  */
 function argumentWorking(y: bigint, x: bigint, working: number): bigint {
+  const { seed, cells, shift, seedShift, series } = argumentTables(working);
   let guess: bigint;
+  let rotation: { readonly sin: bigint; readonly cos: bigint };
   if (working <= LONG_BITS) {
     const rough = Math.atan2(numberFromFixed(y, working), numberFromFixed(x, working));
-    guess = BigInt(Math.round(rough * 2 ** SEED_BITS)) << BigInt(working - SEED_BITS);
+    const cell = Math.round(rough * cells);
+    guess = BigInt(cell) << seedShift;
+    rotation = sinCosOnGrid(cell, working);
   } else {
-    const third = workingBits(Math.ceil(working / 3));
-    const drop = BigInt(working - third);
-    guess = argumentWorking(y >> drop, x >> drop, third) << drop;
+    guess = argumentWorking(y >> seedShift, x >> seedShift, seed) << seedShift;
+    rotation = sinCosWorking(guess, working);
   }
-  const { sin, cos } = sinCosWorking(guess, working);
-  const along = (x * cos + y * sin) >> BigInt(working);
-  const across = y * cos - x * sin;
-  return guess + inverseTangentSmall(across / along, working);
+  const { sin, cos } = rotation;
+  const along = (x * cos + y * sin) >> shift;
+  const u = (y * cos - x * sin) / along;
+  const square = (u * u) >> shift;
+  return guess + ((u * sumShortSeries(series, square, numberFromFixed(square, working))) >> shift);
 }
 
 /**
@@ -51,10 +66,15 @@ export function atan2Fixed(y: bigint, x: bigint, bits: number): bigint {
     return x > 0n ? 0n : piFixed(bits);
   }
   const working = workingBits(bits);
-  const size = absolute(x) > absolute(y) ? x : y;
-  const drop = bitLength(size) - working;
+  const [along, across] = [absolute(x), absolute(y)];
+  const steep = across > along;
+  const drop = bitLength(steep ? across : along) - working;
   const cut = (value: bigint) => (drop > 0 ? value >> BigInt(drop) : value << BigInt(-drop));
-  return shiftRounded(argumentWorking(cut(y), cut(x), working), working - bits);
+  let angle = steep
+    ? (piFixed(working) >> 1n) - argumentWorking(cut(along), cut(across), working)
+    : argumentWorking(cut(across), cut(along), working);
+  if (x < 0n) angle = piFixed(working) - angle;
+  return shiftRounded(y < 0n ? -angle : angle, working - bits);
 }
 
 /** atan x in (-pi/2, pi/2), both with `bits` fraction bits; |error| <= 1 ulp. */

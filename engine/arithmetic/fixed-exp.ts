@@ -2,9 +2,9 @@ import { numberFromFixed, shiftRounded } from './fixed';
 import { ln2Fixed } from './fixed-constants';
 import { shortSeries, sumShortSeries } from './fixed-short-series';
 import {
-  EXPONENTIAL_PLAN_BITS,
   exponentialChunk,
   exponentialTerms,
+  LONG_BITS,
   planPowers,
   planSeries,
   sumPlan,
@@ -86,7 +86,7 @@ const exponentialSeries = memoiseBounded(16, (working: number) =>
 
 /** e^y for 0 <= y < 2^-(3 chunk), `rough` the same to 2^-52; error below 8 ulps (4 of the short series, 6 of the plan). */
 function exponentialOfRest(y: bigint, rough: number, working: number): bigint {
-  if (working <= EXPONENTIAL_PLAN_BITS) return sumShortSeries(exponentialSeries(working), y, rough);
+  if (working <= LONG_BITS) return sumShortSeries(exponentialSeries(working), y, rough);
   const plan = exponentialPlan(working);
   return sumPlan(plan, planPowers(y, plan.block, working), working);
 }

@@ -2,7 +2,7 @@ import { bitLength, numberFromFixed, shiftRounded } from './fixed';
 import { ln2Fixed } from './fixed-constants';
 import { exponentialOnGrid, exponentialWorking, gridBits } from './fixed-exp';
 import { type ShortSeries, shortSeries, sumShortSeries } from './fixed-short-series';
-import { EXPONENTIAL_PLAN_BITS, workingBits } from './fixed-working';
+import { LONG_BITS, workingBits } from './fixed-working';
 import { memoiseBounded } from './memo';
 
 interface LogarithmTables {
@@ -22,7 +22,7 @@ interface LogarithmTables {
 const EXPONENT_BITS = 44;
 
 const logarithmTables = memoiseBounded(24, (working: number): LogarithmTables => {
-  const long = working > EXPONENTIAL_PLAN_BITS;
+  const long = working > LONG_BITS;
   const seed = long ? workingBits(Math.ceil(working / 3)) : gridBits(working);
   // A long guess errs by 2^6 of its ulps; one on the grid by half of its step, 1 + 2^-20 times, and z by as much.
   const reduction = long ? seed - 8 : seed;
@@ -48,7 +48,7 @@ function logarithmWorking(m: bigint, working: number): bigint {
   const { seed, cells, ln2, one, shift, seedShift, series } = logarithmTables(working);
   let r: bigint;
   let exponential: bigint;
-  if (working <= EXPONENTIAL_PLAN_BITS) {
+  if (working <= LONG_BITS) {
     const guess = Math.LN2 - Math.log(Number(m >> BigInt(working - 62)) * 2 ** -62);
     const cell = Math.max(0, Math.round(guess * cells));
     r = BigInt(cell) << seedShift;

@@ -10,22 +10,19 @@ export function workingBits(bits: number): number {
 }
 
 /** Above this working precision sums run by rectangular splitting, and tables have fewer entries. */
-export const LONG_BITS = 700;
+export const LONG_BITS = 1000;
 
 /** Bits of one table chunk: an argument below 1 is split into three chunks and a rest below 2^-(3 chunk). */
 export function chunkBits(working: number): number {
   return working > LONG_BITS ? 6 : 8;
 }
 
-/** Above this working precision the exponential sums its series by rectangular splitting. */
-export const EXPONENTIAL_PLAN_BITS = 1000;
-
 /**
  * The same for the exponential: its single numbers (not pairs) make larger tables worth their time, up to a millisecond for
  * 3 2^10 products.
  */
 export function exponentialChunk(working: number): number {
-  return working > EXPONENTIAL_PLAN_BITS ? 8 : 10;
+  return working > LONG_BITS ? 8 : 10;
 }
 
 /** One term of a power series with rational coefficients, prepared for summation from the highest power down. */

@@ -25,11 +25,11 @@ import { arbitraryFixed } from '../functions/arbitrary-fixed';
 const FINER = 120;
 const RUNS = { numRuns: 150 };
 
-/** Short and long kernels (the border is at 700 bits), and precisions that fill or just overflow a digit. */
+/** Short and long kernels (the border is at 1000 bits), and precisions that fill or just overflow a digit. */
 const arbitraryBits = fc.oneof(
   fc.integer({ min: 48, max: 420 }),
   fc.integer({ min: 650, max: 1100 }),
-  fc.constantFrom(50, 110, 114, 174, 178, 238, 242, 686, 690, 3000),
+  fc.constantFrom(50, 110, 114, 174, 178, 238, 242, 938, 990, 3000),
 );
 
 type Values = readonly bigint[];
