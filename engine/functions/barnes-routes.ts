@@ -59,7 +59,7 @@ export function upsilonByDoubleGamma(x: FixedComplex, b: ExactParameter, bits: n
 /** Bits from which the midpoint rule for Upsilon, whose nodes grow with their square, is slower than other lattice sums. */
 const MIDPOINT_BITS = 800;
 /** Share by which the far points of the second lattice sum are moved out. */
-const STRETCH = 1.3;
+const STRETCH = 1.15;
 
 /** The integral by the midpoint rule; for many digits, far arguments and complex b the lattice product with other far points. */
 export function upsilonSecondRoute(x: FixedComplex, b: ExactParameter, bits: number): SecondRoute | null {
