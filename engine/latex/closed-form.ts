@@ -37,7 +37,9 @@ function juxtaposed(parts: readonly string[]): string {
   });
   const text = rest.filter((part) => part !== '').join('\\,');
   if (text === '') return coefficient === 1n ? '' : `${coefficient}`;
-  return coefficient === 1n ? text : `${coefficient}${text}`;
+  if (coefficient === 1n) return text;
+  // 2 times 2^{1/4} is not 22^{1/4}.
+  return /^\d/.test(text) ? `${coefficient}\\cdot ${text}` : `${coefficient}${text}`;
 }
 
 function baseLatex(base: Form): string {

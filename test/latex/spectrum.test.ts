@@ -55,6 +55,12 @@ const examples: readonly (readonly [string, readonly string[], string, string])[
     'Z=\\prod_{m,n\\ge 0}\\frac{bm+\\frac{n}{b}+\\frac{b}{2}+\\frac{1}{2b}-ix}{bm+\\frac{n}{b}+\\frac{b}{2}+\\frac{1}{2b}+ix}',
     'Z=s_{b}(x)',
   ],
+  [
+    'a number beside a power of a number',
+    ['boson n^2+a^2 times 2 for n >= 1', 'fermion n+3/2 times 2(n+1)(n+2) for n >= 0'],
+    'Z=\\prod_{n\\ge 1}\\frac{1}{n^{2}+a^2}\\;\\prod_{n\\ge 1}\\left(n+\\frac{1}{2}\\right)^{2n(n+1)}',
+    '{2\\cdot 2^{\\frac{1}{4}}\\,\\sinh \\pi a}',
+  ],
   ['everything', ['fermion n+1 for n >= 0', 'power(-1) n for n >= 1'], 'Z=1', 'Z=1'],
   ['a finite rest', ['fermion n+a for n >= 0', 'power(-1) n+a for n >= 2'], 'Z=a\\;\\left(1+a\\right)', 'Z=a\\,(1+a)'],
   [
