@@ -85,6 +85,11 @@ function buildFar(periods: readonly FixedComplex[], bits: number): BarnesFar {
   const tail: FixedComplex[] = [];
   const log2: number[] = [];
   let gamma = 1n;
+  const real = periods.every(({ im }) => im === 0n);
+  const positive = real && periods.every(({ re }) => re > 0n);
+  // Off the positive axis single coefficients may vanish: every other one for the periods 1 and i.
+  const patience = positive ? 1 : 3;
+  let small = 0;
   for (let j = first; j < coefficients.length; j++) {
     const order = 2 * j - count;
     if (j > first) gamma *= BigInt(order - 2) * BigInt(order - 1);
@@ -95,9 +100,9 @@ function buildFar(periods: readonly FixedComplex[], bits: number): BarnesFar {
     // A modulus cut to whole units is one more at most.
     const size = log2Above((absoluteComplex(grown) >> BigInt(drop)) + 1n, wide);
     log2.push(size);
-    if (size + order * (log2Radius - log2Far) + 1 < -bits - 2) break;
+    small = size + order * (log2Radius - log2Far) + 1 < -bits - 2 ? small + 1 : 0;
+    if (small === patience) break;
   }
-  const real = periods.every(({ im }) => im === 0n);
   return {
     count,
     half: { re: half.re >> up, im: half.im >> up },
@@ -108,7 +113,7 @@ function buildFar(periods: readonly FixedComplex[], bits: number): BarnesFar {
     tail,
     log2,
     realTail: real ? tail.map(({ re }) => re) : null,
-    positive: real && periods.every(({ re }) => re > 0n),
+    positive,
   };
 }
 

@@ -66,7 +66,7 @@ function hyperbolicSeries(v: FixedComplex, bits: number): FixedComplex[] {
 }
 
 function productOf(a: readonly FixedComplex[], b: readonly FixedComplex[], bits: number): FixedComplex[] {
-  if ([...a, ...b].every(({ im }) => im === 0n)) return realProduct(a, b, bits);
+  if (alternates(a) && alternates(b)) return realProduct(a, b, bits);
   const shift = BigInt(bits);
   return a.map((_, k) => {
     let re = 0n;
@@ -79,6 +79,11 @@ function productOf(a: readonly FixedComplex[], b: readonly FixedComplex[], bits:
     }
     return { re: re >> shift, im: im >> shift };
   });
+}
+
+/** True for a real period; an imaginary one has real coefficients, too, but of one sign. */
+function alternates(list: readonly FixedComplex[]): boolean {
+  return list.every(({ re, im }, k) => im === 0n && (k % 2 === 0 ? re >= 0n : re <= 0n));
 }
 
 /**

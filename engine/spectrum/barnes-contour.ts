@@ -14,7 +14,9 @@ import {
 import { piFixed } from '../arithmetic/fixed-constants';
 import { logFixed } from '../arithmetic/fixed-log';
 import { formFixed } from '../arithmetic/form-fixed';
-import type { Form } from '../exact/form';
+import { Form } from '../exact/form';
+import { Gaussian } from '../exact/gaussian';
+import { Rational } from '../exact/rational';
 import { barnesZetaAtZero } from './barnes-polynomial';
 
 /** Half-width below the real axis, in u, of the strip without singularities; above, they start at 1. */
@@ -33,11 +35,53 @@ const MAXIMAL_POINTS = 20_000;
  * from +infinity above the real axis around 0 and back below, Re w_i > 0. The contour is the parabola
  * t = -mu (1 + iu)^2, mu so small that the poles 2 pi i k/w_i stay outside, the rule the midpointless trapezoid in u.
  * Small or oblique x are moved by Gamma_N(x) = Gamma_(N-1)(x|the others) Gamma_N(x + w).
+ * Periods that lie askew are turned first: log Gamma_N(x|w) = log Gamma_N(cx|cw) + zeta_N(0, x|w) log c.
  * The quadrature error falls as exp(-2 pi STRIP/h); it is chosen below 2^-bits but not proved: for comparison only.
- * Null where no period or x fits.
+ * Imaginary parts are right up to multiples of 2 pi. Null where periods span nearly a half plane, and where x is out of
+ * reach.
  */
 export function logBarnesByContour(x: Form, periods: readonly Form[], bits: number): FixedComplex | null {
-  return moved(x, periods, bits, 0);
+  const rough = periods.map(approximate);
+  if (!rough.every((w) => w !== null)) return null;
+  if (rough.every(isRight)) return moved(x, periods, bits, 0);
+  const turn = turnOf(rough);
+  const found =
+    turn &&
+    moved(
+      x.mul(turn),
+      periods.map((w) => w.mul(turn)),
+      bits,
+      0,
+    );
+  const zeta = formFixed(barnesZetaAtZero(x, periods), bits + TURN_GUARD);
+  const log = turn && formFixed(Form.call('log', turn), bits + TURN_GUARD);
+  if (!found || zeta === null || !log) return null;
+  const added = multiplyComplex(zeta, log, bits + TURN_GUARD);
+  const by = BigInt(TURN_GUARD);
+  return addComplex(found, { re: added.re >> by, im: added.im >> by });
+}
+
+const TURN_GUARD = 32;
+
+/** Near enough to the positive axis for the poles to stay outside a parabola of some width. */
+function isRight({ re, im }: Rough): boolean {
+  return re > Math.abs(im) / 4;
+}
+
+/** A number close to 1 in size that turns the middle of the periods to the positive axis; null if that does not help. */
+function turnOf(periods: readonly Rough[]): Form | null {
+  const sum = periods.reduce(
+    (total, { re, im }) => {
+      const size = Math.hypot(re, im);
+      return { re: total.re + re / size, im: total.im + im / size };
+    },
+    { re: 0, im: 0 },
+  );
+  const size = Math.hypot(sum.re, sum.im);
+  const [re, im] = [Math.round((16 * sum.re) / size) / 16, Math.round((-16 * sum.im) / size) / 16];
+  const turned = periods.map((w) => ({ re: w.re * re - w.im * im, im: w.re * im + w.im * re }));
+  if (!(size > 0) || !turned.every(isRight)) return null;
+  return Form.gaussian(Gaussian.of(Rational.of(Math.round(16 * re), 16), Rational.of(Math.round(16 * im), 16)));
 }
 
 function moved(x: Form, periods: readonly Form[], bits: number, steps: number): FixedComplex | null {
@@ -50,7 +94,7 @@ function moved(x: Form, periods: readonly Form[], bits: number, steps: number): 
   }
   const rough = periods.map((w) => approximate(w));
   const place = approximate(x);
-  if (place === null || !rough.every((w) => w !== null && w.re > Math.abs(w.im) / 4)) return null;
+  if (place === null || !rough.every((w) => w !== null)) return null;
   const largest = Math.max(...rough.map((w) => w?.re ?? 0));
   if (place.re >= 0.7 * largest && Math.abs(place.im) <= 1.5 * place.re) return onParabola(x, periods, bits);
   const others = moved(x, periods.slice(0, -1), bits, steps);

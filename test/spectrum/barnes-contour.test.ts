@@ -48,8 +48,30 @@ describe('the contour integral of log Gamma_N', () => {
     );
   });
 
-  test('is refused where a period points to the left', () => {
-    expect(logBarnesByContour(Form.one, [Form.one, Form.i], BITS)).toBeNull();
+  test.each([
+    ['one upwards', [Form.one, Form.i]],
+    ['both upwards', [Form.i.scale(2), Form.i.add(Form.ratio(-1, 3))]],
+    ['downwards', [Form.one.sub(Form.i.scale(5)), Form.ratio(1, 2).sub(Form.i)]],
+  ])('turns periods that lie askew: %s', (_, periods) => {
+    const x = Form.ratio(7, 10).add(Form.i.scale(Rational.of(1, 5)));
+    const contour = logBarnesByContour(x, periods, BITS);
+    const [at, ...fixed] = [x, ...periods].map((form) => formFixed(form, BITS));
+    const steps =
+      at &&
+      logBarnesGamma(
+        at,
+        fixed.flatMap((p) => p ?? []),
+        BITS,
+      );
+    if (!contour || !steps) throw new Error('no value');
+    const turns = numberFromFixed(contour.im - steps.value.im, BITS) / (2 * Math.PI);
+    expect(Math.abs(Number(contour.re - steps.value.re))).toBeLessThan(Number(steps.error) + 2 ** 12);
+    expect(Math.abs(turns - Math.round(turns))).toBeLessThan(1e-15);
+  });
+
+  test('is refused where the periods span nearly a half plane', () => {
+    const far = Form.number(-20).add(Form.i);
+    expect(logBarnesByContour(Form.one, [Form.one, far], BITS)).toBeNull();
   });
 });
 
