@@ -26,6 +26,8 @@ export interface Report {
   readonly spectra: readonly {
     readonly name: string;
     readonly line: number;
+    /** As printed, with the spins of their modes where they are those of a field on S^3. */
+    readonly towers: readonly { readonly kind: string; readonly latex: string; readonly spins: string | null }[];
     readonly latex: Readonly<Record<string, string | null>>;
     readonly refused: Readonly<Record<string, string>>;
     readonly checks: readonly Check[];
@@ -59,7 +61,8 @@ export function report(analysis: Analysis, surroundings: Surroundings): { output
       const card = spectrumCard(analysis, block);
       const views = Object.entries(card.formulas);
       const { line } = analysis.lines.place(block.span.from);
-      return { name: block.name.name, line, ...latexOf(views), checks: card.checks };
+      const towers = card.towers.map(({ kind, latex, spins }) => ({ kind, latex, spins }));
+      return { name: block.name.name, line, towers, ...latexOf(views), checks: card.checks };
     }),
     results: results.map(printable),
     problems: problems(analysis).map(({ line, column, severity, message }) => ({ line, column, severity, message })),

@@ -42,6 +42,21 @@ describe('the shape of the report, as the language describes it', () => {
     const [spectrum] = reported(text).output.spectra ?? [];
     expect(spectrum).toMatchObject({ name: 'dirac', line: 1, checks: expect.any(Array) });
     expect(Object.keys(spectrum?.latex as object)).toEqual(['product', 'unpaired', 'closed']);
+    // Both signs of the Dirac operator: (n/2, (n+1)/2) and ((n+1)/2, n/2), Camporesi and Higuchi, gr-qc/9505009.
+    const [tower] = spectrum?.towers as { spins: string }[];
+    expect(tower?.spins).toBe(
+      '\\left(\\tfrac{n}{2},\\tfrac{n+1}{2}\\right)\\oplus\\left(\\tfrac{n+1}{2},\\tfrac{n}{2}\\right)',
+    );
+  });
+
+  test('pairs of modes stand beside a theory on the round three-sphere, and nowhere else', () => {
+    const [round] = reported(THEORY).output.theories ?? [];
+    expect(round?.pairing).toMatchObject([
+      { from: 'vector', rows: expect.any(Array), unpaired: expect.any(String) },
+      { from: 'q', power: 1, rows: [{ left: 'n+1' }, { left: '-(n+1)' }] },
+    ]);
+    const [squashed] = reported(THEORY.replace('S3', 'S3, b = 5/4')).output.theories ?? [];
+    expect(squashed).not.toHaveProperty('pairing');
   });
 
   test('a form that is refused is null, with the reason beside it', () => {
