@@ -43,7 +43,7 @@ describe('the shape of the report, as the language describes it', () => {
     expect(spectrum).toMatchObject({ name: 'dirac', line: 1, checks: expect.any(Array) });
     expect(Object.keys(spectrum?.latex as object)).toEqual(['product', 'unpaired', 'closed']);
     // Both signs of the Dirac operator: (n/2, (n+1)/2) and ((n+1)/2, n/2), Camporesi and Higuchi, gr-qc/9505009.
-    const [tower] = spectrum?.towers as { spins: string }[];
+    const [tower] = (spectrum?.towers ?? []) as { spins: string }[];
     expect(tower?.spins).toBe(
       '\\left(\\tfrac{n}{2},\\tfrac{n+1}{2}\\right)\\oplus\\left(\\tfrac{n+1}{2},\\tfrac{n}{2}\\right)',
     );
