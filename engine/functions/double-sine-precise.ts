@@ -30,7 +30,7 @@ type Core = (tables: DoubleSineTables, x: FixedComplex, approx: Approximate) => 
  * Method: Re x < 0 by oddness; |Im x| > Q/4 by the functional equation, first with the larger, then with the smaller period, one
  * logarithm each; |Re x| <= Q/4 midpoint rule with residues (double-sine-near-table.ts), else residues alone
  * (double-sine-far-table.ts). Rational b^2: double poles, decided by integers. Nearly rational b^2: guard bits as many as the
- * small divisors have; 'indistinct' if they would exceed 2^13.
+ * small divisors have; 'unreachable' if they would exceed 2^13.
  *
  * Error: discretisation by the bound of double-sine-heights.ts, rounding by counting, argument by the derivative
  * |(log s_b)'| <= pi |Re x| + 2.1 Q in |Im x| <= Q/4 plus that of the shifts. Checked against mpmath (see the test).
@@ -77,7 +77,7 @@ function evaluate(x: FixedComplex, b: ExactPeriod, bits: number, core: Core): Pr
     if (place.kind === 'indistinct') return INDISTINCT;
   }
   const tables = doubleSineTables(b, bits);
-  if (tables === null) return INDISTINCT;
+  if (tables === null) return { kind: 'unreachable', says: 'b squared is too near a rational number with small terms' };
   const negative = x.re < 0n;
   const right = negative ? { re: -x.re, im: -x.im } : x;
   const log = evaluateRight(right, tables, core);

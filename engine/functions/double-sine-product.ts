@@ -91,8 +91,9 @@ function productOver(
   const size = Math.hypot(numberFromFixed(start.re, bits), numberFromFixed(start.im, bits));
   const fall = -2 * numberFromFixed(turn.re, bits);
   if (!(fall > 0)) return null;
-  // |start| |ratio|^n/(1 - |ratio|) below an ulp.
-  const count = Math.ceil((bits * Math.LN2 + Math.log(size + 1) - Math.log(-Math.expm1(-fall))) / fall) + 1;
+  // |start| |ratio|^n/(1 - |ratio|) below an ulp; one factor where |start| is.
+  const needed = bits * Math.LN2 + Math.log(size) - Math.log(-Math.expm1(-fall));
+  const count = Math.max(0, Math.ceil(needed / fall)) + 1;
   if (count > LARGEST_COUNT) return null;
   // Exponents err by their factors' ulps times pi and the other factor, and by pi's ulp times the product.
   const exponentError = 24 * (1 + spread) ** 2;

@@ -80,7 +80,13 @@ function doubleKernel(b: Complex): DoubleKernel {
 function preciseLog(x: FixedComplex, b: ExactParameter, bits: number): PreciseLog {
   const period = periodOfParameter(b);
   if (period !== null) return logDoubleSine(x, period, bits);
-  return (b.approx.re > 0 ? logDoubleSineByProduct(x, b, bits) : null) ?? { kind: 'indistinct' };
+  if (!(b.approx.re > 0)) return { kind: 'unreachable', says: 'the real part of b must be positive' };
+  return (
+    logDoubleSineByProduct(x, b, bits) ?? {
+      kind: 'unreachable',
+      says: 'b squared is too nearly real for its q-products',
+    }
+  );
 }
 
 /** p + q up to which the closed form at b^2 = p/q is quick. */

@@ -107,6 +107,8 @@ interface Walk extends Frame {
   readonly far: FixedComplex[][];
 }
 
+/** Minus the cosine of the widest angle between u and a period: next to 180 degrees no expansion serves. */
+export const WIDEST = 0.95;
 /** Far points lie beyond so many radii, so that the power series falls off. */
 const SERIES_REACH = 1.6;
 
@@ -122,7 +124,7 @@ function isFarOut({ rough, reach, radius }: Frame, level: number, re: number, im
     const ratio = (re * p.re + im * p.im) / norm;
     const size = Math.sqrt((re * re + im * im) / norm);
     const needed = reach + radius / Math.sqrt(norm);
-    if (ratio <= -size / 2 || size * (size + ratio) < 2 * needed * needed) return false;
+    if (ratio <= -WIDEST * size || size * (size + ratio) < 2 * needed * needed) return false;
   }
   return true;
 }

@@ -3,7 +3,7 @@ import { complexDoubleSineKernel } from './double-sine-complex-double';
 import { oddComplexKernelSeries } from './hyperbolic-series';
 import { inverseParameter } from './inverse-parameter';
 import { latticeCenter, latticeLogarithm, parameterOfComplex, TABLE_BITS } from './lattice-kernel-double';
-import { latticeReach } from './lattice-table';
+import { latticeReach, WIDEST } from './lattice-table';
 import { outsideDomain } from './outside-domain';
 import type { Complex, DoubleKernel } from './special-function';
 
@@ -50,7 +50,7 @@ function isFarOut(z: DoubleComplex, periods: readonly Complex[], needed: number)
   return periods.every((p) => {
     const ratio = divide(z, p);
     const size = Math.hypot(ratio.re, ratio.im);
-    return ratio.re > -size / 2 && size * (size + ratio.re) >= 2 * needed * needed;
+    return ratio.re > -WIDEST * size && size * (size + ratio.re) >= 2 * needed * needed;
   });
 }
 

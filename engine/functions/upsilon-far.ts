@@ -13,7 +13,7 @@ import {
 } from '../arithmetic/fixed-complex';
 import { type BarnesSeries, barnesSeries } from './barnes-series';
 import { doubleSine } from './double-sine';
-import { latticeRadius, latticeReach, latticeTable, TOO_MANY_POINTS } from './lattice-table';
+import { latticeRadius, latticeReach, latticeTable, TOO_MANY_POINTS, WIDEST } from './lattice-table';
 import { argumentShare } from './precise-log';
 import type { ExactParameter, PreciseLog } from './special-function';
 
@@ -29,7 +29,7 @@ export function isFarOut(z: FixedComplex, periods: Periods, bits: number): boole
     const ratio = (re * p.re + im * p.im) / norm;
     const size = Math.hypot(re, im) / Math.sqrt(norm);
     // |z/p| cos(arg/2), as for the far points of the table.
-    return ratio > -size / 2 && size * (size + ratio) >= 2 * needed * needed;
+    return ratio > -WIDEST * size && size * (size + ratio) >= 2 * needed * needed;
   });
 }
 
