@@ -2,9 +2,10 @@ import { Form } from '../exact/form';
 import { exactOrder } from '../product/divisor';
 import { FLUX, WEIGHT } from '../product/factor';
 import type { Condition, Finding } from '../theory/checks/condition';
+import { cocharacterLattice, orbitOnLattice } from '../theory/checks/lattice';
 import { groupLatex, nameLatex } from '../theory/checks/words';
 import { gaugeGroups, type Theory } from '../theory/theory';
-import { rootWeights } from '../theory/weights';
+import { rootWeights, type TheoryWeights } from '../theory/weights';
 import type { Sphere, TheoryProduct } from './sphere';
 
 const SOURCE = 'Zeros and poles of the one-loop factors, counted here; common practice, no source.';
@@ -34,8 +35,8 @@ export function wallOrder(sphere: Sphere): Condition {
           product: sphere.multiplet(theory, theory.multiplets[k] as Theory['multiplets'][number]),
         }));
         return roots.flatMap(({ weights }, k): Finding[] => {
-          const { names, rows } = weights.rows(false);
-          const root = rows.subarray(0, names.length);
+          const { rank } = cocharacterLattice(group.group);
+          const root = rowsOf(theory, weights).subarray(0, rank);
           const lead = `On the walls $\\alpha(\\sigma)=0$ of $${groupLatex(group, print)}$`;
           const detail = roots.length === 1 ? group.name : `${group.name} ${k + 1}`;
           const common = { detail, formula: FORMULA, source: SOURCE };
@@ -77,7 +78,7 @@ function orderAlong(
   theory: Theory,
   product: TheoryProduct,
   index: number,
-  root: Float64Array,
+  root: Int32Array,
 ): { readonly order: number; readonly weights: number | null } {
   let order = 0;
   let found = 0;
@@ -86,7 +87,8 @@ function orderAlong(
     // Weights with a part in another group are generic on the wall.
     if (weights === null || part?.group !== index || others.length > 0) continue;
     if (weights.size > WEIGHT_LIMIT) return { order: 0, weights: null };
-    const count = alongRoot(weights.rows(half).rows, root);
+    // Of one of each pair w, -w half as many lie along the root.
+    const count = alongRoot(rowsOf(theory, weights), root) / (half ? 2 : 1);
     if (count === 0) continue;
     found += count;
     const at = [argument, ...parameters].map((form) => onWall(sphere, theory, form));
@@ -103,20 +105,26 @@ function onWall(sphere: Sphere, theory: Theory, form: Form): Form {
   return sphere.geometry(theory).reduce((current, stage) => current.substitute(stage), valued);
 }
 
-/** Rows that are multiples of the root, zero ones left out; entries are small rationals, so that doubles tell. */
-function alongRoot(rows: Float64Array, root: Float64Array): number {
+/** Weights of a single group on its cocharacter lattice, integers row by row; kept by group and orbit. */
+function rowsOf({ groups }: Theory, { parts }: TheoryWeights): Int32Array {
+  const [part] = parts;
+  const group = part && groups[part.group];
+  return group ? orbitOnLattice(group.group, part.orbit, 1) : new Int32Array();
+}
+
+/** Rows that are multiples of the root; zero is no row of an orbit. */
+function alongRoot(rows: Int32Array, root: Int32Array): number {
   const width = root.length;
-  const norm = root.reduce((sum, entry) => sum + entry * entry, 0);
+  const pivot = root.findIndex((entry) => entry !== 0);
+  const lead = root[pivot] as number;
   let count = 0;
   for (let start = 0; start < rows.length; start += width) {
-    let product = 0;
-    let square = 0;
-    for (let k = 0; k < width; k++) {
-      const entry = rows[start + k] as number;
-      product += entry * (root[k] as number);
-      square += entry * entry;
+    const own = rows[start + pivot] as number;
+    let parallel = own !== 0;
+    for (let k = 0; parallel && k < width; k++) {
+      parallel = (rows[start + k] as number) * lead === (root[k] as number) * own;
     }
-    if (square > 0 && Math.abs(product * product - norm * square) <= 1e-9 * norm * square) count++;
+    if (parallel) count++;
   }
   return count;
 }
