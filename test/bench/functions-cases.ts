@@ -10,11 +10,19 @@ import { arbPeer, mpmathPeer, type Peer, pariPeer } from './peers';
 /** Values in one call of a kernel in doubles. */
 export const ARRAY = 10_000;
 
+/** A rational argument; its digits are made once, outside the clock, as those of the peers are. */
 function rational(numerator: number, denominator = 1): ExactParameter {
   const value = Rational.of(numerator, denominator);
+  const digits = new Map<number, FixedComplex>();
   return {
     square: value.mul(value),
-    value: (bits) => ({ re: fixedFromRatio(value.numerator, value.denominator, bits), im: 0n }),
+    value: (bits) => {
+      const known = digits.get(bits);
+      if (known) return known;
+      const made = { re: fixedFromRatio(value.numerator, value.denominator, bits), im: 0n };
+      digits.set(bits, made);
+      return made;
+    },
     approx: { re: value.toNumber(), im: 0 },
   };
 }
@@ -82,8 +90,8 @@ export interface CasePeer {
   readonly most: number;
 }
 
-function mpmath(what: string, expression: string, most = 200): CasePeer {
-  return { peer: mpmathPeer(`mpmath ${what}`, PRELUDE, expression), most };
+function mpmath(what: string, expression: string, most = 200, setup = ''): CasePeer {
+  return { peer: mpmathPeer(`mpmath ${what}`, PRELUDE, expression, setup), most };
 }
 
 function pari(what: string, expression: string, most = 200): CasePeer {
@@ -97,23 +105,25 @@ function arb(word: string, re: ExactParameter, im: ExactParameter = rational(0))
 
 const THIRTEEN = rational(13, 10);
 const TWENTY_ONE = rational(21, 10);
+const POINT = complexArgument(THIRTEEN, TWENTY_ONE);
+const SEVEN_THIRDS = rational(7, 3);
 
 export const PRECISE: readonly PreciseCase[] = [
   {
     name: 'log Gamma, complex z',
-    compute: (bits) => log('gamma', [complexArgument(THIRTEEN, TWENTY_ONE)], bits),
+    compute: (bits) => log('gamma', [POINT], bits),
     peers: [
-      mpmath('loggamma', 'mp.loggamma(mp.mpc(mp.mpf(13)/10, mp.mpf(21)/10))'),
+      mpmath('loggamma', 'mp.loggamma(z)', 200, 'z = mp.mpc(mp.mpf(13)/10, mp.mpf(21)/10)'),
       arb('log-gamma', THIRTEEN, TWENTY_ONE),
       pari('lngamma', 'lngamma(13/10 + 21/10*I)'),
     ],
   },
   {
     name: 'log Gamma, real z',
-    compute: (bits) => log('gamma', [rational(7, 3)], bits),
+    compute: (bits) => log('gamma', [SEVEN_THIRDS], bits),
     peers: [
-      mpmath('loggamma', 'mp.loggamma(mp.mpf(7)/3)'),
-      arb('log-gamma', rational(7, 3)),
+      mpmath('loggamma', 'mp.loggamma(z)', 200, 'z = mp.mpf(7)/3'),
+      arb('log-gamma', SEVEN_THIRDS),
       pari('lngamma', 'lngamma(7/3)'),
     ],
   },
@@ -147,7 +157,7 @@ export const PRECISE: readonly PreciseCase[] = [
   },
   {
     name: 'log Gamma_2(z | 1, 1)',
-    compute: (bits) => value('barnesgamma', [rational(7, 3), rational(1), rational(1)], bits),
+    compute: (bits) => value('barnesgamma', [SEVEN_THIRDS, rational(1), rational(1)], bits),
     peers: [
       mpmath('barnesg', 'mp.zeta(-1, 1, 1) + (mp.mpf(7)/3 - 1)/2*mp.log(2*mp.pi) - mp.log(mp.barnesg(mp.mpf(7)/3))'),
       arb('double-gamma', rational(7, 3)),
@@ -179,10 +189,10 @@ export const PRECISE: readonly PreciseCase[] = [
 /** What the table of growth with the digits shows. */
 export const GROWTH: readonly (readonly [string, (bits: number) => unknown])[] = [
   ['exp', (bits) => expFixed(fixedFromRatio(1234567n, 987654n, bits), bits)],
-  ['log Gamma, complex z', (bits) => log('gamma', [complexArgument(THIRTEEN, TWENTY_ONE)], bits)],
+  ['log Gamma, complex z', (bits) => log('gamma', [POINT], bits)],
   ['dilogarithm', (bits) => value('dilog', [complexArgument(rational(2, 5), rational(7, 10))], bits)],
   ["zeta'(-1, 7/10)", (bits) => value('zetaprime', [rational(1), rational(7, 10)], bits)],
-  ['log Gamma_2(7/3 | 1, 1)', (bits) => value('barnesgamma', [rational(7, 3), rational(1), rational(1)], bits)],
+  ['log Gamma_2(7/3 | 1, 1)', (bits) => value('barnesgamma', [SEVEN_THIRDS, rational(1), rational(1)], bits)],
   [
     'log s_b, complex x',
     (bits) => log('doubleSine', [complexArgument(rational(3, 10), rational(1, 5)), GENERIC], bits),

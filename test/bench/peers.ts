@@ -46,8 +46,11 @@ function answerOf(output: string | null): PeerAnswer | null {
   return { microseconds: Number(words[0]), value: { re: a, im: b }, reference: { re: c, im: d } };
 }
 
-/** An expression in the names of `prelude`, evaluated by mpmath to the digits asked for and to 20 more. */
-export function mpmathPeer(name: string, prelude: string, expression: string): Peer {
+/**
+ * An expression in the names of `prelude` and of `setup` (run once at each precision, outside the clock), evaluated by mpmath
+ * to the digits asked for and to 20 more.
+ */
+export function mpmathPeer(name: string, prelude: string, expression: string, setup = ''): Peer {
   return {
     name,
     ask: (digits, bits) =>
@@ -65,9 +68,11 @@ def clock(f):
         count *= 2
 f = lambda: ${expression}
 mp.mp.dps = ${digits}
+${setup}
 own = f()
 passed = clock(f)
 mp.mp.dps = ${digits + 20}
+${setup}
 reference = f()
 mp.mp.prec += 100
 print(passed, *[int(mp.nint(mp.ldexp(part(v), ${bits + EXTRA}))) for v in (own, reference) for part in (mp.re, mp.im)])
