@@ -67,6 +67,9 @@ export function latticeRadius(size: number, total: number): number {
 }
 
 const tables = memoiseByKey<LatticeTable | null>(24);
+/** Tables with more points than this take megabytes each, and few are kept. */
+const MANY_POINTS = 30_000;
+const largeTables = memoiseByKey<LatticeTable | null>(4);
 
 /**
  * The table for periods w with positive real parts (or rotated so), |z| <= `radius`, right to `bits` bits; null where too
@@ -85,11 +88,16 @@ export function latticeTable(
   const volume = sizes.reduce((sum, size) => sum + Math.max(0, Math.log2(out / size)), 0);
   const working = bits + 32 * Math.ceil((volume + Math.log2(Math.log2(out + 2) + 2) + 34) / 32);
   const exact = periods.map((w) => w.value(working));
-  return tables([bits, radius, stretch, ...exact.flatMap(({ re, im }) => [re, im])].join('|'), () => {
-    const order = sizes.map((_, k) => k).sort((a, b) => (sizes[b] as number) - (sizes[a] as number));
-    const pick = <T>(list: readonly T[]): T[] => order.map((k) => list[k] as T);
-    return build({ periods: pick(exact), rough: pick(approx), reach, radius, bits: working });
-  });
+  // Points of a simplex with edges `out`.
+  const many = sizes.reduce((count, size, k) => (count * out) / (size * (k + 1)), 1) > MANY_POINTS;
+  return (many ? largeTables : tables)(
+    [bits, radius, stretch, ...exact.flatMap(({ re, im }) => [re, im])].join('|'),
+    () => {
+      const order = sizes.map((_, k) => k).sort((a, b) => (sizes[b] as number) - (sizes[a] as number));
+      const pick = <T>(list: readonly T[]): T[] => order.map((k) => list[k] as T);
+      return build({ periods: pick(exact), rough: pick(approx), reach, radius, bits: working });
+    },
+  );
 }
 
 interface Frame {
