@@ -40,12 +40,18 @@ const pairing = memoiseBounded(64, (key: number): Pairing => {
   return { pairs, groups, left: pairs % 2 === 1 ? BigInt(constant(pairs - 1)) << unit : null };
 });
 
+/** bits, bits + 1, ... as big integers, which are dear to make. */
+const shiftsOf = memoiseBounded(16, (bits: number): readonly bigint[] =>
+  Array.from({ length: 64 }, (_, grown) => BigInt(bits + grown)),
+);
+
 /**
  * A product of numbers as mantissa 2^exponent, |mantissa| about 1, with the sum of their principal arguments in doubles
  * (off by far less than pi for 10^6 factors) and its error, relative, in units of 2^-bits.
  */
 export class RisingProduct {
   private readonly bits: number;
+  private readonly shifts: readonly bigint[];
   private re: bigint;
   private im = 0n;
   private exponent = 0;
@@ -56,6 +62,7 @@ export class RisingProduct {
 
   constructor(bits: number) {
     this.bits = bits;
+    this.shifts = shiftsOf(bits);
     this.re = 1n << BigInt(bits);
   }
 
@@ -84,7 +91,7 @@ export class RisingProduct {
   private multiplyPairs(z: FixedComplex, rough: DoubleComplex, n: number): void {
     const { bits } = this;
     const unit = BigInt(bits);
-    const norm = (k: number): number => (rough.re + k) ** 2 + rough.im ** 2;
+    const norm = (k: number): number => (rough.re + k) * (rough.re + k) + rough.im * rough.im;
     const { pairs, groups, left } = pairing(n * PRECISIONS + bits);
     if (n % 2 === 1) this.multiply({ re: z.re + (BigInt(pairs) << unit), im: z.im }, Math.sqrt(norm(pairs)), 0);
     if (pairs === 0) return;
@@ -95,13 +102,15 @@ export class RisingProduct {
     // w errs by up to sqrt 2 units, its square by twice |w| that, and sqrt 2 for its own cut.
     const wError = 1.42;
     const squareError = 2.84 * Math.sqrt(norm(0) * norm(n - 1)) + 3;
-    groups.forEach(({ middle, rest, sum }, i) => {
-      const [k, last] = [2 * i, n - 1 - 2 * i];
+    for (let i = 0; i < groups.length; i++) {
+      const { middle, rest, sum } = groups[i] as Group;
+      const k = 2 * i;
+      const last = n - 1 - k;
       const re = square.re + middle * w.re + rest;
       const im = real ? 0n : square.im + middle * w.im;
       const size = Math.sqrt(norm(k) * norm(last) * norm(k + 1) * norm(last - 1));
       this.multiply({ re, im }, size, squareError + sum * wError);
-    });
+    }
     if (left !== null) {
       const k = pairs - 1;
       this.multiply({ re: w.re + left, im: w.im }, Math.sqrt(norm(k) * norm(n - 1 - k)), wError);
@@ -112,7 +121,7 @@ export class RisingProduct {
   private multiply(z: FixedComplex, modulus: number, error: number): void {
     const log2 = this.log2Size + Math.log2(modulus);
     const grown = Math.round(log2);
-    const shift = BigInt(this.bits + grown);
+    const shift = this.shifts[grown] ?? BigInt(this.bits + grown);
     if (this.im === 0n && z.im === 0n) {
       this.re = (this.re * z.re) >> shift;
     } else {
