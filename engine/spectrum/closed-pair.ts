@@ -18,12 +18,16 @@ export interface Ladder {
   readonly multiplicity: Polynomial;
 }
 
+/** Whole steps by which starts may be moved, each a factor of its own in front. */
+const MOST_STEPS = 1000;
+
 /**
  * Two ladders whose starts add up to an integer and whose multiplicities are one polynomial on the whole lattice
  * start + Z: a sine, one multiple sine, or polylogarithms (reflection of zeta'(-k, x), Adamchik 1998). False, and
- * nothing added, where they are not.
+ * nothing added, where they are not, or start so far out that a closed form would be mostly single factors.
  */
 export function addPair(sum: ClosedSum, one: Ladder, other: Ladder): boolean {
+  if ([one, other].some(({ start }) => Math.abs(rationalPart(start).toNumber()) > MOST_STEPS)) return false;
   const m = shiftPolynomial(one.multiplicity, one.start.neg()).map(reduceRoots);
   const n = shiftPolynomial(other.multiplicity, other.start.neg()).map(reduceRoots);
   const length = Math.max(m.length, n.length);
@@ -93,10 +97,13 @@ function upper(a: Form, b: Form): Form {
   return imaginary !== undefined && imaginary.coefficient.im.sign() < 0 ? b : a;
 }
 
+function rationalPart(form: Form): Rational {
+  return form.terms.find(({ factors }) => factors.length === 0)?.coefficient.re ?? Rational.zero;
+}
+
 /** The form with its rational part reduced to [0, 1). */
 function fractionalPart(form: Form): Form {
-  const rational = form.terms.find(({ factors }) => factors.length === 0)?.coefficient.re ?? Rational.zero;
-  return form.sub(Form.number(Rational.of(rational.floor())));
+  return form.sub(Form.number(Rational.of(rationalPart(form).floor())));
 }
 
 function integerOf(form: Form): number {
@@ -129,7 +136,7 @@ function addReflection(sum: ClosedSum, weight: Form, k: number, x: Form): void {
 
 /** (2 sin pi x)^power, hyperbolic where x is a half-integer plus i times something real. */
 function addSine(sum: ClosedSum, x: Form, power: Form): void {
-  const rational = x.terms.find(({ factors }) => factors.length === 0)?.coefficient.re ?? Rational.zero;
+  const rational = rationalPart(x);
   const rest = x.sub(Form.number(rational));
   const imaginary = !rest.isZero() && rest.terms.every(({ coefficient: c }) => c.re.isZero());
   if (!imaginary || rational.denominator > 2n) {

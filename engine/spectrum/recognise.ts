@@ -1,4 +1,4 @@
-import { Form } from '../exact/form';
+import { Form, FormTooLargeError } from '../exact/form';
 import { Rational } from '../exact/rational';
 import { type ClosedForm, ClosedSum } from './closed-form';
 import { addPair, type Ladder } from './closed-pair';
@@ -88,8 +88,15 @@ function rootOf(x: Form): Form {
   return Form.call('sqrt', x);
 }
 
+/** Most single factors that a closed form writes out. */
+const MOST_WRITTEN = 1000;
+/** Whole steps from 1 or 1/2 up to which a start is written by logarithms; functions keep starts beyond. */
+const MOST_STEPS = 64;
+
 /** Finite runs and vanishing starts as numbers, the endless rest as a ladder. */
 function readStretch(sum: ClosedSum, shift: Form, { from, to, multiplicity }: Stretch): Ladder | null {
+  const last = to ?? Math.floor(-(shift.toRational()?.toNumber() ?? Number.POSITIVE_INFINITY));
+  if (last - from >= MOST_WRITTEN) throw new FormTooLargeError(last - from + 1);
   const add = (nu: number): void =>
     sum.number(shift.add(Form.number(nu)), evaluatePolynomial(multiplicity, Form.number(nu)));
   if (to !== null) {
@@ -109,7 +116,7 @@ function addLadders(sum: ClosedSum, ladders: readonly Ladder[]): void {
   const open: Ladder[] = [];
   for (const ladder of ladders) {
     const start = ladder.start.toRational();
-    if (start !== null && start.denominator <= 2n) {
+    if (start !== null && start.denominator <= 2n && start.compare(Rational.of(MOST_STEPS)) <= 0) {
       addRational(sum, shiftPolynomial(ladder.multiplicity, ladder.start.neg()), start);
     } else open.push(ladder);
   }

@@ -119,6 +119,14 @@ describe('formulas of spectra', () => {
     ]);
   });
 
+  test('what starts far out keeps its start inside a function', () => {
+    // The shift of Gamma by whole steps (DLMF 5.5.1) would write each step out.
+    const far = latexOf(pieces(['power(1) n+1/2 for n >= 100000']), 'closed');
+    expect(far).toBe('Z=\\frac{\\sqrt{\\pi}\\,\\sqrt{2}}{\\Gamma\\left(\\frac{200001}{2}\\right)}');
+    expect(latexOf(pieces(['power(1) n^2+n+5 for n >= 100000']), 'closed')).toContain('\\frac{200001}{2}');
+    expect(latexOf(pieces(['power(1) n-20000+1/3 for n >= 0']), 'closed')).toBe('spectrum-too-large');
+  });
+
   test('an index letter is none of the parameters', () => {
     expect(latexOf(pieces(['power(1) k+n for k >= 0']), 'unpaired')).toBe('Z=\\prod_{m\\ge 0}\\left(m+n\\right)');
   });
