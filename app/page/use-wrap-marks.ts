@@ -3,7 +3,10 @@ import { type RefObject, useLayoutEffect } from 'react';
 /** A sign of multiplication may push the last piece of its line to the next, which then wants one too. */
 const PASSES = 3;
 
-/** Marks the pieces that begin a line, so that a broken product is printed with a sign of multiplication there. */
+/**
+ * Marks the pieces that begin a line, so that a broken product is printed with a sign of multiplication there, and lets
+ * the keyboard reach those that have to be scrolled.
+ */
 export function useWrapMarks(line: RefObject<HTMLElement | null>, pieces: readonly unknown[]): void {
   // biome-ignore lint/correctness/useExhaustiveDependencies: other pieces break at other places
   useLayoutEffect(() => {
@@ -21,6 +24,11 @@ export function useWrapMarks(line: RefObject<HTMLElement | null>, pieces: readon
         const fresh = begin.filter((piece) => piece.dataset.begins === undefined);
         for (const piece of fresh) piece.dataset.begins = '';
         if (fresh.length === 0) break;
+      }
+      for (const piece of found) {
+        const reached = piece.scrollWidth > piece.clientWidth && piece.querySelector('button') === null;
+        if (reached) piece.tabIndex = 0;
+        else piece.removeAttribute('tabindex');
       }
     };
     const observer = new ResizeObserver(mark);
