@@ -15,9 +15,6 @@ export interface EngineConnection {
   readonly onCrash: (callback: () => void) => void;
 }
 
-/** Kinds of calls that overtake each other: of each kind only the latest answer counts. */
-type Kind = 'outline' | 'plot' | 'hover';
-
 /** A call that takes longer than this has the worker replaced: nothing that a keystroke asks for needs as long. */
 const STUCK_AFTER_MILLISECONDS = 20_000;
 /** What is stopped ends by itself, between two function values, and keeps its tables; after this long it is ended. */
@@ -32,20 +29,24 @@ export function createEngineClient(connect: () => EngineConnection = connectWork
   const restarts = new Set<() => void>();
   const quick = new Channel(connect, restarts);
   const slow = new Channel(connect, restarts);
-  const latest: Record<Kind, number> = { outline: 0, plot: 0, hover: 0 };
-  /** Runs a call of which only the latest counts; an overtaken one answers null. */
-  const newest = async <T>(kind: Kind, call: (api: Remote<EngineApi>) => Promise<T>): Promise<T | null> => {
-    latest[kind] += 1;
-    const own = latest[kind];
-    const answer = await quick.call(call, STUCK_AFTER_MILLISECONDS);
-    return own === latest[kind] ? answer : null;
+  const latest = new Map<string, symbol>();
+  /** Runs a call of which, among those about the same thing, only the latest counts; an overtaken one answers null. */
+  const newest = async <T>(about: string, call: (api: Remote<EngineApi>) => Promise<T>): Promise<T | null> => {
+    const own = Symbol(about);
+    latest.set(about, own);
+    try {
+      const answer = await quick.call(call, STUCK_AFTER_MILLISECONDS);
+      return latest.get(about) === own ? answer : null;
+    } finally {
+      if (latest.get(about) === own) latest.delete(about);
+    }
   };
   // Requests run one after the other: a queue, so that stopping one never ends another's work unasked.
   let queue: Promise<unknown> = Promise.resolve();
   return {
     outline: (text, options) => newest('outline', (api) => api.outline(text, options.notation)),
     plotFast: (text, key, overrides) =>
-      newest<PlotResult | FailureResult | null>('plot', async (api) => api.plotFast(text, key, overrides)),
+      newest<PlotResult | FailureResult | null>(`plot ${key}`, async (api) => api.plotFast(text, key, overrides)),
     hover: (text, offset) => newest('hover', (api) => api.hover(text, offset)),
     run: (text, key, _revision, onProgress, signal) => {
       const stopped = new Promise<null>((resolve) => {

@@ -51,7 +51,7 @@ export interface EngineClient {
     onProgress: (progress: Progress) => void,
     signal: AbortSignal,
   ): Promise<Result | null>;
-  /** A curve while a slider moves: parameters take the given values, the text stays; the latest call wins. */
+  /** A curve while a slider moves: parameters take the given values, the text stays; the latest call of a request wins. */
   plotFast(
     text: string,
     requestKey: string,

@@ -84,6 +84,12 @@ describe('late answers are dropped', () => {
     expect(await help).toBe('help');
   });
 
+  test('two plots that follow one slider do not overtake each other', async () => {
+    const { client } = bench(() => ({ plotFast: async (_text: string, key: string) => settle().then(() => key) }));
+    const answers = ['one', 'two', 'one'].map((key) => client.plotFast(PLOT, key, { a: 2 }, 1));
+    expect(await Promise.all(answers)).toEqual([null, 'two', 'one']);
+  });
+
   test('an answer that came before the next call was made is kept', async () => {
     const { client } = bench(() => ({ outline: (text: string) => text }));
     expect(await client.outline('one', options, 1)).toBe('one');
