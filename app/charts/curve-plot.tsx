@@ -8,6 +8,7 @@ import { CurveReadout } from './curve-readout';
 import { type Domain, union, verticalDomain } from './domain';
 import { Legend } from './legend';
 import { asymptoteColour, lineStyle } from './line-styles';
+import { markWord, markWords } from './mark-words';
 import { symbolText } from './symbol-text';
 import { useWidth } from './use-width';
 
@@ -124,24 +125,18 @@ interface MarksProps {
   readonly domain: Domain;
 }
 
-/** With more marks than this their words would run into one another; the shapes and the list below remain. */
-const NAMED = 6;
-
 /** Zeros as rings on the axis, poles as crosses above their line; both with their word. */
 function Marks({ marks, x, y, frame, domain }: MarksProps) {
   const zeroAt = domain.from <= 0 && domain.to >= 0 ? y(0) : frame.bottom;
-  const places = new Set(marks.map((mark) => mark.x)).size;
+  const words = markWords(marks, x);
   return marks.map((mark, index) => {
     const at = x(mark.x);
-    const order = mark.order > 1 ? ` of order ${mark.order}` : '';
-    const named = marks.findIndex((other) => other.kind === mark.kind && other.x === mark.x) === index;
-    const word = named && places <= NAMED ? mark.kind + order : '';
+    const word = words[index];
     const style = { stroke: lineStyle(mark.series).colour };
     return (
       <g key={`${mark.kind} ${mark.series} ${mark.x}`} className={styles.mark}>
         <title>
-          {mark.kind}
-          {order} at {mark.x}
+          {markWord(mark)} at {mark.x}
         </title>
         {mark.kind === 'zero' ? (
           <>
