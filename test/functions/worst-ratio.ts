@@ -38,7 +38,7 @@ interface Stated {
   readonly error: bigint;
 }
 
-/** |value - finer|/(error + 1/2) in units of 2^-bits; `finer` has twice the bits. Logarithms modulo 2 pi i. */
+/** |value - finer|/error in units of 2^-bits; `finer` has twice the bits. Logarithms modulo 2 pi i. */
 function share(value: Stated, finer: Stated, bits: number, modulo: boolean): number {
   let im = (value.im << BigInt(bits)) - finer.im;
   if (modulo) {
@@ -47,7 +47,7 @@ function share(value: Stated, finer: Stated, bits: number, modulo: boolean): num
   }
   const re = (value.re << BigInt(bits)) - finer.re;
   const off = Math.hypot(numberFromFixed(re, bits), numberFromFixed(im, bits));
-  return off / (Number(value.error) + 0.5);
+  return off === 0 ? 0 : off / Number(value.error);
 }
 
 /** A function that is a value, with `bits`, against itself with twice as many. */
