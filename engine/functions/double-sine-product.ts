@@ -25,6 +25,9 @@ const LARGEST_COUNT = 20_000;
 
 const GUARD = 40;
 
+/** Bits of the largest exponential: sizes of factors are kept in doubles, which end at 2^1024. */
+const MOST_GROWTH = 900;
+
 /**
  * log s_b(x) for complex b by the q-products, for Im b^2 > 0 (else b and 1/b change places):
  *   s_b(x) = e^(-(i pi/2)(x^2 + (b^2 + b^-2)/12)) prod_{n>=0} (1 + e^(i pi b^2 (2n+1)) e^(2 pi b x)) / (1 + e^(-i pi (2n+1)/b^2) e^(2 pi x/b)),
@@ -40,7 +43,11 @@ export function logDoubleSineByProduct(x: FixedComplex, b: ComplexPeriod, bits: 
   const modulus = Math.hypot(b.approx.re, b.approx.im);
   const largest = Math.max(modulus, 1 / modulus);
   // |e^(2 pi b x)| may be large: its bits are lost where the product with powers of q comes back to 1.
-  const precision = bits + GUARD + Math.ceil(9.1 * size * largest) + 2 * Math.ceil(Math.log2(2 + size));
+  const growth = exponentBits({ re: numberFromFixed(x.re, bits), im: numberFromFixed(x.im, bits) }, b.approx);
+  if (!(growth <= MOST_GROWTH)) {
+    return { kind: 'unreachable', says: 'the argument lies too far out for the q-products of s_b' };
+  }
+  const precision = bits + GUARD + Math.ceil(growth) + 2 * Math.ceil(Math.log2(2 + size));
   const outer = b.value(precision + 64);
   const drop = 64;
   const given = { re: shiftRounded(outer.re, drop), im: shiftRounded(outer.im, drop) };
@@ -71,6 +78,14 @@ export function logDoubleSineByProduct(x: FixedComplex, b: ComplexPeriod, bits: 
     im: sign * shiftRounded(im, precision - bits),
     error: BigInt(Math.ceil(rounding * 2 ** (bits - precision) + Math.SQRT2 * slope + 2)),
   };
+}
+
+/** log2 of the larger of |e^(2 pi b y)| and |e^(2 pi y/b)|, at least 0, for the one y of x and -x with Re y <= 0. */
+function exponentBits(x: ComplexPeriod['approx'], b: ComplexPeriod['approx']): number {
+  const sign = x.re > 0 ? -1 : 1;
+  const direct = sign * (b.re * x.re - b.im * x.im);
+  const inverse = (sign * (b.re * x.re + b.im * x.im)) / (b.re * b.re + b.im * b.im);
+  return (2 * Math.PI * Math.max(0, direct, inverse)) / Math.LN2;
 }
 
 /** sum_n log(1 + e^(sign i pi beta^2 (2n+1)) e^(2 pi beta x)), |e^(sign i pi beta^2)| < 1; `spread` bounds |x| and |beta|. */

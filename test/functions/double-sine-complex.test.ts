@@ -10,6 +10,7 @@ import { functions } from '../../engine/functions/table';
 import { exactParameter, fixedComplex, parameterOfDouble } from './fixed-text';
 import { kernelValue } from './kernel-value';
 import { mismatch } from './law-checks';
+import { complexOfDoubles } from './random-points';
 
 const PERIODS: readonly Complex[] = [
   { re: 0.9, im: 0.3 },
@@ -76,5 +77,18 @@ describe('precise tier', () => {
     expect(sharedParameter(parameter(), bits)).toBe(one);
     expect(sharedParameter(parameterOfDouble(1.5), bits)).not.toBe(one);
     expect(functions.doubleSine.precise(x, [parameter()], bits)).toEqual(first);
+  });
+
+  test('far out at complex b there is a value or a refusal, never an exception', () => {
+    const bits = 70;
+    const kinds = [0.3, 1, 4].flatMap((re) =>
+      [1, 30, 300, 3000].flatMap((size) =>
+        [0, 1, 2, 3, 4, 5].map((turn) => {
+          const x = fixedComplex(size * Math.cos(turn), size * Math.sin(turn), bits);
+          return functions.doubleSine.precise(x, [complexOfDoubles(re, re / 3)], bits).kind;
+        }),
+      ),
+    );
+    expect(new Set(kinds)).toEqual(new Set(['value', 'unreachable']));
   });
 });
